@@ -1,0 +1,103 @@
+import { eq, sql } from 'drizzle-orm';
+import type { Db, PooledDb } from '#db/client.ts';
+import { record } from '#db/schema/record.ts';
+import { study } from '#db/schema/study.ts';
+import { AppError, notFound } from '#server/errors.ts';
+import type { Member } from '#server/member.ts';
+
+/** One line of the record. `from` is null for what was made, `to` for what was removed. */
+export interface RecordEntry {
+  object: string;
+  objectId: string;
+  action: string;
+  from?: unknown;
+  to?: unknown;
+}
+
+/** Taken before numbering record lines, so that their numbers appear in the order of commits. */
+const RECORD_LOCK = 20_310_401;
+const ENTRIES_A_STATEMENT = 2_000;
+
+/** Writes lines of the record within the change's transaction. */
+export async function writeRecord(
+  tx: Db,
+  by: { studyId: string | null; userId: string | null; revision: number | null },
+  entries: readonly RecordEntry[],
+): Promise<void> {
+  if (entries.length === 0) return;
+  await tx.execute(sql`select pg_advisory_xact_lock(${RECORD_LOCK})`);
+  for (let i = 0; i < entries.length; i += ENTRIES_A_STATEMENT)
+    await tx.insert(record).values(
+      entries.slice(i, i + ENTRIES_A_STATEMENT).map((e) => ({
+        ...by,
+        object: e.object,
+        objectId: e.objectId,
+        action: e.action,
+        from: e.from ?? null,
+        to: e.to ?? null,
+      })),
+    );
+}
+
+export type StudyRow = typeof study.$inferSelect;
+
+/** What a change touches: inputs (locked in review, move the revision), the study's weights (the same), or neither. */
+export type ChangeKind = 'inputs' | 'weights' | 'apart';
+
+interface Change<T> {
+  result: T;
+  entries: readonly RecordEntry[];
+}
+
+function refuseLocked(row: StudyRow, kind: ChangeKind): void {
+  if (row.archivedAt)
+    throw new AppError('study-archived', 'The study is archived. Restore it before you change it.', {
+      current: { archivedAt: row.archivedAt.toISOString() },
+    });
+  if (kind !== 'apart' && row.state === 'in-review')
+    throw new AppError(
+      'study-locked',
+      'The study is in review: its inputs are locked. Nothing was changed.',
+      {
+        current: { state: row.state },
+      },
+    );
+}
+
+/**
+ * The one way to change a study: locks its row, refuses what its state refuses, runs the change, moves the
+ * revision and writes the record, all in one transaction. A change that writes no record line moves nothing.
+ *
+ * @param allowArchived for restoring an archived study alone
+ * @throws AppError 'not-found' · 'study-archived' · 'study-locked' · 'forbidden'
+ */
+export async function changeStudy<T>(
+  db: PooledDb,
+  { member, kind, allowArchived = false }: { member: Member; kind: ChangeKind; allowArchived?: boolean },
+  change: (tx: Db, row: StudyRow) => Promise<Change<T>>,
+): Promise<T & { revision: number }> {
+  return db.transaction(async (tx) => {
+    const [row] = await tx.select().from(study).where(eq(study.id, member.studyId)).for('update');
+    if (!row) throw notFound();
+    if (!(allowArchived && row.archivedAt)) refuseLocked(row, kind);
+    if (row.state === 'baselined' && kind !== 'apart' && member.role !== 'lead')
+      throw new AppError(
+        'forbidden',
+        'After a baseline the lead makes the next change. Nothing was changed.',
+      );
+    const { result, entries } = await change(tx, row);
+    const moves = kind !== 'apart' && entries.length > 0;
+    const revision = row.revision + (moves ? 1 : 0);
+    if (entries.length > 0)
+      await tx
+        .update(study)
+        .set({
+          revision,
+          updatedAt: sql`now()`,
+          ...(moves ? { savedAt: sql`now()`, state: 'draft' as const } : {}),
+        })
+        .where(eq(study.id, row.id));
+    await writeRecord(tx, { studyId: row.id, userId: member.userId, revision }, entries);
+    return { ...result, revision };
+  });
+}
