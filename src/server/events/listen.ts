@@ -35,7 +35,7 @@ async function listen(): Promise<void> {
     const parsed = Announcement.safeParse(JSON.parse(payload ?? 'null'));
     if (parsed.success) bus.emit('announcement', parsed.data);
   });
-  client.once('error', () => client.end().then(again, again));
+  client.once('error', () => void client.end().then(again, again));
   try {
     await client.connect();
     await client.query(`LISTEN ${CHANNEL}`);

@@ -1,5 +1,6 @@
 import type { Db } from '#db/client.ts';
 import { findMembership } from '#db/queries/membership.ts';
+import { listChangesSince } from '#db/queries/record.ts';
 import { subscribe, type Announcement } from '#server/events/listen.ts';
 
 const BEAT_MS = 15_000;
@@ -10,12 +11,25 @@ interface StreamOptions {
   /** One study alone, or null for every study the person is a member of. */
   studyId: string | null;
   signal: AbortSignal;
+  /** `Last-Event-ID` of a stream that broke: what happened since is told first. */
+  lastEventId: string | null;
 }
 
 /** Asked at every announcement, not once: whoever left a study hears no more of it. */
 async function mayHear({ db, userId, studyId }: StreamOptions, a: Announcement): Promise<boolean> {
   if (studyId && studyId !== a.studyId) return false;
   return (await findMembership(db, { studyId: a.studyId, userId })) !== undefined;
+}
+
+const change = (a: Announcement): string => `id: ${a.id}\nevent: change\ndata: ${JSON.stringify(a)}\n\n`;
+const GAP = 'event: gap\ndata: {}\n\n';
+
+/** What a broken stream missed, a line a study; a gap where the number is no number of ours. */
+async function missed({ db, userId, studyId, lastEventId }: StreamOptions): Promise<string> {
+  if (lastEventId === null) return '';
+  if (!/^\d{1,15}$/.test(lastEventId)) return GAP;
+  const since = await listChangesSince(db, { userId, studyId, recordId: Number(lastEventId) });
+  return since.map(change).join('');
 }
 
 /**
@@ -38,11 +52,11 @@ export function eventStream(options: StreamOptions): Response {
         (a) =>
           void mayHear(options, a).then(
             (hears) => {
-              if (hears) send(`id: ${a.id}\nevent: change\ndata: ${JSON.stringify(a)}\n\n`);
+              if (hears) send(change(a));
             },
-            () => send('event: gap\ndata: {}\n\n'),
+            () => send(GAP),
           ),
-        () => send('event: gap\ndata: {}\n\n'),
+        () => send(GAP),
       );
       const beat = setInterval(() => send(': beat\n\n'), BEAT_MS);
       close = () => {
@@ -55,6 +69,7 @@ export function eventStream(options: StreamOptions): Response {
         }
       };
       send('retry: 1000\n\n');
+      void missed(options).then(send, () => send(GAP));
       options.signal.addEventListener('abort', close);
     },
     cancel() {

@@ -9,5 +9,6 @@ export const GET = endpoint(({ locals, request }) =>
     userId: requireUser(locals).userId,
     studyId: null,
     signal: request.signal,
+    lastEventId: request.headers.get('last-event-id'),
   }),
 ) satisfies APIRoute;

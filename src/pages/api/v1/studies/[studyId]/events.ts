@@ -5,5 +5,6 @@ import { requireMember } from '#server/member.ts';
 
 export const GET = endpoint(({ locals, request }) => {
   const { userId, studyId } = requireMember(locals);
-  return eventStream({ db: locals.db, userId, studyId, signal: request.signal });
+  const lastEventId = request.headers.get('last-event-id');
+  return eventStream({ db: locals.db, userId, studyId, signal: request.signal, lastEventId });
 }) satisfies APIRoute;
