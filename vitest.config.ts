@@ -25,7 +25,7 @@ export default defineConfig({
           name: 'db',
           include: ['tests/db/**/*.test.ts', 'tests/server/**/*.test.ts'],
           environment: 'node',
-          globalSetup: ['tests/support/database.ts'],
+          globalSetup: ['tests/support/database-setup.ts'],
           testTimeout: 30_000,
         },
       },
