@@ -75,6 +75,7 @@ export const ROUTES: Readonly<Record<string, RouteRules>> = {
   [`${STUDY}/uploads/[uploadId]/commit`]: { POST: 'study:input' },
   [`${STUDY}/uploads/[uploadId]/file`]: { GET: 'study:read' },
   [`${STUDY}/evaluation`]: { GET: 'study:read' },
+  [`${STUDY}/evaluation/inputs`]: { GET: 'study:read' },
   [`${STUDY}/criteria`]: { GET: 'study:read', POST: 'study:input' },
   [`${STUDY}/criteria/[criterionId]`]: { GET: 'study:read', PATCH: 'study:input', DELETE: 'study:input' },
   // The study's own set is the lead's to write (checked there, by the set asked for).
