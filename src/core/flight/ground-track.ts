@@ -1,5 +1,7 @@
-import { GM, EARTH_ROTATION_RATE, EQUATORIAL_RADIUS, FIRST_ECCENTRICITY_SQUARED } from '#core/constants.ts';
-import type { Metres, Radians } from '#core/units.ts';
+import { constants } from '../constants.ts';
+import { metres, radians } from '../units.ts';
+import type { Metres, Radians, Seconds } from '../units.ts';
+import { periodOf } from './orbit.ts';
 
 export interface GroundTrackInput {
   /** Geodetic latitude, −π/2…π/2, north positive. */
@@ -14,25 +16,25 @@ export interface GroundTrackInput {
   readonly apogeeRadius: Metres;
 }
 
-/** A place on the ellipsoid: geodetic latitude and longitude in rad. */
+/** A place on the ellipsoid: geodetic latitude and longitude. */
 export interface TrackPoint {
-  readonly latitude: number;
-  readonly longitude: number;
+  readonly latitude: Radians;
+  readonly longitude: Radians;
 }
 
 export interface TrackTick extends TrackPoint {
-  /** Distance over the ground from the pad, m. */
-  readonly distance: number;
-  /** Direction of the track there over the ground, clockwise from north, rad, 0 ≤ h < 2π. */
-  readonly heading: number;
+  /** Distance over the ground from the pad. */
+  readonly distance: Metres;
+  /** Direction of the track there over the ground, clockwise from north, 0 ≤ h < 2π. */
+  readonly heading: Radians;
 }
 
 export interface GroundTrack {
   /** The track in pieces that don't cross the date line. */
   readonly pieces: readonly (readonly TrackPoint[])[];
   readonly ticks: readonly TrackTick[];
-  /** From the pad to the end of the first revolution in space, s. */
-  readonly period: number;
+  /** Time of the first revolution in space. */
+  readonly period: Seconds;
 }
 
 interface Sample extends TrackPoint {
@@ -43,25 +45,24 @@ interface Sample extends TrackPoint {
 const STEPS = 720;
 const TICK_EVERY = 1e6;
 const TURN = 2 * Math.PI;
-const a = EQUATORIAL_RADIUS.value;
-const e2 = FIRST_ECCENTRICITY_SQUARED.value;
+const a = constants.equatorialRadius.value;
+const f = 1 / constants.inverseFlattening.value;
+const e2 = f * (2 - f);
+const omega = constants.rotationRate.value;
 
 /** −π < λ ≤ π. */
-const wrap = (longitude: number): number => {
+const wrap = (longitude: number): Radians => {
   const turned = longitude - TURN * Math.floor((longitude + Math.PI) / TURN);
-  return turned === -Math.PI ? Math.PI : turned;
+  return radians(turned === -Math.PI ? Math.PI : turned);
 };
 
 /** Time from perigee to true anomaly u (0…2π), s: Kepler's equation forward. */
-function timeAt(u: number, eccentricity: number, meanMotion: number): number {
+function timeAt(u: number, eccentricity: number, period: number): number {
   const half = u / 2;
   const E =
     2 *
-    Math.atan2(
-      Math.sqrt(1 - eccentricity) * Math.sin(half),
-      Math.sqrt(1 + eccentricity) * Math.cos(half),
-    );
-  return (E - eccentricity * Math.sin(E)) / meanMotion;
+    Math.atan2(Math.sqrt(1 - eccentricity) * Math.sin(half), Math.sqrt(1 + eccentricity) * Math.cos(half));
+  return ((E - eccentricity * Math.sin(E)) * period) / TURN;
 }
 
 /** Earth-fixed place of a point of the ellipsoid, m. */
@@ -78,13 +79,13 @@ function pointAt(phi: number, longitude: number, beta: number, u: number, t: num
   const east = Math.sin(beta) * Math.sin(u);
   const ahead = Math.cos(phi) * Math.cos(u) - Math.sin(phi) * Math.sin(u) * Math.cos(beta);
   return {
-    latitude: Math.atan2(Math.sin(geocentric), (1 - e2) * Math.cos(geocentric)),
-    longitude: wrap(longitude + Math.atan2(east, ahead) - EARTH_ROTATION_RATE.value * t),
+    latitude: radians(Math.atan2(Math.sin(geocentric), (1 - e2) * Math.cos(geocentric))),
+    longitude: wrap(longitude + Math.atan2(east, ahead) - omega * t),
   };
 }
 
 /** Direction from one place to the next over the ground, clockwise from north. */
-function headingBetween(from: Sample, to: Sample): number {
+function headingBetween(from: Sample, to: Sample): Radians {
   const [dx, dy, dz] = from.place.map((value, axis) => (to.place[axis] ?? 0) - value) as [
     number,
     number,
@@ -94,7 +95,7 @@ function headingBetween(from: Sample, to: Sample): number {
   const outward = Math.cos(longitude) * dx + Math.sin(longitude) * dy;
   const east = -Math.sin(longitude) * dx + Math.cos(longitude) * dy;
   const north = -Math.sin(latitude) * outward + Math.cos(latitude) * dz;
-  return (Math.atan2(east, north) + TURN) % TURN;
+  return radians((Math.atan2(east, north) + TURN) % TURN);
 }
 
 /** Cut where the longitude jumps: the piece ends on ±π and the next begins on the other side. */
@@ -107,9 +108,9 @@ function cutAtDateLine(samples: readonly Sample[]): TrackPoint[][] {
       const edge = before.longitude > 0 ? Math.PI : -Math.PI;
       const whole = TURN - Math.abs(step);
       const share = whole === 0 ? 0 : Math.abs(edge - before.longitude) / whole;
-      const latitude = before.latitude + share * (point.latitude - before.latitude);
-      pieces.at(-1)?.push({ latitude, longitude: edge });
-      pieces.push([{ latitude, longitude: -edge }]);
+      const latitude = radians(before.latitude + share * (point.latitude - before.latitude));
+      pieces.at(-1)?.push({ latitude, longitude: radians(edge) });
+      pieces.push([{ latitude, longitude: radians(-edge) }]);
     }
     pieces.at(-1)?.push({ latitude: point.latitude, longitude: point.longitude });
   });
@@ -124,8 +125,8 @@ function ticksAlong(samples: readonly Sample[]): TrackTick[] {
     if (!from || to.distance < distance) return;
     const share = (distance - from.distance) / (to.distance - from.distance);
     ticks.push({
-      distance,
-      latitude: from.latitude + share * (to.latitude - from.latitude),
+      distance: metres(distance),
+      latitude: radians(from.latitude + share * (to.latitude - from.latitude)),
       longitude: wrap(from.longitude + share * wrap(to.longitude - from.longitude)),
       heading: headingBetween(from, to),
     });
@@ -151,11 +152,11 @@ export function groundTrack(input: GroundTrackInput): GroundTrack {
   const phi = Math.atan2((1 - e2) * Math.sin(latitude), Math.cos(latitude));
   const axis = (perigeeRadius + apogeeRadius) / 2;
   const eccentricity = (apogeeRadius - perigeeRadius) / (2 * axis);
-  const meanMotion = Math.sqrt(GM.value / axis ** 3);
+  const period = periodOf(axis);
   const samples: Sample[] = [];
   for (let step = 0; step <= STEPS; step += 1) {
     const u = (TURN * step) / STEPS;
-    const point = pointAt(phi, longitude, beta, u, timeAt(u, eccentricity, meanMotion));
+    const point = pointAt(phi, longitude, beta, u, timeAt(u, eccentricity, period));
     const place = placeOf(point);
     const before = samples.at(-1);
     const chord = before
@@ -163,5 +164,5 @@ export function groundTrack(input: GroundTrackInput): GroundTrack {
       : 0;
     samples.push({ ...point, place, distance: (before?.distance ?? 0) + chord });
   }
-  return { pieces: cutAtDateLine(samples), ticks: ticksAlong(samples), period: TURN / meanMotion };
+  return { pieces: cutAtDateLine(samples), ticks: ticksAlong(samples), period };
 }
