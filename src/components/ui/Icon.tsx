@@ -1,0 +1,70 @@
+import {
+  Archive,
+  ArchiveRestore,
+  Check,
+  ChevronDown,
+  ChevronLeft,
+  ChevronRight,
+  ChevronUp,
+  CircleSlash,
+  Columns3,
+  Contrast,
+  Copy,
+  Crosshair,
+  Download,
+  Ellipsis,
+  Funnel,
+  Keyboard,
+  Layers,
+  Mail,
+  Maximize2,
+  Minimize2,
+  OctagonX,
+  Pencil,
+  Plus,
+  RefreshCw,
+  Search,
+  Undo2,
+  Upload,
+  X,
+} from 'lucide-react';
+
+/** Icons by what they stand for. Each goes with a word, save in the title block, where it has a name and a tooltip. */
+const byRole = {
+  add: Plus,
+  again: RefreshCw,
+  archive: Archive,
+  close: X,
+  columns: Columns3,
+  copy: Copy,
+  done: Check,
+  down: ChevronDown,
+  edit: Pencil,
+  export: Download,
+  fill: Maximize2,
+  filter: Funnel,
+  find: Search,
+  keys: Keyboard,
+  layers: Layers,
+  mail: Mail,
+  more: Ellipsis,
+  next: ChevronRight,
+  place: Crosshair,
+  previous: ChevronLeft,
+  refused: OctagonX,
+  remove: X,
+  restore: ArchiveRestore,
+  'set-aside': CircleSlash,
+  theme: Contrast,
+  undo: Undo2,
+  unfill: Minimize2,
+  up: ChevronUp,
+  upload: Upload,
+} as const;
+
+export type IconName = keyof typeof byRole;
+
+export function Icon({ name, size = 16 }: { name: IconName; size?: number }) {
+  const Drawn = byRole[name];
+  return <Drawn size={size} strokeWidth={1.6} aria-hidden="true" className="shrink-0" />;
+}
