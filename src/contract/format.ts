@@ -45,19 +45,6 @@ export function formatShare(value: number): string {
   return formatNumber(value, 3).replace(/^(−?)0\./, '$1.');
 }
 
-/**
- * The least count of decimals, from `decimals` up to `most`, at which the printed parts add up to the printed total.
- * A printed sum must come out from the digits beside it; when none does, `most` is the answer.
- */
-export function closingDecimals(parts: number[], total: number, decimals: number, most = 6): number {
-  for (let d = decimals; d < most; d += 1) {
-    const scale = 10 ** d;
-    const sum = parts.reduce((carried, part) => carried + Math.round(part * scale), 0);
-    if (sum === Math.round(total * scale)) return d;
-  }
-  return most;
-}
-
 /** Latitude in degrees, north positive, with its half: 4.72° S */
 export function formatLatitude(latitudeDeg: number, decimals = 2): string {
   return `${formatNumber(Math.abs(latitudeDeg), decimals)}° ${latitudeDeg < 0 ? 'S' : 'N'}`;
