@@ -1,9 +1,14 @@
+/** What a job of each queue carries: ids only, the rest is read when the job runs. */
+export interface Jobs {
+  mail: { messageId: string };
+}
+export type Queue = keyof Jobs;
+
 /**
- * Every queue of the job worker. The owner role makes them while migrating, because making a queue makes a
- * table partition, which the app's role may not do.
+ * Every queue. The owner role makes them while migrating, because making a queue makes a table partition, which the
+ * app's role may not do.
  */
-export const QUEUES = ['mail'] as const;
-export type Queue = (typeof QUEUES)[number];
+export const QUEUES: readonly Queue[] = ['mail'];
 
 /** The schema pg-boss lives in. */
 export const JOBS_SCHEMA = 'pgboss';
