@@ -44,6 +44,13 @@ export type StudyRow = typeof study.$inferSelect;
 /** What a change touches: inputs (locked in review, move the revision), the study's weights (the same), or neither. */
 export type ChangeKind = 'inputs' | 'weights' | 'apart';
 
+/** Where a change left the study; the screens show it. */
+export interface Saved {
+  revision: number;
+  /** ISO 8601, UTC: when the revision last moved. */
+  savedAt: string;
+}
+
 interface Change<T> {
   result: T;
   entries: readonly RecordEntry[];
@@ -75,7 +82,7 @@ export async function changeStudy<T>(
   db: PooledDb,
   { member, kind, allowArchived = false }: { member: Member; kind: ChangeKind; allowArchived?: boolean },
   change: (tx: Db, row: StudyRow) => Promise<Change<T>>,
-): Promise<T & { revision: number }> {
+): Promise<T & Saved> {
   return db.transaction(async (tx) => {
     const [row] = await tx.select().from(study).where(eq(study.id, member.studyId)).for('update');
     if (!row) throw notFound();
@@ -88,16 +95,20 @@ export async function changeStudy<T>(
     const { result, entries } = await change(tx, row);
     const moves = kind !== 'apart' && entries.length > 0;
     const revision = row.revision + (moves ? 1 : 0);
-    if (entries.length > 0)
-      await tx
+    let { savedAt } = row;
+    if (entries.length > 0) {
+      const [saved] = await tx
         .update(study)
         .set({
           revision,
           updatedAt: sql`now()`,
           ...(moves ? { savedAt: sql`now()`, state: 'draft' as const } : {}),
         })
-        .where(eq(study.id, row.id));
+        .where(eq(study.id, row.id))
+        .returning({ savedAt: study.savedAt });
+      savedAt = saved?.savedAt ?? savedAt;
+    }
     await writeRecord(tx, { studyId: row.id, userId: member.userId, revision }, entries);
-    return { ...result, revision };
+    return { ...result, revision, savedAt: savedAt.toISOString() };
   });
 }

@@ -92,6 +92,10 @@ export async function readJson<T extends z.ZodType>(request: Request, schema: T)
   return schema.parse(body);
 }
 
+/** Reads and checks what the address asks for. @throws ZodError */
+export const readQuery = <T extends z.ZodType>(url: URL, schema: T): z.output<T> =>
+  schema.parse(Object.fromEntries(url.searchParams));
+
 /**
  * The version a write is based on: `If-Match` with the ETag, or `version` in the body.
  * @throws AppError 'version-required' where there is neither
