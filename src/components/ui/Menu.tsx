@@ -75,7 +75,7 @@ function MenuList({ id, items, onLeave, onChoose }: MenuListProps) {
   };
   return (
     // The keys are heard as they rise from the buttons inside; the list itself is no control.
-    // eslint-disable-next-line jsx-a11y/no-static-element-interactions, jsx-a11y/click-events-have-key-events
+    // eslint-disable-next-line jsx-a11y/no-static-element-interactions
     <div className="menu right-0 z-(--z-map-control)" id={id} ref={list} onKeyDown={walk} onClick={onChoose}>
       {items}
     </div>
