@@ -66,7 +66,7 @@ export const StudyInput = z
   .meta({ id: 'StudyInput' });
 export type StudyInput = z.infer<typeof StudyInput>;
 
-/** Only what is sent changes; `archived` is the lead's to send. */
+/** Only what is sent changes. `archived` is the lead's to send, and goes alone: an archived study takes nothing else. */
 export const StudyPatch = z
   .strictObject({
     title: StudyTitle.optional(),
@@ -76,5 +76,10 @@ export const StudyPatch = z
     archived: z.boolean().optional(),
     version: z.int().optional(),
   })
+  .refine(
+    ({ archived, version: _, ...rest }) =>
+      archived === undefined || Object.values(rest).every((value) => value === undefined),
+    { path: ['archived'], error: 'Archive or restore in a request of its own.' },
+  )
   .meta({ id: 'StudyPatch' });
 export type StudyPatch = z.infer<typeof StudyPatch>;

@@ -1,4 +1,5 @@
-import { and, asc, count, eq, ilike, isNull, min, ne, notExists, or, sql } from 'drizzle-orm';
+import { and, asc, count, eq, ilike, isNull, ne, notExists, or, sql } from 'drizzle-orm';
+import { alias } from 'drizzle-orm/pg-core';
 import type { Db } from '../client.ts';
 import { user } from '../schema/auth.ts';
 import { member, study } from '../schema/study.ts';
@@ -17,6 +18,9 @@ const columns = {
   deactivatedAt: user.deactivatedAt,
 };
 export type MemberRow = Awaited<ReturnType<typeof listMembers>>['rows'][number];
+
+/** The people again, for a query that already reads them as who asked. */
+const account = alias(user, 'account_holder');
 
 interface InStudy {
   studyId: string;
@@ -121,33 +125,24 @@ export async function findRevision(db: Db, { studyId }: InStudy): Promise<number
 }
 
 /**
- * Addresses that wait for an account: a lead made them members and no account has them yet. Which studies they are
- * for stays unsaid, because an administrator does not see studies.
+ * Addresses that wait for an account: a lead made them members and no account has them yet, with who asked first.
+ * Which studies they are for stays unsaid, because an administrator does not see studies.
  */
 export async function listPendingAddresses(db: Db) {
-  const asker = db
-    .select({ name: user.name })
-    .from(user)
-    .where(eq(user.id, sql`(array_agg(${member.addedBy} order by ${member.createdAt}))[1]`));
+  const hasAccount = db
+    .select({ one: sql`1` })
+    .from(account)
+    .where(eq(account.email, member.email));
   return db
     .select({
       email: member.email,
-      since: min(member.createdAt),
+      since: sql`min(${member.createdAt})`.mapWith(member.createdAt),
       studies: count(),
-      askedBy: sql<string | null>`(${asker})`,
+      askedBy: sql<string | null>`(array_agg(${user.name} order by ${member.createdAt}))[1]`,
     })
     .from(member)
-    .where(
-      and(
-        isNull(member.userId),
-        notExists(
-          db
-            .select({ one: sql`1` })
-            .from(user)
-            .where(eq(user.email, member.email)),
-        ),
-      ),
-    )
+    .leftJoin(user, eq(user.id, member.addedBy))
+    .where(and(isNull(member.userId), notExists(hasAccount)))
     .groupBy(member.email)
-    .orderBy(min(member.createdAt));
+    .orderBy(sql`min(${member.createdAt})`);
 }
