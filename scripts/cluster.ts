@@ -159,10 +159,12 @@ export class Cluster {
     const settings = ['unix_socket_directories=', 'max_connections=60', ...(this.#durable ? [] : FAST)];
     const options = [`-h 127.0.0.1 -p ${port}`, ...settings.map((setting) => `-c ${setting}`)].join(' ');
     const log = path.join(folder, 'server.log');
-    const start = () => this.#control(['-l', log, '-w', '-t', '120', '-o', options, 'start']);
-    // Processes of a server that was killed may need a moment to let go of its memory.
-    if (!start() && !(await pause(2_000)) && !start())
-      throw new Error(`The database does not start. Its log is ${log}.`);
+    const start = (): boolean => this.#control(['-l', log, '-w', '-t', '120', '-o', options, 'start']);
+    if (!start()) {
+      // Processes of a server that was killed may need a moment to let go of its memory.
+      await pause(2_000);
+      if (!start()) throw new Error(`The database does not start. Its log is ${log}.`);
+    }
     this.#keepPlace({ folder, port });
   }
 

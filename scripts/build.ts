@@ -1,0 +1,95 @@
+import { spawnSync } from 'node:child_process';
+import { createHash } from 'node:crypto';
+import fs from 'node:fs';
+import path from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { build as bundle } from 'esbuild';
+import { inLock } from './lock.mjs';
+import { precompress } from './precompress.ts';
+
+const ROOT = fileURLToPath(new URL('..', import.meta.url));
+const STAMP = path.join(ROOT, 'dist', 'built-from');
+
+/** Everything a build is made from. */
+const SOURCES = [
+  'src',
+  'public',
+  'scripts',
+  'astro.config.ts',
+  'package-lock.json',
+  'package.json',
+  'tsconfig.json',
+];
+
+function filesUnder(name: string): string[] {
+  const file = path.join(ROOT, name);
+  if (!fs.existsSync(file)) return [];
+  if (!fs.statSync(file).isDirectory()) return [name];
+  return fs
+    .readdirSync(file)
+    .sort()
+    .flatMap((child) => filesUnder(path.join(name, child)));
+}
+
+function hashOfSources(): string {
+  const hash = createHash('sha256').update(process.versions.node);
+  for (const name of SOURCES.flatMap(filesUnder))
+    hash.update(`\0${name}\0`).update(fs.readFileSync(path.join(ROOT, name)));
+  return hash.digest('hex');
+}
+
+const entries = (folder: string): Record<string, string> =>
+  Object.fromEntries(
+    (fs.existsSync(path.join(ROOT, folder)) ? fs.readdirSync(path.join(ROOT, folder)) : [])
+      .filter((name) => /\.tsx?$/.test(name))
+      .map((name) => [`worker/${name.replace(/\.tsx?$/, '')}`, path.join(ROOT, folder, name)]),
+  );
+
+/**
+ * Bundles what runs outside Astro: the workers and the server's front. Packages stay outside the bundles. In `astro
+ * dev` the workers run from these files too, because a thread loads no TypeScript.
+ */
+export async function buildWorkers(): Promise<void> {
+  await bundle({
+    absWorkingDir: ROOT,
+    entryPoints: { ...entries('src/worker'), web: path.join(ROOT, 'scripts/web.ts') },
+    outdir: 'dist',
+    outExtension: { '.js': '.mjs' },
+    bundle: true,
+    platform: 'node',
+    format: 'esm',
+    target: 'node20',
+    packages: 'external',
+    sourcemap: true,
+    jsx: 'automatic',
+    logLevel: 'warning',
+  });
+}
+
+function buildPages(): void {
+  const astro = path.join(ROOT, 'node_modules/astro/astro.js');
+  const env = { ...process.env, NODE_ENV: 'production', ASTRO_TELEMETRY_DISABLED: '1' };
+  const built = spawnSync(process.execPath, [astro, 'build', '--silent'], {
+    cwd: ROOT,
+    env,
+    stdio: 'inherit',
+  });
+  if (built.status !== 0) throw new Error('The build failed; what Astro says stands above.');
+}
+
+/** Builds what is served, unless it is built from these very sources already. */
+export async function buildIfChanged(): Promise<void> {
+  await inLock(`build:${ROOT}`, async () => {
+    const wanted = hashOfSources();
+    if (fs.existsSync(STAMP) && fs.readFileSync(STAMP, 'utf8') === wanted) return;
+    console.log('Building (about half a minute)…');
+    fs.rmSync(STAMP, { force: true });
+    buildPages();
+    await buildWorkers();
+    precompress(path.join(ROOT, 'dist/client/_astro'));
+    fs.writeFileSync(STAMP, wanted);
+  });
+}
+
+if (process.argv[1] && path.resolve(process.argv[1]) === fileURLToPath(import.meta.url))
+  await buildIfChanged();

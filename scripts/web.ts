@@ -1,0 +1,29 @@
+/*
+ * The web process, built to dist/web.mjs: the front, Astro's handler behind it, and the job worker.
+ * scripts/serve.ts starts it with the environment complete.
+ */
+import { fileURLToPath } from 'node:url';
+import { env } from '#server/env.ts';
+import { stopAll } from '#server/lifecycle.ts';
+import { makeFront, type Handler } from './front.ts';
+import { closable, stopInOrder } from './graceful.ts';
+
+process.env['ASTRO_NODE_AUTOSTART'] = 'disabled';
+const settings = env();
+
+const built = new URL('./server/entry.mjs', import.meta.url).href;
+const { handler } = (await import(built)) as { handler: Handler };
+const clientFolder = fileURLToPath(new URL('./client', import.meta.url));
+const server = makeFront({ settings, handler, clientFolder });
+const close = closable(server);
+
+server.once('error', (error: NodeJS.ErrnoException) => {
+  const taken = `Port ${settings.PORT} of ${settings.HOST} is taken. Choose another: PORT=4322 npm start`;
+  console.error(error.code === 'EADDRINUSE' ? taken : error.message);
+  process.exit(1);
+});
+stopInOrder(async () => {
+  await close();
+  await stopAll();
+});
+server.listen(settings.PORT, settings.HOST, () => process.send?.('ready'));
