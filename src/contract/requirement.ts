@@ -79,10 +79,15 @@ export type StudyVehicle = z.infer<typeof StudyVehicle>;
 
 /** A vehicle of the library by its id, or one entered. */
 export const StudyVehicleInput = z
-  .union([
-    z.strictObject({ libraryVehicleId: z.uuid(), version: z.int().optional() }),
-    z.strictObject({ vehicle: VehicleInput, version: z.int().optional() }),
-  ])
+  .strictObject({
+    libraryVehicleId: z.uuid().optional(),
+    vehicle: VehicleInput.optional(),
+    version: z.int().optional(),
+  })
+  .refine(({ libraryVehicleId, vehicle }) => (libraryVehicleId === undefined) !== (vehicle === undefined), {
+    path: ['vehicle'],
+    error: 'Send a vehicle, or libraryVehicleId: one of the two.',
+  })
   .meta({ id: 'StudyVehicleInput' });
 export type StudyVehicleInput = z.infer<typeof StudyVehicleInput>;
 

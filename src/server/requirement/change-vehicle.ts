@@ -14,8 +14,9 @@ import { presentVehicle } from './present.ts';
 type Chosen = { spec: Record<string, unknown>; libraryVehicleId: string | null };
 
 async function chosen(tx: Db, input: StudyVehicleInput): Promise<Chosen> {
-  if ('vehicle' in input) return { spec: input.vehicle, libraryVehicleId: null };
-  const row = await findLibraryVehicle(tx, { vehicleId: input.libraryVehicleId });
+  const { vehicle, libraryVehicleId } = input;
+  if (vehicle) return { spec: vehicle, libraryVehicleId: null };
+  const row = libraryVehicleId && (await findLibraryVehicle(tx, { vehicleId: libraryVehicleId }));
   if (row && !row.archivedAt) return { spec: row.spec, libraryVehicleId: row.id };
   const message = 'There is no such vehicle in the library.';
   throw new AppError('invalid', message, { errors: [{ path: 'libraryVehicleId', message }] });
