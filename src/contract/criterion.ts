@@ -1,0 +1,123 @@
+import { listOf } from './list.ts';
+import { z } from './zod.ts';
+import { QUANTITIES, QUANTITY_KEYS } from './quantity.ts';
+
+const finite = z.number('Enter a number.');
+
+/** Levels between which the value runs from 0 to 1, in the criterion's unit. */
+export const CriterionLevels = z
+  .discriminatedUnion('mode', [
+    z.strictObject({ mode: z.literal('candidates') }),
+    z.strictObject({ mode: z.literal('fixed'), worst: finite, best: finite }),
+  ])
+  .meta({ id: 'CriterionLevels' });
+export type CriterionLevels = z.infer<typeof CriterionLevels>;
+
+/** A must-meet limit, in the criterion's unit. */
+export const CriterionLimit = z
+  .strictObject({ kind: z.enum(['at-least', 'at-most']), value: finite })
+  .meta({ id: 'CriterionLimit' });
+export type CriterionLimit = z.infer<typeof CriterionLimit>;
+
+const name = z
+  .string()
+  .trim()
+  .min(1, 'Give the criterion a name.')
+  .max(80, 'A name has up to 80 characters.');
+const unit = z.string().trim().max(20, 'A unit has up to 20 characters.');
+const direction = z.enum(['more', 'less']);
+
+export const Criterion = z
+  .object({
+    id: z.uuid(),
+    /** From 0, in the order shown. */
+    position: z.int(),
+    name: z.string(),
+    unit: z.string(),
+    direction,
+    /** A text criterion is shown with the sites and never weighed. */
+    source: z.enum(['computed', 'entered', 'text']),
+    quantity: z.enum(QUANTITY_KEYS).nullable(),
+    /** The orbit a computed criterion is for; null for the whole manifest. */
+    orbitId: z.uuid().nullable(),
+    levels: CriterionLevels,
+    limit: CriterionLimit.nullable(),
+    version: z.int(),
+  })
+  .meta({ id: 'Criterion' });
+export type Criterion = z.infer<typeof Criterion>;
+
+/** What may be asked of levels and direction together; used by the forms and by the server after a patch is applied. */
+export function levelFault(direction: 'more' | 'less', levels: CriterionLevels): string | null {
+  if (levels.mode === 'candidates') return null;
+  if (levels.worst === levels.best) return 'The worst and the best level must differ.';
+  const climbs = levels.best > levels.worst;
+  if (climbs === (direction === 'more')) return null;
+  return direction === 'more'
+    ? 'More is better here, so the best level must be the greater one.'
+    : 'Less is better here, so the best level must be the smaller one.';
+}
+
+interface Levelled {
+  direction?: 'more' | 'less' | undefined;
+  levels?: CriterionLevels | undefined;
+}
+const levelsFit = (ctx: z.core.ParsePayload<Levelled>): void => {
+  const { direction: way, levels } = ctx.value;
+  const fault = way && levels ? levelFault(way, levels) : null;
+  if (fault) ctx.issues.push({ code: 'custom', message: fault, path: ['levels', 'best'], input: levels });
+};
+
+const settings = {
+  levels: CriterionLevels.default({ mode: 'candidates' }),
+  limit: CriterionLimit.nullable().default(null),
+};
+
+const ComputedInput = z
+  .strictObject({
+    source: z.literal('computed'),
+    quantity: z.enum(QUANTITY_KEYS),
+    orbitId: z.uuid().nullable().default(null),
+    /** Left out: named after the quantity and the orbit. */
+    name: name.optional(),
+    direction: direction.optional(),
+    ...settings,
+  })
+  .check((ctx) => {
+    const { quantity, orbitId } = ctx.value;
+    const { scope } = QUANTITIES[quantity];
+    if (scope === 'either' || (scope === 'orbit') === (orbitId !== null)) return;
+    const message =
+      scope === 'orbit' ? 'Choose the orbit it is for.' : 'It is for the whole manifest, not one orbit.';
+    ctx.issues.push({ code: 'custom', message, path: ['orbitId'], input: orbitId });
+  })
+  .check(levelsFit);
+
+const EnteredInput = z
+  .strictObject({ source: z.enum(['entered', 'text']), name, unit: unit.default(''), direction, ...settings })
+  .check(levelsFit);
+
+export const CriterionInput = z
+  .discriminatedUnion('source', [ComputedInput, EnteredInput])
+  .meta({ id: 'CriterionInput' });
+export type CriterionInput = z.output<typeof CriterionInput>;
+export type CriterionDraft = z.input<typeof CriterionInput>;
+
+/** Only what is sent changes. `position` moves the criterion there and the others round it. */
+export const CriterionPatch = z
+  .strictObject({
+    name: name.optional(),
+    unit: unit.optional(),
+    direction: direction.optional(),
+    source: z.enum(['entered', 'text']).optional(),
+    levels: CriterionLevels.optional(),
+    limit: CriterionLimit.nullable().optional(),
+    position: z.int().min(0).optional(),
+    version: z.int().optional(),
+  })
+  .check(levelsFit)
+  .meta({ id: 'CriterionPatch' });
+export type CriterionPatch = z.infer<typeof CriterionPatch>;
+
+export const CriterionList = listOf(Criterion);
+export type CriterionList = z.infer<typeof CriterionList>;

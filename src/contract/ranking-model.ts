@@ -1,0 +1,63 @@
+/* A ranking worked out from figures and points: the one way, for the interface, the screens and the memo. */
+import type { Criterion as WeighingCriterion } from '#core/decision/criterion.ts';
+import { figureTable } from '#core/decision/figures.ts';
+import { listing, type Listed } from '#core/decision/listing.ts';
+import { prepare, type Prepared } from '#core/decision/prepare.ts';
+import { rank, type Ranking as RankedTable } from '#core/decision/rank.ts';
+import { weightsFromPoints } from '#core/decision/weights.ts';
+import type { Criterion } from './criterion.ts';
+import type { RankingFigures, RankingState } from './ranking.ts';
+
+/** Figures made ready for weighing; made once, ranked as often as the weights move. */
+export interface PreparedFigures {
+  figures: RankingFigures;
+  prepared: Prepared;
+  /** Words of a cell by its place in the table. */
+  notes: ReadonlyMap<number, string>;
+}
+
+/** A ranking under one set of points. */
+export interface RankingModel extends PreparedFigures {
+  state: RankingState;
+  /** One a criterion; all 0 where no points are given. */
+  weights: Float64Array;
+  table: RankedTable;
+  /** Every site once where there are ranks; else only those set aside. */
+  rows: Listed[];
+}
+
+function toWeighing({ direction, levels, limit }: Criterion): WeighingCriterion {
+  return {
+    direction,
+    levels:
+      levels.mode === 'fixed'
+        ? { kind: 'fixed', worst: levels.worst, best: levels.best }
+        : { kind: 'candidates' },
+    limit: limit && { kind: limit.kind, figure: limit.value },
+  };
+}
+
+export function prepareFigures(figures: RankingFigures): PreparedFigures {
+  const { criteria, cells, notes } = figures;
+  return {
+    figures,
+    prepared: prepare(criteria.map(toWeighing), figureTable(cells)),
+    notes: new Map(notes.map(([site, criterion, words]) => [site * criteria.length + criterion, words])),
+  };
+}
+
+export function rankFigures(ready: PreparedFigures, points: Readonly<Record<string, number>>): RankingModel {
+  const { figures, prepared } = ready;
+  const given = weightsFromPoints(figures.criteria.map(({ id }) => points[id] ?? 0));
+  const weights = given.kind === 'set' ? given.weights : new Float64Array(figures.criteria.length);
+  const table = rank(prepared, weights);
+  const state = stateOf(figures, given.kind === 'set');
+  const rows = listing(table).filter((row) => state === 'ranked' || row.kind === 'set-aside');
+  return { ...ready, state, weights, table, rows };
+}
+
+function stateOf({ sites, criteria }: RankingFigures, weighed: boolean): RankingState {
+  if (sites.length === 0) return 'no-sites';
+  if (criteria.length === 0) return 'no-criteria';
+  return weighed ? 'ranked' : 'no-weights';
+}
