@@ -4,7 +4,9 @@
  */
 import { dev } from 'astro';
 import { env } from '#server/env.ts';
+import { workJobs } from '#server/jobs/boss.ts';
 import { stopAll } from '#server/lifecycle.ts';
+import { deliverMail } from '#server/mail/deliver.ts';
 import { stopInOrder } from './graceful.ts';
 
 const { HOST, PORT } = env();
@@ -13,4 +15,5 @@ stopInOrder(async () => {
   await server.stop();
   await stopAll();
 });
+await workJobs({ mail: deliverMail });
 process.send?.('ready');

@@ -4,7 +4,9 @@
  */
 import { fileURLToPath } from 'node:url';
 import { env } from '#server/env.ts';
+import { workJobs } from '#server/jobs/boss.ts';
 import { stopAll } from '#server/lifecycle.ts';
+import { deliverMail } from '#server/mail/deliver.ts';
 import { makeFront, type Handler } from './front.ts';
 import { closable, stopInOrder } from './graceful.ts';
 
@@ -26,4 +28,5 @@ stopInOrder(async () => {
   await close();
   await stopAll();
 });
+await workJobs({ mail: deliverMail });
 server.listen(settings.PORT, settings.HOST, () => process.send?.('ready'));

@@ -1,11 +1,9 @@
 /** What a page frame shows around a study's section: the view types that the layouts take. */
+import type { StudyRole, StudyState } from './study.ts';
 
 /** The sections of a study that exist, in the order of the work. A section that is not built has no key. */
 export const SECTION_KEYS = ['requirement', 'sites', 'flight', 'criteria', 'ranking', 'memo'] as const;
 export type SectionKey = (typeof SECTION_KEYS)[number];
-
-export type StudyState = 'draft' | 'in-review' | 'baselined';
-export type StudyRole = 'lead' | 'engineer' | 'reviewer' | 'reader';
 
 export interface SectionFrame {
   key: SectionKey;

@@ -95,7 +95,7 @@ export const ROUTES: Readonly<Record<string, RouteRules>> = {
   '/api/v1/admin/invitations/[invitationId]': { DELETE: 'administrator' },
   '/api/v1/admin/leaderless': { GET: 'administrator', POST: 'administrator' },
   '/api/v1/admin/vehicles': { GET: 'administrator', POST: 'administrator' },
-  '/api/v1/admin/vehicles/[vehicleId]': { PATCH: 'administrator' },
+  '/api/v1/admin/vehicles/[vehicleId]': { GET: 'administrator', PATCH: 'administrator' },
   '/api/v1/admin/outbox': { GET: 'administrator' },
 };
 

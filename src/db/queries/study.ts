@@ -76,6 +76,12 @@ export async function findStudy(db: Db, { studyId }: { studyId: string }) {
   return row;
 }
 
+/** Locks a study's row until the transaction ends. @returns whether there is one */
+export async function lockStudy(db: Db, { studyId }: { studyId: string }): Promise<boolean> {
+  const rows = await db.select({ id: study.id }).from(study).where(eq(study.id, studyId)).for('update');
+  return rows.length > 0;
+}
+
 export async function insertStudy(db: Db, values: NewStudy) {
   const [row] = await db.insert(study).values(values).returning(columns);
   if (!row) throw new Error('an insert returned no row');

@@ -41,6 +41,16 @@ export async function findLibraryVehicle(db: Db, { vehicleId }: { vehicleId: str
   return row;
 }
 
+/** The same, locked until the transaction ends. */
+export async function lockLibraryVehicle(db: Db, { vehicleId }: { vehicleId: string }) {
+  const [row] = await db
+    .select(columns)
+    .from(libraryVehicle)
+    .where(eq(libraryVehicle.id, vehicleId))
+    .for('update');
+  return row;
+}
+
 export async function findLibraryVehicleByCode(db: Db, { code }: { code: string }) {
   const [row] = await db.select(columns).from(libraryVehicle).where(eq(libraryVehicle.code, code));
   return row;

@@ -1,9 +1,8 @@
 import type { APIRoute } from 'astro';
-import { auth } from '#server/auth/auth.ts';
+import { endpoint } from '#server/endpoint.ts';
+import { handleAuth } from '#server/auth/handle.ts';
 
-/** The address that counts for the rate limit is the connection's, never one of the client's own making. */
-export const ALL: APIRoute = ({ request, clientAddress }) => {
-  const headers = new Headers(request.headers);
-  headers.set('x-client-ip', clientAddress);
-  return auth().handler(new Request(request, { headers }));
-};
+/** Sign-in, sign-out, passwords and links: better-auth's addresses. */
+export const ALL = endpoint(({ request, clientAddress, locals }) =>
+  handleAuth({ db: locals.db, request, clientAddress, requestId: locals.requestId }),
+) satisfies APIRoute;
