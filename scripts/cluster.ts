@@ -96,9 +96,7 @@ export class Cluster {
   /** Stops the cluster unless another server still uses it. */
   async stop(): Promise<void> {
     await inLock(`cluster:${this.#data}`, async () => {
-      const alone = await this.#isLastUser();
-      await this.#use?.end().catch(() => undefined);
-      if (alone) this.#control(['-m', 'fast', '-w', 'stop']);
+      if (await this.#isLastUser()) this.#control(['-m', 'fast', '-w', 'stop']);
     });
   }
 
@@ -112,14 +110,18 @@ export class Cluster {
     await this.#start();
   }
 
+  /** Whether nobody else holds the lock of use, asked on a new connection: the old one may have died meanwhile. */
   async #isLastUser(): Promise<boolean> {
+    await this.#use?.end().catch(() => undefined);
     try {
-      await this.#use?.query('select pg_advisory_unlock_shared($1)', [IN_USE]);
-      const answer = await this.#use?.query<{ alone: boolean }>('select pg_try_advisory_lock($1) as alone', [
+      const client = await this.connect(SUPERUSER, 'postgres');
+      const { rows } = await client.query<{ alone: boolean }>('select pg_try_advisory_lock($1) as alone', [
         IN_USE,
       ]);
-      return answer?.rows[0]?.alone ?? true;
+      await client.end();
+      return rows[0]?.alone ?? false;
     } catch {
+      // It doesn't answer: whatever is left of it may be stopped.
       return true;
     }
   }

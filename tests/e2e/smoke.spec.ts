@@ -1,0 +1,12 @@
+import { expect, test } from '@playwright/test';
+
+test('the server answers for its health', async ({ request }) => {
+  const answer = await request.get('/api/health');
+  expect(answer.status()).toBe(200);
+  expect(await answer.json()).toEqual({ status: 'ok', database: 'up' });
+});
+
+test('a visitor who is signed out meets the sign-in page', async ({ page }) => {
+  await page.goto('/studies');
+  await expect(page).toHaveURL(/\/sign-in/);
+});
