@@ -45,6 +45,7 @@ export const OrbitInput = z
   .check(checkOrbit)
   .meta({ id: 'OrbitInput' });
 export type OrbitInput = z.infer<typeof OrbitInput>;
+export type OrbitDraft = z.input<typeof OrbitInput>;
 
 /**
  * Only what is sent changes; the orbit that comes of it is checked whole. An inclination ends sun-synchronous and

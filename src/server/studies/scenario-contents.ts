@@ -1,0 +1,100 @@
+import { CriterionInput } from '#contract/criterion.ts';
+import { QUANTITIES, quantityName } from '#contract/quantity.ts';
+import { OrbitInput } from '#contract/requirement.ts';
+import { SiteInput } from '#contract/site.ts';
+import { DEFAULT_TURN_SPEED_FRACTION } from '#contract/evaluate.ts';
+import { foldName } from '#core/csv/codes.ts';
+import { newId } from '#db/columns.ts';
+import type { StudyContents } from '#db/queries/contents.ts';
+import { levelColumns, limitColumns } from '#server/criteria/present.ts';
+import { inputFields, orbitColumns } from '#server/requirement/orbit-values.ts';
+import type { DemoCriterion, DemoSite, DemoStudy } from '#seed/demo/shape.ts';
+
+/** Names of a scenario made ids, so that the interface's schemas, which know ids, check it. */
+class Ids {
+  readonly #ids = new Map<string, string>();
+  constructor(names: readonly string[]) {
+    for (const name of names) this.#ids.set(name, newId());
+  }
+  of(name: string): string {
+    const id = this.#ids.get(name);
+    if (id === undefined) throw new RangeError(`scenario: nothing is called ${name}`);
+    return id;
+  }
+  keyed<V>(values: Readonly<Record<string, V>>): Record<string, V> {
+    return Object.fromEntries(Object.entries(values).map(([name, value]) => [this.of(name), value]));
+  }
+}
+
+function criterionOf(
+  { key: name, orbitCode, ...draft }: DemoCriterion,
+  ids: { criteria: Ids; orbits: Ids },
+  orbitNames: ReadonlyMap<string, string>,
+): StudyContents['criteria'][number] {
+  const key = ids.criteria.of(name);
+  const orbitKey = orbitCode === undefined ? null : ids.orbits.of(orbitCode);
+  const input = CriterionInput.parse(draft.source === 'computed' ? { ...draft, orbitId: orbitKey } : draft);
+  const settings = { ...levelColumns(input.levels), ...limitColumns(input.limit) };
+  if (input.source !== 'computed')
+    return {
+      key,
+      orbitKey: null,
+      name: input.name,
+      nameKey: foldName(input.name),
+      unit: input.unit,
+      direction: input.direction,
+      source: input.source,
+      ...settings,
+    };
+  const orbitName = orbitCode === undefined ? null : (orbitNames.get(orbitCode) ?? orbitCode);
+  const shown = input.name ?? quantityName(input.quantity, orbitName);
+  return {
+    key,
+    orbitKey,
+    name: shown,
+    nameKey: foldName(shown),
+    unit: QUANTITIES[input.quantity].unit,
+    direction: input.direction ?? QUANTITIES[input.quantity].direction,
+    source: 'computed',
+    quantity: input.quantity,
+    ...settings,
+  };
+}
+
+function siteOf({ values = {}, ...draft }: DemoSite, criteria: Ids): StudyContents['sites'][number] {
+  const site = SiteInput.parse({ ...draft, values: criteria.keyed(values) });
+  return { ...site, code: draft.code, nameKey: foldName(site.name) };
+}
+
+/**
+ * A study of a scenario as contents to write, checked by the interface's own schemas.
+ * @returns the contents, and how a scenario's points are keyed in them
+ * @throws ZodError, RangeError where the scenario does not hold together
+ */
+export function scenarioContents(
+  study: DemoStudy,
+  vehicle: StudyContents['vehicle'],
+): { contents: StudyContents; keyed: (points: Record<string, number>) => Record<string, number> } {
+  const ids = {
+    orbits: new Ids(study.orbits.map(({ code }) => code)),
+    criteria: new Ids(study.criteria.map(({ key }) => key)),
+  };
+  const orbitNames = new Map(study.orbits.map(({ code, name }) => [code, name ?? code]));
+  const contents: StudyContents = {
+    head: {
+      organisation: study.organisation,
+      question: study.question,
+      decideBy: study.decideBy,
+      turnSpeedFraction: DEFAULT_TURN_SPEED_FRACTION,
+    },
+    vehicle,
+    orbits: study.orbits.map((draft) => {
+      const input = OrbitInput.parse(draft);
+      return { key: ids.orbits.of(draft.code), ...orbitColumns(inputFields(input, draft.code)) };
+    }),
+    criteria: study.criteria.map((draft) => criterionOf(draft, ids, orbitNames)),
+    sites: study.sites.map((draft) => siteOf(draft, ids.criteria)),
+    points: ids.criteria.keyed(study.points),
+  };
+  return { contents, keyed: (points) => ids.criteria.keyed(points) };
+}
