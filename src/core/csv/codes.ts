@@ -64,7 +64,10 @@ function candidates(name: string): string[] {
   const telling = words.filter((word) => !SMALL_WORDS.has(word.toLowerCase()));
   const used = telling.length > 0 ? telling : words;
   const letters = used.join('');
-  const initials = used.map((word) => word.charAt(0)).join('').slice(0, 4);
+  const initials = used
+    .map((word) => word.charAt(0))
+    .join('')
+    .slice(0, 4);
   const seconds = [...letters.slice(1, 8)].map((letter) => letters.charAt(0) + letter);
   return [initials, ...seconds, letters.slice(0, 3), letters.slice(0, 4)].filter(isCode);
 }

@@ -33,7 +33,9 @@ export function detectDelimiter(text: string): Delimiter {
 function scoreOf(text: string, delimiter: Delimiter): number {
   const [heading, ...rows] = tokenise(text, delimiter, SAMPLE).filter((record) => !isBlank(record));
   if (heading === undefined || heading.cells.length < 2) return 0;
-  const known = new Set(heading.cells.map((cell) => recognise(cell)?.field).filter((field) => field !== undefined));
+  const known = new Set(
+    heading.cells.map((cell) => recognise(cell)?.field).filter((field) => field !== undefined),
+  );
   const even = rows.filter((row) => row.cells.length === heading.cells.length).length;
   return 1 + known.size * 2 + even / Math.max(1, rows.length);
 }

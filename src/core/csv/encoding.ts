@@ -87,8 +87,7 @@ function decodeAs(bytes: Uint8Array, encoding: Encoding): string | undefined {
 }
 
 /** 0x80 to 0x9F of Windows-1252 (WHATWG Encoding Standard, index windows-1252); the rest is Latin-1. */
-const WINDOWS_1252_HIGH =
-  '€\u0081‚ƒ„…†‡ˆ‰Š‹Œ\u008dŽ\u008f\u0090‘’“”•–—˜™š›œ\u009džŸ';
+const WINDOWS_1252_HIGH = '€\u0081‚ƒ„…†‡ˆ‰Š‹Œ\u008dŽ\u008f\u0090‘’“”•–—˜™š›œ\u009džŸ';
 
 /** Own table: some Node releases decode this label as Latin-1, and the browser must read the same text. */
 function decodeWindows1252(bytes: Uint8Array): string {

@@ -26,6 +26,9 @@ export function readNumber(text: string, decimalComma: boolean): number | undefi
 
 /** A cell's text for a message: true minus, no longer than a line can hold. */
 export function shown(text: string): string {
-  const flat = text.trim().replace(/\s+/g, ' ').replace(/^-(?=[\d.])/, '−');
+  const flat = text
+    .trim()
+    .replace(/\s+/g, ' ')
+    .replace(/^-(?=[\d.])/, '−');
   return flat.length > 60 ? `${flat.slice(0, 59)}…` : flat;
 }

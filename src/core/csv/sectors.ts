@@ -28,7 +28,10 @@ export function readSectors(text: string, decimalComma = false): SectorsReading 
     sectors.push(sector);
   }
   if (sectors.length > MAX_SECTORS) {
-    return { kind: 'refused', message: `${sectors.length} permitted sectors; a site has at most ${MAX_SECTORS}.` };
+    return {
+      kind: 'refused',
+      message: `${sectors.length} permitted sectors; a site has at most ${MAX_SECTORS}.`,
+    };
   }
   return { kind: 'read', sectors };
 }
