@@ -1,6 +1,7 @@
 import fs from 'node:fs';
 import path from 'node:path';
 import { parseArgs } from 'node:util';
+import { loadLibrary } from '#seed/load-library.ts';
 import { EnvError, publicOrigin, readStartEnv, type StartEnv } from '#server/env.ts';
 import { anotherAdministrator, firstAdministrator } from './administrator.ts';
 import { buildIfChanged, buildWorkers } from './build.ts';
@@ -55,6 +56,7 @@ async function prepareDatabase(settings: StartEnv, connections: Connections): Pr
   const refused = refuseHost(settings, await readContents(connections.appUrl));
   if (refused) throw new Error(refused);
   await seed(settings, connections);
+  await withDatabase(connections.appUrl, loadLibrary);
   return readContents(connections.appUrl);
 }
 

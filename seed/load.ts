@@ -1,11 +1,9 @@
 import { hashPassword } from 'better-auth/crypto';
-import { sql } from 'drizzle-orm';
 import type { Db, PooledDb } from '#db/client.ts';
 import { newId } from '#db/columns.ts';
 import { writeContents } from '#db/queries/contents.ts';
 import { insertMember } from '#db/queries/member.ts';
 import { insertStudy } from '#db/queries/study.ts';
-import { insertLibraryVehicle, listLibraryVehicles } from '#db/queries/vehicle.ts';
 import { writeWeights } from '#db/queries/weights.ts';
 import { account, user } from '#db/schema/auth.ts';
 import { DEMO_DOMAIN, DEMO_PASSWORD } from '#scripts/demo.ts';
@@ -13,30 +11,7 @@ import { writeRecord } from '#server/change-study.ts';
 import { scenarioVehicle } from '#server/studies/example.ts';
 import { scenarioContents } from '#server/studies/scenario-contents.ts';
 import type { DemoPerson, DemoStudy, Scenario } from './demo/shape.ts';
-import { LIBRARY_VEHICLES } from './library.ts';
-
-/** Anyone may load at any time: whoever comes second waits here and then finds it done. */
-const SEED_LOCK = 20_310_402;
-const lock = (tx: Db) => tx.execute(sql`select pg_advisory_xact_lock(${SEED_LOCK})`);
-
-async function fillLibrary(tx: Db): Promise<void> {
-  const { total } = await listLibraryVehicles(tx, { query: '', page: 1, pageSize: 1, archived: true });
-  if (total > 0) return;
-  for (const vehicle of LIBRARY_VEHICLES) {
-    const { id } = await insertLibraryVehicle(tx, vehicle);
-    await writeRecord(tx, { studyId: null, userId: null, revision: null }, [
-      { object: 'library-vehicle', objectId: id, action: 'add', to: vehicle },
-    ]);
-  }
-}
-
-/** Gives an installation its first library vehicles; a library that has, or had, any stays as it is. */
-export async function loadLibrary(db: PooledDb): Promise<void> {
-  await db.transaction(async (tx) => {
-    await lock(tx);
-    await fillLibrary(tx);
-  });
-}
+import { fillLibrary, lockSeed } from './load-library.ts';
 
 const emailOf = (login: string): string => `${login}@${DEMO_DOMAIN}`;
 
@@ -95,7 +70,7 @@ async function makeStudy(tx: Db, study: DemoStudy, people: ReadonlyMap<string, s
  */
 export async function loadDemo(db: PooledDb, scenario: Scenario): Promise<boolean> {
   return db.transaction(async (tx) => {
-    await lock(tx);
+    await lockSeed(tx);
     await fillLibrary(tx);
     const [someone] = await tx.select({ id: user.id }).from(user).limit(1);
     if (someone) return false;

@@ -2,7 +2,8 @@ import { parseArgs } from 'node:util';
 import { openDatabase } from '#db/client.ts';
 import { env } from '#server/env.ts';
 import { scenario } from './demo/scenario.ts';
-import { loadDemo, loadLibrary } from './load.ts';
+import { loadLibrary } from './load-library.ts';
+import { loadDemo } from './load.ts';
 
 // `npm run seed` loads the demo into an empty database; `npm run seed -- --library-only` the two library vehicles.
 const { values } = parseArgs({ options: { 'library-only': { type: 'boolean', default: false } } });
