@@ -1,6 +1,7 @@
 import { constants } from '../constants.ts';
 import { metres, radians } from '../units.ts';
 import type { Metres, Radians, Seconds } from '../units.ts';
+import { ECCENTRICITY_SQUARED as e2 } from './earth.ts';
 import { periodOf } from './orbit.ts';
 
 export interface GroundTrackInput {
@@ -46,8 +47,6 @@ const STEPS = 720;
 const TICK_EVERY = 1e6;
 const TURN = 2 * Math.PI;
 const a = constants.equatorialRadius.value;
-const f = 1 / constants.inverseFlattening.value;
-const e2 = f * (2 - f);
 const omega = constants.rotationRate.value;
 
 /** −π < λ ≤ π. */

@@ -1,0 +1,66 @@
+import type { Feature, FeatureCollection, LineString, Point, Position } from 'geojson';
+import { formatNumber } from '#contract/format.ts';
+import { TILE_LATITUDE_DEG, type LngLat, type MapSite, type MapTrack } from './types.ts';
+
+export const onTiles = ({ latitudeDeg }: MapSite): boolean => Math.abs(latitudeDeg) <= TILE_LATITUDE_DEG;
+
+const collect = <F extends Feature>(features: F[]): FeatureCollection => ({
+  type: 'FeatureCollection',
+  features,
+});
+
+/** Pads in the table's order, which is also the order in which they get a label. */
+export function padFeatures(sites: readonly MapSite[]): FeatureCollection {
+  return collect(
+    sites.filter(onTiles).map(({ id, name, longitudeDeg, latitudeDeg }, order): Feature<Point> => ({
+      type: 'Feature',
+      properties: { id, name, order },
+      geometry: { type: 'Point', coordinates: [longitudeDeg, latitudeDeg] },
+    })),
+  );
+}
+
+/** The runs of a line for which `keep` holds. */
+function runs(line: readonly LngLat[], keep: (place: LngLat) => boolean): LngLat[][] {
+  const parts: LngLat[][] = [[]];
+  for (const place of line) {
+    if (keep(place)) parts.at(-1)?.push(place);
+    else if (parts.at(-1)?.length) parts.push([]);
+  }
+  return parts.filter((part) => part.length > 1);
+}
+
+export function trackFeatures(tracks: readonly MapTrack[], chosenId: string | null): FeatureCollection {
+  return collect(
+    tracks.flatMap(({ siteId, name, pieces }) =>
+      pieces
+        .flatMap((piece) => runs(piece, ([, latitude]) => Math.abs(latitude) <= TILE_LATITUDE_DEG))
+        .map((coordinates): Feature<LineString> => ({
+          type: 'Feature',
+          properties: { name, chosen: siteId === chosenId },
+          geometry: { type: 'LineString', coordinates: coordinates as Position[] },
+        })),
+    ),
+  );
+}
+
+/** The parts of tracks that tiles can't hold, about the poles. */
+export function polarPieces(tracks: readonly MapTrack[], chosenId: string | null) {
+  return tracks.flatMap(({ siteId, pieces }) =>
+    pieces
+      .flatMap((piece) => runs(piece, ([, latitude]) => Math.abs(latitude) >= TILE_LATITUDE_DEG - 1))
+      .map((line) => ({ line, chosen: siteId === chosenId })),
+  );
+}
+
+/** Cross ticks of the chosen track alone: on all of them they would say nothing. */
+export function tickFeatures(tracks: readonly MapTrack[], chosenId: string | null): FeatureCollection {
+  const chosen = tracks.find(({ siteId }) => siteId === chosenId);
+  return collect(
+    (chosen?.ticks ?? []).map(({ place, distanceKm, headingDeg }): Feature<Point> => ({
+      type: 'Feature',
+      properties: { label: `${formatNumber(distanceKm)} km`, headingDeg },
+      geometry: { type: 'Point', coordinates: place },
+    })),
+  );
+}

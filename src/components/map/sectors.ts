@@ -1,0 +1,86 @@
+import { along, type PadFrame } from './pad-frame.ts';
+import type { Palette } from './palette.ts';
+import type { FlownAzimuth, SectorDeg } from './types.ts';
+
+export const SECTOR_RADIUS = 64;
+export const CHOSEN_RADIUS = 150;
+
+const allRound = ([from, to]: SectorDeg): boolean => to - from === 360;
+
+/** Clockwise from `from`; may pass through north. */
+const width = ([from, to]: SectorDeg): number => (allRound([from, to]) ? 360 : (to - from + 360) % 360);
+
+function trace(pen: CanvasRenderingContext2D, frame: PadFrame, sector: SectorDeg, radius: number): void {
+  const whole = width(sector);
+  pen.beginPath();
+  if (!allRound(sector)) pen.moveTo(frame.x, frame.y);
+  const steps = Math.max(2, Math.ceil(whole / 3));
+  for (let step = 0; step <= steps; step += 1)
+    pen.lineTo(...along(frame, sector[0] + (whole * step) / steps, radius));
+  pen.closePath();
+}
+
+interface Looks {
+  readonly radius: number;
+  readonly fill: string;
+  readonly edge: string;
+  readonly edgeWidth: number;
+}
+
+export const sectorLooks = (p: Palette, chosen: boolean): Looks =>
+  chosen
+    ? { radius: CHOSEN_RADIUS, fill: p.chosenSector, edge: p.chosen, edgeWidth: 1.5 }
+    : { radius: SECTOR_RADIUS, fill: p.sector, edge: p.pad, edgeWidth: 1 };
+
+/** A pad's permitted azimuths; a pad without sectors, open all round, has none drawn. */
+export function drawSectors(
+  pen: CanvasRenderingContext2D,
+  frame: PadFrame,
+  sectors: readonly SectorDeg[],
+  looks: Looks,
+): void {
+  pen.fillStyle = looks.fill;
+  pen.strokeStyle = looks.edge;
+  pen.lineWidth = looks.edgeWidth;
+  pen.lineJoin = 'round';
+  for (const sector of sectors) {
+    trace(pen, frame, sector, looks.radius);
+    pen.fill();
+    pen.stroke();
+  }
+}
+
+/** Words with a halo of what lies under them. */
+export function drawWords(
+  pen: CanvasRenderingContext2D,
+  words: string,
+  [x, y]: readonly [number, number],
+  { colour, halo, font, align }: { colour: string; halo: string; font: string; align: CanvasTextAlign },
+): void {
+  pen.font = font;
+  pen.textAlign = align;
+  pen.textBaseline = 'middle';
+  pen.lineWidth = 4;
+  pen.lineJoin = 'round';
+  pen.strokeStyle = halo;
+  pen.strokeText(words, x, y);
+  pen.fillStyle = colour;
+  pen.fillText(words, x, y);
+}
+
+/** The launch azimuth of the chosen orbit, from the pad: dashed where it is not permitted. */
+export function drawFlown(
+  pen: CanvasRenderingContext2D,
+  frame: PadFrame,
+  { azimuthDeg, permitted }: FlownAzimuth,
+  p: Palette,
+): void {
+  pen.strokeStyle = p.chosen;
+  pen.lineWidth = permitted ? 3 : 2;
+  pen.setLineDash(permitted ? [] : [6, 4]);
+  pen.beginPath();
+  pen.moveTo(...along(frame, azimuthDeg, 12));
+  pen.lineTo(...along(frame, azimuthDeg, CHOSEN_RADIUS));
+  pen.stroke();
+  pen.setLineDash([]);
+}
