@@ -78,3 +78,29 @@ export function closedSums(sums: readonly PrintedSum[], least: number, most = le
     })),
   };
 }
+
+/** A printed total whose parts count with factors, such as flights a year × payload. */
+export interface WeightedSum extends PrintedSum {
+  factors: readonly number[];
+}
+
+/**
+ * The fewest decimals of the parts at which a reader who weighs and adds what is printed comes to the printed totals.
+ * @param totalDecimals digits the totals are printed to, coarser than the parts.
+ * @returns a count from least to most; most where none closes.
+ */
+export function weightedDecimals(
+  sums: readonly WeightedSum[],
+  totalDecimals: number,
+  least: number,
+  most: number,
+): number {
+  const comesOut = ({ parts, factors, total }: WeightedSum, decimals: number): boolean => {
+    const sum = parts.reduce((so, part, at) => so + Number(part.toFixed(decimals)) * (factors[at] ?? 0), 0);
+    return steps(sum, totalDecimals) === steps(total, totalDecimals);
+  };
+  for (let decimals = least; decimals < most; decimals++) {
+    if (sums.every((sum) => comesOut(sum, decimals))) return decimals;
+  }
+  return most;
+}

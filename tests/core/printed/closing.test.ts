@@ -1,13 +1,11 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { closedSums, closes, closingDecimals } from '#core/printed/closing.ts';
-import { decimalsNeeded, printedFigure } from '#core/printed/figure.ts';
+import { closedSums, closes, closingDecimals, weightedDecimals } from '#core/printed/closing.ts';
+import { formatNumber } from '#contract/format.ts';
+import { decimalsNeeded } from '#core/printed/decimals.ts';
 
 /** Reads the printed text back and adds in whole steps, as a person with pencil and paper does. */
-const read = (text: string, decimals: number): bigint =>
-  BigInt(
-    text.replace('−', '-').replaceAll(',', '').replace('.', '') + (text === '0' ? '0'.repeat(decimals) : ''),
-  );
+const read = (text: string): bigint => BigInt(text.replace('−', '-').replaceAll(',', '').replace('.', ''));
 
 const part = fc.double({ min: -20_000, max: 20_000, noNaN: true });
 const sums = fc.array(
@@ -17,26 +15,7 @@ const sums = fc.array(
   { minLength: 1, maxLength: 40 },
 );
 
-describe('printed figures', () => {
-  // [derived] from the written rule: true minus U+2212, comma each three digits, "0" for zero.
-  test.each([
-    [0, 2, '0'],
-    [-0, 0, '0'],
-    [1234567.891, 1, '1,234,567.9'],
-    [-1234.5, 1, '−1,234.5'],
-    [-0.04, 1, '0.0'],
-    [999.96, 1, '1,000.0'],
-    [12, 0, '12'],
-    [123456, 0, '123,456'],
-  ])('%d to %d decimals is %s', (value, decimals, text) => {
-    expect(printedFigure(value, decimals)).toBe(text);
-  });
-
-  test('a figure that is none is refused', () => {
-    expect(() => printedFigure(NaN, 1)).toThrow(RangeError);
-    expect(() => printedFigure(Infinity, 1)).toThrow(RangeError);
-  });
-
+describe('decimals of a column', () => {
   test('decimals needed are the fewest that lose nothing, up to the most', () => {
     expect(decimalsNeeded([])).toBe(0);
     expect(decimalsNeeded([12.5, 3])).toBe(1);
@@ -77,10 +56,10 @@ describe('sums that close', () => {
     fc.assert(
       fc.property(sums, fc.integer({ min: 0, max: 3 }), (given, least) => {
         const closed = closedSums(given, least);
-        const text = (value: number) => printedFigure(value, closed.decimals);
+        const text = (value: number) => formatNumber(value, closed.decimals);
         closed.sums.forEach((sum, row) => {
-          const added = sum.parts.reduce((so, p) => so + read(text(p), closed.decimals), 0n);
-          expect(added).toBe(read(text(sum.total), closed.decimals));
+          const added = sum.parts.reduce((so, p) => so + read(text(p)), 0n);
+          expect(added).toBe(read(text(sum.total)));
           sum.parts.forEach((p, at) => {
             const original = given[row]?.parts[at] ?? NaN;
             expect(Math.abs(p - original)).toBeLessThan(10 ** -closed.decimals + 1e-9);
@@ -90,5 +69,12 @@ describe('sums that close', () => {
       }),
       { seed: 20310401 },
     );
+  });
+
+  test('a weighted sum closes at its own, coarser decimals', () => {
+    // [derived]: 3 × 33.4 kg is 0.1002 t, printed 0.10; from 33 kg a reader comes to 0.099, printed 0.10 as well.
+    expect(weightedDecimals([{ parts: [33.4], factors: [0.003], total: 0.1002 }], 2, 0, 2)).toBe(0);
+    // [derived]: 300 × 33.4 kg is 10.02 t, printed 10.0; from 33 kg a reader comes to 9.9, so 33.4 is printed.
+    expect(weightedDecimals([{ parts: [33.4], factors: [0.3], total: 10.02 }], 1, 0, 2)).toBe(1);
   });
 });

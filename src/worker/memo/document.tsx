@@ -1,0 +1,113 @@
+import { Document, Page, StyleSheet, Text, View } from '@react-pdf/renderer';
+import type { MemoHeadline, MemoModel, MemoSection } from '#contract/memo.ts';
+import { Block, Runs } from './blocks.tsx';
+import { Foot, Head, pageStyle, TITLE_BLOCK, TitleBlock } from './frame.tsx';
+import { figureFont } from './table.tsx';
+import { INK, MARGIN, PAPER, TYPE } from './theme.ts';
+
+const s = StyleSheet.create({
+  finding: { ...TYPE.title, marginBottom: 4 },
+  question: { ...TYPE.body, color: INK.ink2, marginBottom: 10 },
+  opening: { flexDirection: 'row', gap: 24, marginBottom: 4 },
+  headline: { width: 150, borderLeftWidth: 2.4, borderLeftColor: INK.ink, paddingLeft: 10, gap: 5 },
+  label: { ...TYPE.note, color: INK.ink2 },
+  figure: { fontSize: 14, lineHeight: 18 / 14, fontWeight: 600 },
+  heading: { ...TYPE.heading, marginTop: 14, marginBottom: 5 },
+});
+
+function Headline({ items }: { items: MemoHeadline[] }) {
+  const leads = items.some((item) => item.leads);
+  return (
+    <View style={[s.headline, leads ? { borderLeftColor: INK.signal } : {}]}>
+      {items.map((item) => (
+        <View key={item.label}>
+          <Text style={s.label}>{item.label}</Text>
+          <Text>
+            <Text
+              style={[
+                s.figure,
+                { fontFamily: figureFont(item.figure) },
+                item.leads ? { color: INK.signal } : {},
+              ]}
+            >
+              {item.figure}
+            </Text>
+            <Text style={s.label}>{item.note === '' ? '' : `  ${item.note}`}</Text>
+          </Text>
+        </View>
+      ))}
+    </View>
+  );
+}
+
+function Opening({ model }: { model: MemoModel }) {
+  return (
+    <>
+      <Text style={s.finding}>{model.finding}</Text>
+      <Text style={s.question}>{model.question}</Text>
+      <View style={s.opening}>
+        <View style={{ flex: 1 }}>
+          {model.reasons.map((reason, at) => (
+            <Text key={at} style={{ ...TYPE.body, marginBottom: 6 }}>
+              <Runs text={reason} />
+            </Text>
+          ))}
+        </View>
+        {model.headline.length > 0 && <Headline items={model.headline} />}
+      </View>
+    </>
+  );
+}
+
+function Section({ section, width }: { section: MemoSection; width: number }) {
+  return (
+    <View {...(section.heading === null ? {} : { bookmark: section.heading })}>
+      {section.heading !== null && (
+        <Text style={s.heading} minPresenceAhead={110}>
+          {section.heading}
+        </Text>
+      )}
+      {section.blocks.map((block, at) => (
+        <Block key={at} block={block} width={width} />
+      ))}
+    </View>
+  );
+}
+
+/** The whole memo. Dates are the model's UTC day, so that a day's memo of the same inputs is the same file. */
+export function MemoDocument({ model }: { model: MemoModel }) {
+  const day = new Date(`${model.titleBlock.date}T00:00:00Z`);
+  const paper = PAPER[model.paper];
+  const size: [number, number] = [paper.width, paper.height];
+  const width = paper.width - MARGIN.left - MARGIN.right;
+  const [first, ...rest] = model.sections;
+  return (
+    <Document
+      title={model.documentTitle}
+      author={model.titleBlock.organisation}
+      subject={model.question}
+      creator="Spinward"
+      producer="Spinward"
+      language="en"
+      creationDate={day}
+      modificationDate={day}
+    >
+      <Page size={size} style={pageStyle(TITLE_BLOCK + 10)}>
+        <TitleBlock block={model.titleBlock} />
+        <Head status={model.status} />
+        <Foot text={model.foot} />
+        <Opening model={model} />
+        {first && <Section section={first} width={width} />}
+      </Page>
+      {rest.length > 0 && (
+        <Page size={size} style={pageStyle(8)}>
+          <Head status={model.status} />
+          <Foot text={model.foot} />
+          {rest.map((section) => (
+            <Section key={section.id} section={section} width={width} />
+          ))}
+        </Page>
+      )}
+    </Document>
+  );
+}
