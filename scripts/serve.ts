@@ -1,4 +1,3 @@
-import fs from 'node:fs';
 import path from 'node:path';
 import { parseArgs } from 'node:util';
 import { loadLibrary } from '#seed/load-library.ts';
@@ -11,7 +10,6 @@ import { DEMO_DOMAIN, DEMO_PASSWORD, DEMO_PEOPLE, refuseHost, shouldSeed, type C
 import { stopInOrder } from './graceful.ts';
 import { migrateDatabase, roleOf } from './migrate.ts';
 import { portIsFree } from './ports.ts';
-import { openDataFolder } from './private-files.ts';
 
 interface Flags {
   dev: boolean;
@@ -35,27 +33,22 @@ const childEnv = (settings: StartEnv, { appUrl, ownerUrl }: Connections, content
   SPINWARD_DEMO: contents.hasDemo ? '1' : '0',
 });
 
-/**
- * Seeds the demo. A note in the data folder stands while it does, so that a seeding that was killed halfway is taken
- * up at the next start; the loader can run any number of times.
- */
-async function seed(settings: StartEnv, connections: Connections): Promise<void> {
-  const note = path.join(openDataFolder(settings.SPINWARD_DATA), 'seeding');
-  const contents = await readContents(connections.appUrl);
-  if (!shouldSeed(settings, contents) && !fs.existsSync(note)) return;
-  console.log('Seeding the demo…');
-  fs.writeFileSync(note, '');
-  const env = childEnv(settings, connections, contents);
-  await runNode(['--import', 'tsx', 'seed/run.ts'], env, 'Seeding the demo');
-  fs.rmSync(note);
+/** Gives an empty database its beginning: the demo, or the vehicle library alone. Each is one transaction. */
+async function seed(settings: StartEnv, connections: Connections, contents: Contents): Promise<void> {
+  if (!contents.isEmpty) return;
+  const demo = shouldSeed(settings, contents);
+  if (demo) console.log('Seeding the demo…');
+  const args = ['--import', 'tsx', 'seed/run.ts', ...(demo ? [] : ['--library-only'])];
+  await runNode(args, childEnv(settings, connections, contents), 'Filling the empty database');
 }
 
 /** Everything between a database that answers and one that is ready to be served. */
 async function prepareDatabase(settings: StartEnv, connections: Connections): Promise<Contents> {
   await migrateDatabase({ ownerUrl: connections.ownerUrl, appRole: roleOf(connections.appUrl) });
-  const refused = refuseHost(settings, await readContents(connections.appUrl));
+  const contents = await readContents(connections.appUrl);
+  const refused = refuseHost(settings, contents);
   if (refused) throw new Error(refused);
-  await seed(settings, connections);
+  await seed(settings, connections, contents);
   await withDatabase(connections.appUrl, loadLibrary);
   return readContents(connections.appUrl);
 }
