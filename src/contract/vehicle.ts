@@ -56,11 +56,14 @@ export const LossesInput = z
   .meta({ id: 'Losses', description: 'Entered losses in m/s, to burn-out near the parking altitude' });
 export type LossesInput = z.infer<typeof LossesInput>;
 
-/** Usual ranges of entered losses, shown as guidance beside the fields; common practice, no one source. */
+/**
+ * Usual ranges of entered losses, shown as guidance beside the fields and never enforced: published budgets of flown
+ * launchers, from lift-off to low orbit. Drag reaches some 400 m/s on small vehicles.
+ */
 export const lossGuidanceMps = {
-  gravity: [1000, 1600],
-  drag: [40, 250],
-  steering: [10, 150],
+  gravity: [1150, 1600],
+  drag: [40, 160],
+  steering: [30, 360],
 } as const satisfies Record<keyof LossesInput, readonly [number, number]>;
 
 /** Burn times share the factor g₀, so the comparison needs none: propellant × impulse / thrust. */
