@@ -12,28 +12,30 @@ function asRoot(): string[] | undefined {
 
 function root(command: string[], input?: string): boolean {
   const [program = '', ...args] = [...(asRoot() ?? []), ...command];
-  const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
   const stdio = [input === undefined ? 'ignore' : 'pipe', 'ignore', 'inherit'] as const;
-  return spawnSync(program, args, { env, input, stdio: [...stdio] }).status === 0;
+  return spawnSync(program, args, { input, stdio: [...stdio] }).status === 0;
 }
+
+/** Through env, because sudo hands no environment on. */
+const APT = ['env', 'DEBIAN_FRONTEND=noninteractive', 'apt-get'];
 
 let listsAreFresh = false;
 
 /** Installs Debian packages, saying so. @throws Error with what to do when this user may not. */
 export function aptInstall(packages: readonly string[], why: string): void {
-  const by_hand = `apt-get install ${packages.join(' ')}`;
+  const byHand = `apt-get install ${packages.join(' ')}`;
   if (!fs.existsSync('/usr/bin/apt-get'))
     throw new Error(
       `${why}, and this is no Debian system. Install ${packages.join(' and ')} and start again.`,
     );
   if (!asRoot())
     throw new Error(
-      `${why}, and installing needs root. Run "${by_hand}" as root (or through sudo), then again.`,
+      `${why}, and installing needs root. Run "${byHand}" as root (or through sudo), then again.`,
     );
   console.log(`${why}: installing ${packages.join(' and ')} from Debian (about a minute)…`);
-  listsAreFresh ||= root(['apt-get', 'update', '-qq']);
-  if (!root(['apt-get', 'install', '-y', '-qq', '--no-install-recommends', ...packages]))
-    throw new Error(`apt-get could not install ${packages.join(' and ')}. Run "${by_hand}" to see why.`);
+  listsAreFresh ||= root([...APT, 'update', '-qq']);
+  if (!root([...APT, 'install', '-y', '-qq', '--no-install-recommends', ...packages]))
+    throw new Error(`apt-get could not install ${packages.join(' and ')}. Run "${byHand}" to see why.`);
 }
 
 /** Keeps Debian's package from starting a cluster of its own on port 5432, which nobody asked for. */
