@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { closedSums, closes, closingDecimals, weightedDecimals } from '#core/printed/closing.ts';
 import { formatNumber } from '#contract/format.ts';
-import { decimalsNeeded } from '#core/printed/decimals.ts';
+import { decimalsNeeded } from '#core/printed/figure.ts';
 
 /** Reads the printed text back and adds in whole steps, as a person with pencil and paper does. */
 const read = (text: string): bigint => BigInt(text.replace('−', '-').replaceAll(',', '').replace('.', ''));
