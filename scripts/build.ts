@@ -1,9 +1,9 @@
-import { spawnSync } from 'node:child_process';
 import { createHash } from 'node:crypto';
 import fs from 'node:fs';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { build as bundle } from 'esbuild';
+import { runNode } from './child.ts';
 import { inLock } from './lock.mjs';
 import { precompress } from './precompress.ts';
 
@@ -13,6 +13,7 @@ const STAMP = path.join(ROOT, 'dist', 'built-from');
 /** Everything a build is made from. */
 const SOURCES = [
   'src',
+  'seed',
   'public',
   'scripts',
   'astro.config.ts',
@@ -66,15 +67,9 @@ export async function buildWorkers(): Promise<void> {
   });
 }
 
-function buildPages(): void {
-  const astro = path.join(ROOT, 'node_modules/astro/astro.js');
-  const env = { ...process.env, NODE_ENV: 'production', ASTRO_TELEMETRY_DISABLED: '1' };
-  const built = spawnSync(process.execPath, [astro, 'build', '--silent'], {
-    cwd: ROOT,
-    env,
-    stdio: 'inherit',
-  });
-  if (built.status !== 0) throw new Error('The build failed; what Astro says stands above.');
+function buildPages(): Promise<void> {
+  const env = { NODE_ENV: 'production', ASTRO_TELEMETRY_DISABLED: '1' };
+  return runNode(['node_modules/astro/astro.js', 'build', '--silent'], env, 'The build');
 }
 
 /** Builds what is served, unless it is built from these very sources already. */
@@ -84,7 +79,7 @@ export async function buildIfChanged(): Promise<void> {
     if (fs.existsSync(STAMP) && fs.readFileSync(STAMP, 'utf8') === wanted) return;
     console.log('Building (about half a minute)…');
     fs.rmSync(STAMP, { force: true });
-    buildPages();
+    await buildPages();
     await buildWorkers();
     precompress(path.join(ROOT, 'dist/client/_astro'));
     fs.writeFileSync(STAMP, wanted);
@@ -92,4 +87,7 @@ export async function buildIfChanged(): Promise<void> {
 }
 
 if (process.argv[1] && path.resolve(process.argv[1]) === fileURLToPath(import.meta.url))
-  await buildIfChanged();
+  buildIfChanged().catch((error: Error) => {
+    console.error(error.message);
+    process.exitCode = 1;
+  });
