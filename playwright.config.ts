@@ -1,7 +1,7 @@
 import os from 'node:os';
 import path from 'node:path';
 import { defineConfig, devices } from '@playwright/test';
-import { chromiumPath } from './scripts/chromium.ts';
+import { chromiumPath } from '#scripts/chromium.ts';
 
 const PORT = Number(process.env['E2E_PORT'] ?? 4399);
 const REPORT = process.env['E2E_REPORT'];
