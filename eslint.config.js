@@ -52,6 +52,16 @@ export default tseslint.config(
     },
   },
   { files: ['**/*.tsx'], ...jsxA11y.flatConfigs.recommended, plugins: {} },
+  {
+    // A table that scrolls inside its place is a region the keyboard must reach.
+    files: ['**/*.tsx'],
+    rules: {
+      'jsx-a11y/no-noninteractive-tabindex': [
+        'error',
+        { tags: [], roles: ['tabpanel', 'region'], allowExpressionValues: true },
+      ],
+    },
+  },
   { files: ['src/components/**/*.tsx'], ...reactHooks.configs.flat.recommended },
   ...astro.configs['flat/recommended'],
   ...astro.configs['flat/jsx-a11y-recommended'],

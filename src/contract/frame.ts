@@ -42,3 +42,14 @@ export const STATE_NAMES: Record<StudyState, string> = {
   'in-review': 'In review',
   baselined: 'Baselined',
 };
+
+/** Why this viewer can't change the study's inputs now, in words; null where they can. The server decides again. */
+export function inputsLock({ study }: StudyFrame): string | null {
+  if (study.role === 'reader' || study.role === 'reviewer')
+    return 'A lead or an engineer changes the inputs. You may filter, export and compute.';
+  if (study.archived) return 'The study is archived. Restore it to change its inputs.';
+  if (study.state === 'in-review') return 'The study is in review: its inputs are locked.';
+  if (study.state === 'baselined' && study.role !== 'lead')
+    return 'After a baseline the lead makes the next change.';
+  return null;
+}

@@ -1,4 +1,4 @@
-import { useEffect, useRef, useState, type KeyboardEvent } from 'react';
+import { useEffect, useRef, useState, type KeyboardEvent as ReactKeyboardEvent, type RefObject } from 'react';
 import type { SectionFrame } from '#contract/frame.ts';
 import { useApi } from '#components/live/hooks.ts';
 import { Dialog } from '#components/ui/Dialog.tsx';
@@ -58,27 +58,35 @@ export function FindDialog(props: FindProps) {
   );
 }
 
+/** Focus begins in the field; up and down walk from it through what was found. */
+function useArrows(root: RefObject<HTMLDivElement | null>) {
+  useEffect(() => {
+    const element = root.current;
+    element?.querySelector('input')?.focus();
+    const walk = (event: KeyboardEvent) => {
+      if (event.key !== 'ArrowDown' && event.key !== 'ArrowUp') return;
+      event.preventDefault();
+      const stops = [...(element?.querySelectorAll<HTMLElement>('input, a') ?? [])];
+      const here = stops.findIndex((stop) => stop === document.activeElement);
+      const there = here + (event.key === 'ArrowDown' ? 1 : -1);
+      stops[Math.min(Math.max(there, 0), stops.length - 1)]?.focus();
+    };
+    element?.addEventListener('keydown', walk);
+    return () => element?.removeEventListener('keydown', walk);
+  }, [root]);
+}
+
 function FindForm(props: FindProps) {
   const [query, setQuery] = useState('');
   const { found, waiting } = useFound(query, props);
   const root = useRef<HTMLDivElement>(null);
-  useEffect(() => root.current?.querySelector('input')?.focus(), []);
-  const walk = (event: KeyboardEvent) => {
-    if (event.key !== 'ArrowDown' && event.key !== 'ArrowUp') return;
-    event.preventDefault();
-    const stops = [...(root.current?.querySelectorAll<HTMLElement>('input, a') ?? [])];
-    const here = stops.findIndex((stop) => stop === document.activeElement);
-    const there = here + (event.key === 'ArrowDown' ? 1 : -1);
-    stops[Math.min(Math.max(there, 0), stops.length - 1)]?.focus();
-  };
-  const goFirst = (event: KeyboardEvent) => {
+  useArrows(root);
+  const goFirst = (event: ReactKeyboardEvent) => {
     const first = found[0];
     if (event.key === 'Enter' && first) location.assign(first.href);
   };
   return (
-    // The arrows are heard as they rise from the field and the links inside.
-    // eslint-disable-next-line jsx-a11y/no-static-element-interactions
-    <div ref={root} onKeyDown={walk}>
+    <div ref={root}>
       <TextField
         label={props.studyId ? 'Section or site' : 'Study'}
         type="search"

@@ -1,4 +1,4 @@
-import { announceStep } from '#components/live/hooks.ts';
+import { announceStep } from '#components/live/step.ts';
 import { askToFind } from './find.ts';
 
 const KEY = 'spinward-single-keys';

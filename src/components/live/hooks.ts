@@ -1,6 +1,7 @@
-import { useEffect, useRef } from 'react';
+import { useCallback, useEffect, useRef, useState } from 'react';
 import useSWR, { type SWRConfiguration } from 'swr';
-import { apiFetch, type ApiError } from './api.ts';
+import { apiFetch, ApiError } from './api.ts';
+import { onStep } from './step.ts';
 
 /**
  * Reads an address and keeps it fresh; null reads nothing. `data` stays while it is read again, so that old figures
@@ -22,24 +23,35 @@ export function useFinding(finding: string) {
   }, [finding]);
 }
 
-const STEP = 'spinward:step';
-
-/** Told by the n and p keys: the next or the previous site. */
-export function announceStep(step: 1 | -1) {
-  document.dispatchEvent(new CustomEvent<1 | -1>(STEP, { detail: step }));
+/** Calls `take` with 1 or −1 when n or p is pressed outside a field. */
+export function useStep(take: (step: 1 | -1) => void) {
+  const latest = useRef(take);
+  useEffect(() => {
+    latest.current = take;
+  });
+  useEffect(() => onStep((step) => latest.current(step)), []);
 }
 
-/** Calls `onStep` with 1 or −1 when n or p is pressed outside a field. */
-export function useStep(onStep: (step: 1 | -1) => void) {
-  const latest = useRef(onStep);
-  useEffect(() => {
-    latest.current = onStep;
-  });
-  useEffect(() => {
-    const hear = (event: Event) => {
-      if (event instanceof CustomEvent) latest.current(event.detail as 1 | -1);
-    };
-    document.addEventListener(STEP, hear);
-    return () => document.removeEventListener(STEP, hear);
+/**
+ * For one action of a screen: whether it is under way, and the refusal it met. `run` answers whether it was done; any
+ * error that is not the server's is a defect and goes on up.
+ */
+export function useAction() {
+  const [busy, setBusy] = useState(false);
+  const [error, setError] = useState<ApiError | null>(null);
+  const run = useCallback(async (act: () => Promise<unknown>): Promise<boolean> => {
+    setBusy(true);
+    setError(null);
+    try {
+      await act();
+      return true;
+    } catch (caught) {
+      if (!(caught instanceof ApiError)) throw caught;
+      setError(caught);
+      return false;
+    } finally {
+      setBusy(false);
+    }
   }, []);
+  return { busy, error, run };
 }

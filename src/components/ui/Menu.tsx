@@ -1,4 +1,4 @@
-import { useEffect, useId, useRef, useState, type KeyboardEvent, type ReactNode } from 'react';
+import { useEffect, useId, useRef, useState, type ReactNode, type RefObject } from 'react';
 import { Icon, type IconName } from './Icon.tsx';
 
 interface MenuProps {
@@ -12,24 +12,57 @@ interface MenuProps {
   children: ReactNode;
 }
 
+const STEPS: Record<string, number> = { ArrowDown: 1, ArrowUp: -1 };
+
+/** While a menu is open: arrows walk its entries, Escape, a choice or a press elsewhere closes it. */
+function useOpenMenu(root: RefObject<HTMLDivElement | null>, open: boolean, close: (back: boolean) => void) {
+  const latest = useRef(close);
+  useEffect(() => {
+    latest.current = close;
+  });
+  useEffect(() => {
+    const element = root.current;
+    if (!open || !element) return;
+    const entries = () => [...element.querySelectorAll<HTMLElement>('.menu :is(a, button)')];
+    entries()[0]?.focus();
+    const walk = (event: KeyboardEvent) => {
+      const step = STEPS[event.key];
+      if (event.key === 'Escape') latest.current(true);
+      else if (step !== undefined) {
+        const all = entries();
+        const here = all.findIndex((entry) => entry === document.activeElement);
+        all[(here + step + all.length) % all.length]?.focus();
+      } else return;
+      event.preventDefault();
+      event.stopPropagation();
+    };
+    const choose = (event: MouseEvent) => {
+      if (event.target instanceof Element && event.target.closest('.menu :is(a, button)'))
+        latest.current(false);
+    };
+    const away = (event: PointerEvent) => {
+      if (event.target instanceof Node && !element.contains(event.target)) latest.current(false);
+    };
+    element.addEventListener('keydown', walk);
+    element.addEventListener('click', choose);
+    document.addEventListener('pointerdown', away);
+    return () => {
+      element.removeEventListener('keydown', walk);
+      element.removeEventListener('click', choose);
+      document.removeEventListener('pointerdown', away);
+    };
+  }, [root, open]);
+}
+
 /** A button that opens a short list of actions. Arrows walk, Escape closes and goes back to the button. */
 export function Menu({ label, icon, size, iconOnly = false, children }: MenuProps) {
   const [open, setOpen] = useState(false);
   const root = useRef<HTMLDivElement>(null);
   const id = useId();
-  useEffect(() => {
-    if (!open) return;
-    root.current?.querySelector<HTMLElement>('.menu :is(a, button)')?.focus();
-    const away = (event: PointerEvent) => {
-      if (event.target instanceof Node && !root.current?.contains(event.target)) setOpen(false);
-    };
-    document.addEventListener('pointerdown', away);
-    return () => document.removeEventListener('pointerdown', away);
-  }, [open]);
-  const close = () => {
+  useOpenMenu(root, open, (back) => {
     setOpen(false);
-    root.current?.querySelector('button')?.focus();
-  };
+    if (back) root.current?.querySelector('button')?.focus();
+  });
   return (
     <div className="relative inline-block" ref={root}>
       <button
@@ -37,7 +70,7 @@ export function Menu({ label, icon, size, iconOnly = false, children }: MenuProp
         className={iconOnly ? 'icon-button' : 'btn'}
         data-size={size}
         aria-expanded={open}
-        aria-controls={id}
+        aria-controls={open ? id : undefined}
         aria-label={iconOnly ? label : undefined}
         title={iconOnly ? label : undefined}
         onClick={() => setOpen(!open)}
@@ -46,38 +79,11 @@ export function Menu({ label, icon, size, iconOnly = false, children }: MenuProp
         {!iconOnly && label}
         {!iconOnly && <Icon name="down" />}
       </button>
-      {open && <MenuList id={id} onLeave={close} onChoose={() => setOpen(false)} items={children} />}
-    </div>
-  );
-}
-
-interface MenuListProps {
-  id: string;
-  items: ReactNode;
-  onLeave: () => void;
-  onChoose: () => void;
-}
-
-function MenuList({ id, items, onLeave, onChoose }: MenuListProps) {
-  const list = useRef<HTMLDivElement>(null);
-  const walk = (event: KeyboardEvent) => {
-    if (event.key === 'Escape') {
-      event.stopPropagation();
-      onLeave();
-      return;
-    }
-    const step = event.key === 'ArrowDown' ? 1 : event.key === 'ArrowUp' ? -1 : 0;
-    if (step === 0) return;
-    event.preventDefault();
-    const entries = [...(list.current?.querySelectorAll<HTMLElement>('a, button') ?? [])];
-    const here = entries.findIndex((entry) => entry === document.activeElement);
-    entries[(here + step + entries.length) % entries.length]?.focus();
-  };
-  return (
-    // The keys are heard as they rise from the buttons inside; the list itself is no control.
-    // eslint-disable-next-line jsx-a11y/no-static-element-interactions
-    <div className="menu right-0 z-(--z-map-control)" id={id} ref={list} onKeyDown={walk} onClick={onChoose}>
-      {items}
+      {open && (
+        <div className="menu right-0 z-(--z-map-control)" id={id}>
+          {children}
+        </div>
+      )}
     </div>
   );
 }

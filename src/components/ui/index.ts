@@ -18,6 +18,7 @@
  * After an autosave `announceSaved({ revision, savedAt })` brings the title block's Revision cell up to date.
  * Figures: src/contract/format.ts, always. `useFinding(text)` keeps the page's title equal to a changing finding.
  * `toast(text, undo?)` for finished actions out of view. `useStep(fn)` hears the n and p keys.
+ * `useAction()` runs one action and holds its refusal. A link to a site is `/studies/{id}/sites?site={siteId}`.
  */
 export { Button, ButtonLink, IconButton, type ButtonKind } from './Button.tsx';
 export { Icon, type IconName } from './Icon.tsx';
@@ -37,6 +38,7 @@ export { asTypedNumber, showServerErrors, summaryLines, useContractForm } from '
 export { ErrorSummary, type SummaryLine } from './ErrorSummary.tsx';
 export { Finding, Panel } from './Finding.tsx';
 export { Caution, EmptyState, KeyLetter, NoFigure, Notice, Progress, Stale, Tag } from './States.tsx';
+export { TableScroll } from './TableScroll.tsx';
 export { ConfirmDialog, Dialog } from './Dialog.tsx';
 export { SideSheet } from './SideSheet.tsx';
 export { ToastRegion, toast } from './Toast.tsx';

@@ -78,6 +78,8 @@ function make() {
     },
     advanced: { cookiePrefix: 'spinward', ipAddress: { ipAddressHeaders: ['x-client-ip'] } },
     telemetry: { enabled: false },
+    // A wrong password is a person's everyday business and no matter for the log.
+    logger: { level: 'error' },
   });
 }
 
