@@ -1,7 +1,8 @@
 import { foldName } from './codes.ts';
 import { stripGuard } from './guard.ts';
 import { recognise, SITE_FIELDS, type ColumnField, type Recognised, type SiteField } from './headings.ts';
-import { MAX_COLUMNS, MAX_NAME_LENGTH } from './limits.ts';
+import type { FigureKind } from './figures.ts';
+import { lengthOf, MAX_COLUMNS, MAX_CRITERION_LENGTH, MAX_UNIT_LENGTH } from './limits.ts';
 
 /** A column of the file and what it is read as. */
 export interface Column {
@@ -13,6 +14,8 @@ export interface Column {
   readonly unit: string | null;
   /** The name of the entered criterion that the column fills. */
   readonly criterion: string | null;
+  /** Whether that criterion's cells are numbers or texts; null for other columns. */
+  readonly kind: FigureKind | null;
 }
 
 /** A changed match: by the column's place from 0, or by its heading. */
@@ -119,10 +122,10 @@ function describe(
     const field = fields[index] ?? 'unused';
     if (field === 'criterion') {
       const { name, unit } = nameCriterion(heading, index, used);
-      return { index, heading, field, unit, criterion: name };
+      return { index, heading, field, unit, criterion: name, kind: 'number' as const };
     }
     const unit = field === 'elevationM' ? (recognised[index]?.unit ?? feetOrMetres(heading)) : null;
-    return { index, heading, field, unit, criterion: null };
+    return { index, heading, field, unit, criterion: null, kind: null };
   });
 }
 
@@ -133,12 +136,14 @@ function feetOrMetres(heading: string): 'm' | 'ft' {
 /** "Cost to first launch (M€)" is the criterion "Cost to first launch" in M€; a second like name is numbered. */
 function nameCriterion(heading: string, index: number, used: Set<string>): { name: string; unit: string } {
   const flat = heading.replace(/\s+/g, ' ');
-  const [, bare, round, square] = /^(.*\S)\s*(?:\(([^()]{1,24})\)|\[([^[\]]{1,24})\])$/.exec(flat) ?? [];
-  const stem = cut((bare ?? flat) || `Column ${index + 1}`, MAX_NAME_LENGTH - 5);
+  const [, bare, round, square] = /^(.*\S)\s*(?:\(([^()]+)\)|\[([^[\]]+)\])$/.exec(flat) ?? [];
+  const unit = (round ?? square ?? '').trim();
+  const parted = unit !== '' && lengthOf(unit) <= MAX_UNIT_LENGTH;
+  const stem = cut((parted ? bare : flat) || `Column ${index + 1}`, MAX_CRITERION_LENGTH - 6);
   let name = stem;
   for (let copy = 2; used.has(foldName(name)); copy += 1) name = `${stem} (${copy})`;
   used.add(foldName(name));
-  return { name, unit: (round ?? square ?? '').trim() };
+  return { name, unit: parted ? unit : '' };
 }
 
 function cut(text: string, length: number): string {

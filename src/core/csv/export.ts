@@ -40,7 +40,7 @@ const HEADING = [
  * @see RFC 4180
  */
 export function writeSites(sites: readonly ExportedSite[], criteria: readonly ExportedCriterion[]): string {
-  const names = criteria.map(({ name, unit }) => (/^[^()]{1,24}$/.test(unit) ? `${name} (${unit})` : name));
+  const names = criteria.map(({ name, unit }) => (/^[^()]{1,20}$/.test(unit) ? `${name} (${unit})` : name));
   const lines = sites.map((site) => [
     site.code,
     site.name,

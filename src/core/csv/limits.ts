@@ -3,6 +3,8 @@ export const MAX_FILE_BYTES = 5 * 1024 * 1024;
 export const MAX_ROWS = 10_000;
 export const MAX_COLUMNS = 200;
 export const MAX_NAME_LENGTH = 120;
+export const MAX_CRITERION_LENGTH = 80;
+export const MAX_UNIT_LENGTH = 20;
 export const MAX_TEXT_LENGTH = 2_000;
 export const MAX_SECTORS = 12;
 /** From below the Dead Sea shore to above any summit. */

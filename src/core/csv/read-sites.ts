@@ -1,6 +1,7 @@
 import { matchColumns, type Column, type ColumnChoice } from './columns.ts';
 import { detectDelimiter, isBlank, isSeparatorLine } from './delimiter.ts';
 import { decode, type Encoding } from './encoding.ts';
+import { settleFigures } from './figures.ts';
 import { MAX_FILE_BYTES, MAX_ROWS } from './limits.ts';
 import { settleRows, type ExistingSite, type Outcome, type ReadRow, type Row } from './outcomes.ts';
 import { refusal } from './reasons.ts';
@@ -55,26 +56,18 @@ export function readSites(bytes: Uint8Array, options: ReadOptions): SitesFile | 
   const cells = trimEnd(heading.cells);
   const matched = matchColumns(cells, options.columns);
   if (matched.kind === 'refused') return unreadable(matched.code, matched.message, matched.columns);
-  const { columns } = matched;
-  if (records.length === 0) return unreadable('empty', 'The file has a heading and no rows.', columns);
+  if (records.length === 0)
+    return unreadable('empty', 'The file has a heading and no rows.', matched.columns);
   if (records.length > MAX_ROWS) {
     const message = `The file has ${records.length.toLocaleString('en')} rows; at most 10,000 are read.`;
     return unreadable('too-many-rows', message);
   }
-  const decimalComma = hasDecimalComma(records, columns, delimiter);
-  const rows = settleRows(
-    records.map((record) => readRecord(record, cells.length, columns, decimalComma)),
-    options.existing,
-  );
-  return {
-    kind: 'read',
-    encoding: decoded.encoding,
-    delimiter,
-    decimalComma,
-    columns,
-    counts: count(rows),
-    rows,
-  };
+  const decimalComma = hasDecimalComma(records, matched.columns, delimiter);
+  const read = records.map((record) => readRecord(record, cells.length, matched.columns, decimalComma));
+  const columns = settleFigures(read, matched.columns);
+  const rows = settleRows(read, options.existing);
+  const { encoding } = decoded;
+  return { kind: 'read', encoding, delimiter, decimalComma, columns, counts: count(rows), rows };
 }
 
 function unreadable(

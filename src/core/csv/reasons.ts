@@ -10,6 +10,7 @@ export type ReasonCode =
   | 'code-malformed'
   | 'code-taken'
   | 'sector'
+  | 'text-figure'
   | 'duplicate-in-file'
   | 'duplicate'
   | 'too-many-columns'

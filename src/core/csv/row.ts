@@ -69,7 +69,7 @@ const READERS: Readonly<Record<SiteField, (site: SiteReading, text: string, read
   },
   code(site, text, { reasons }) {
     if (text === '') return;
-    site.code = text;
+    site.code = text.toUpperCase();
     if (isCode(text)) return;
     reasons.push(refusal('code-malformed', 'code', `Code ${shown(text)} is not 2 to 8 letters or digits.`));
   },

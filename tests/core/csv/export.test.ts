@@ -1,0 +1,108 @@
+import fc from 'fast-check';
+import Papa from 'papaparse';
+import { describe, expect, test } from 'vitest';
+import { writeCsv, writeSites, type ExportedSite } from '#core/csv/export.ts';
+import { readSites } from '#core/csv/read-sites.ts';
+
+const CRITERIA = [
+  { id: 'c1', name: 'Cost to first launch', unit: 'M€' },
+  { id: 'c2', name: '=Owner', unit: '' },
+  { id: 'c3', name: 'Height of the fence', unit: 'posts (of 2 m)' },
+];
+const SITE: ExportedSite = {
+  code: 'PV',
+  name: '=HYPERLINK("http://x")',
+  latitudeDeg: -4.7418,
+  longitudeDeg: -37.3014,
+  elevationM: -3.5,
+  permittedAzimuthsDeg: [
+    [325, 92],
+    [100, 120.5],
+  ],
+  notes: '-see "annex"; 3,\r\nand more',
+  values: { c1: -332.5, c2: '@quay' },
+};
+
+describe('writeSites', () => {
+  test('figures are plain, texts like formulas are guarded, a general-purpose reader reads it', () => {
+    const text = writeSites([SITE], CRITERIA);
+    expect(Papa.parse(text, { skipEmptyLines: true }).data).toEqual([
+      [
+        'code',
+        'name',
+        'latitude_deg',
+        'longitude_deg',
+        'elevation_m',
+        'permitted_azimuths',
+        'notes',
+        'Cost to first launch (M€)',
+        "'=Owner",
+        'Height of the fence',
+      ],
+      [
+        'PV',
+        `'=HYPERLINK("http://x")`,
+        '-4.7418',
+        '-37.3014',
+        '-3.5',
+        '325-92; 100-120.5',
+        `'-see "annex"; 3,\r\nand more`,
+        '-332.5',
+        "'@quay",
+        '',
+      ],
+    ]);
+  });
+
+  test('any sites come back as they were', () => {
+    const word = fc.string({
+      unit: fc.constantFrom('a', 'B', ' ', '=', '-', "'", '"', ',', ';', '@', 'é', '北'),
+      minLength: 1,
+      maxLength: 12,
+    });
+    const figure = fc.double({ min: -1e6, max: 1e6, noNaN: true }).map((value) => value + 0);
+    const clean = word.map((text) => `x${text.replace(/\s+/g, ' ')}`.trim());
+    const text = word.map((raw) => raw.trim()).filter((raw) => raw !== '' && /[a-zé北=@]/i.test(raw));
+    const site = fc.record({
+      name: clean,
+      latitudeDeg: fc.double({ min: -90, max: 90, noNaN: true }).map((value) => value + 0),
+      longitudeDeg: fc
+        .double({ min: -180, max: 180, noNaN: true, minExcluded: true })
+        .map((value) => value + 0),
+      elevationM: fc.double({ min: -500, max: 9000, noNaN: true }).map((value) => value + 0),
+      permittedAzimuthsDeg: fc.constantFrom<ExportedSite['permittedAzimuthsDeg']>(
+        [],
+        [[0, 360]],
+        [
+          [342, 95.25],
+          [100, 120],
+        ],
+      ),
+      notes: text,
+      values: fc.record({ c1: figure, c2: text }),
+    });
+    fc.assert(
+      fc.property(
+        fc.uniqueArray(site, { minLength: 1, maxLength: 8, selector: ({ name }) => name.toLowerCase() }),
+        (drawn) => {
+          const sites = drawn.map((one, i) => ({ ...one, code: `S${i}` }));
+          const file = readSites(new TextEncoder().encode(writeSites(sites, CRITERIA.slice(0, 2))), {
+            existing: [],
+          });
+          if (file.kind === 'refused') throw new Error(file.message);
+          expect(file.rows.map(({ outcome, site: back }) => ({ outcome, back }))).toEqual(
+            sites.map(({ values, ...rest }) => ({
+              outcome: 'new',
+              back: { ...rest, values: { 'Cost to first launch': values.c1, '=Owner': values.c2 } },
+            })),
+          );
+        },
+      ),
+      { seed: 20310401 },
+    );
+  });
+});
+
+test('writeCsv leaves a number a number, even as text, and guards the rest', () => {
+  expect(writeCsv([['-4.5', '-4 30 S', '+1', "'quoted", 7, '']])).toBe(`-4.5,'-4 30 S,+1,'quoted,7,\r\n`);
+});
