@@ -66,13 +66,19 @@ export const StudyInput = z
   .meta({ id: 'StudyInput' });
 export type StudyInput = z.infer<typeof StudyInput>;
 
+/** The study's own fields, as they are written on its first sheet. */
+export const StudyHead = z.strictObject({
+  title: StudyTitle,
+  organisation: Organisation,
+  question: Question,
+  decideBy: DecideBy,
+});
+export type StudyHead = z.infer<typeof StudyHead>;
+
 /** Only what is sent changes. `archived` is the lead's to send, and goes alone: an archived study takes nothing else. */
 export const StudyPatch = z
   .strictObject({
-    title: StudyTitle.optional(),
-    organisation: Organisation.optional(),
-    question: Question.optional(),
-    decideBy: DecideBy.optional(),
+    ...StudyHead.partial().shape,
     archived: z.boolean().optional(),
     version: z.int().optional(),
   })
