@@ -53,7 +53,11 @@ const entries = (folder: string): Record<string, string> =>
 export async function buildWorkers(): Promise<void> {
   await bundle({
     absWorkingDir: ROOT,
-    entryPoints: { ...entries('src/worker'), web: path.join(ROOT, 'scripts/web.ts') },
+    entryPoints: {
+      ...entries('src/worker'),
+      web: path.join(ROOT, 'scripts/web.ts'),
+      dev: path.join(ROOT, 'scripts/dev.ts'),
+    },
     outdir: 'dist',
     outExtension: { '.js': '.mjs' },
     bundle: true,
