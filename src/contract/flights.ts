@@ -55,3 +55,8 @@ export function flightsFor(request: FlightRequest): (sites: readonly CodedSite[]
 export function evaluate(input: EvaluateInput): SiteResult[] {
   return flightsFor(input)(input.sites);
 }
+
+/** The sites of an evaluation as JSON text in bytes, without the brackets of the list, to be joined with other parts. */
+export function evaluationPart(input: EvaluateInput): Uint8Array<ArrayBuffer> {
+  return new TextEncoder().encode(JSON.stringify(evaluate(input)).slice(1, -1));
+}
