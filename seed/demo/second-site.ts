@@ -46,7 +46,7 @@ const criteria: DemoCriterion[] = [
     key: 'payload',
     source: 'computed',
     quantity: 'payload-per-year',
-    levels: { mode: 'fixed', worst: 40, best: 90 },
+    levels: { mode: 'fixed', worst: 40, best: 95 },
     limit: { kind: 'at-least', value: 45 },
   },
   { key: 'turn', source: 'computed', quantity: 'turn', levels: { mode: 'fixed', worst: 60, best: 0 } },
@@ -102,7 +102,7 @@ const sites: DemoSite[] = [
     elevationM: 14,
     permittedAzimuthsDeg: [[325, 92]],
     notes: 'Brazil, north-east coast',
-    values: { port: 160, cost: 332, time: 50, days: 288, access: 3 },
+    values: { port: 160, cost: 344, time: 50, days: 288, access: 3 },
   },
   {
     code: 'ES',
@@ -132,7 +132,7 @@ const sites: DemoSite[] = [
     elevationM: 22,
     permittedAzimuthsDeg: [[40, 190]],
     notes: 'Madagascar, east coast',
-    values: { port: 58, cost: 259, time: 58, days: 214, access: 1 },
+    values: { port: 58, cost: 259, time: 58, days: 226, access: 1 },
   },
   {
     code: 'RD',
