@@ -1,4 +1,4 @@
-import { createHash } from 'node:crypto';
+import { randomUUID } from 'node:crypto';
 import fs from 'node:fs';
 import path from 'node:path';
 import pg from 'pg';
@@ -28,6 +28,9 @@ interface Place {
 }
 type Passwords = Record<ClusterRole, string>;
 
+/** SQLSTATE of a wrong password. */
+const INVALID_PASSWORD = '28P01';
+
 const FAST = ['fsync=off', 'synchronous_commit=off', 'full_page_writes=off'];
 
 /** A private PostgreSQL cluster: one folder, one unprivileged user, loopback only, scram passwords. */
@@ -46,6 +49,7 @@ export class Cluster {
     this.#bin = serverPrograms(majorOfCluster(readPlace(this.#data)?.folder));
     this.#user = clusterUser();
     this.#place = readPlace(this.#data) ?? { folder: choosePlace(this.#data, this.#user) };
+    this.#keepPlace(this.#place);
     this.#passwords = JSON.parse(keptOr(path.join(this.#data, 'passwords.json'), makePasswords)) as Passwords;
   }
 
@@ -55,10 +59,7 @@ export class Cluster {
       const cluster = new Cluster(options);
       cluster.#make();
       await cluster.#start();
-      await cluster.#makeRoles();
-      cluster.#use = await cluster.connect(SUPERUSER, 'postgres');
-      cluster.#use.on('error', () => undefined);
-      await cluster.#use.query('select pg_advisory_lock_shared($1)', [IN_USE]);
+      await cluster.#join();
       return cluster;
     });
   }
@@ -175,16 +176,21 @@ export class Cluster {
     writePrivate(path.join(this.#data, 'cluster.json'), JSON.stringify(place));
   }
 
-  async #makeRoles(): Promise<void> {
-    const client = await this.connect(SUPERUSER, 'postgres');
-    try {
-      for (const role of [OWNER_ROLE, APP_ROLE] as const) {
-        const { rowCount } = await client.query('select 1 from pg_roles where rolname = $1', [role]);
-        if (!rowCount) await client.query(`create role ${role} login password '${this.#passwords[role]}'`);
-      }
-    } finally {
-      await client.end();
+  /** Counts this process among the cluster's users, for as long as its connection lives. */
+  async #join(): Promise<void> {
+    const client = await this.connect(SUPERUSER, 'postgres').catch((error: pg.DatabaseError) => {
+      const { folder } = this.#place;
+      throw error.code === INVALID_PASSWORD
+        ? new Error(`The database in ${folder} was made with other passwords than ${this.#data} keeps.`)
+        : error;
+    });
+    client.on('error', () => undefined);
+    await client.query('select pg_advisory_lock_shared($1)', [IN_USE]);
+    for (const role of [OWNER_ROLE, APP_ROLE] as const) {
+      const { rowCount } = await client.query('select 1 from pg_roles where rolname = $1', [role]);
+      if (!rowCount) await client.query(`create role ${role} login password '${this.#passwords[role]}'`);
     }
+    this.#use = client;
   }
 }
 
@@ -206,10 +212,9 @@ function readPlace(data: string): Place | undefined {
 /** Inside the data folder; or, where the cluster's user can't enter that, in a folder of that user's own. */
 function choosePlace(data: string, user: SystemUser | undefined): string {
   if (!user || runAs(user, '/usr/bin/test', ['-x', data]).status === 0) return path.join(data, 'pg');
-  const name = createHash('sha256').update(data).digest('hex').slice(0, 12);
   const parent = path.join(user.home, 'spinward');
   fs.mkdirSync(parent, { recursive: true, mode: 0o711 });
-  return path.join(parent, name);
+  return path.join(parent, randomUUID());
 }
 
 /** The port of the server that runs in the folder, by its pid file; undefined when that process isn't its server. */

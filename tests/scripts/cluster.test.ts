@@ -155,6 +155,13 @@ describe.runIf(isRoot)('under a folder that the database’s user may not enter'
     expect(folder.startsWith(closed)).toBe(false);
     folders.push(folder);
     expect(await answers(cluster)).toEqual([{ one: 1 }]);
+    await cluster.stop();
+
+    // A data folder that was thrown away leaves that folder behind; the next one is new.
+    fs.rmSync(data, { recursive: true });
+    expect(await answers(await open(data))).toEqual([{ one: 1 }]);
+    expect(place(data).folder).not.toBe(folder);
+    folders.push(place(data).folder);
   });
 });
 
