@@ -2,7 +2,7 @@ import { randomBytes } from 'node:crypto';
 import type { APIContext } from 'astro';
 import { defineMiddleware } from 'astro:middleware';
 import { findMembership } from '#db/queries/membership.ts';
-import { decide, ROUTES, ruleOf } from '#server/access.ts';
+import { decide, ruleOf, rulesOf } from '#server/access.ts';
 import { whoAsks } from '#server/auth/actor.ts';
 import { database } from '#server/database.ts';
 import { databaseAway, problem } from '#server/endpoint.ts';
@@ -46,7 +46,7 @@ async function identify(context: APIContext): Promise<void> {
 /** @throws AppError where the request may not go on */
 async function check(context: APIContext): Promise<void> {
   const { locals, request } = context;
-  const rules = ROUTES[context.routePattern];
+  const rules = rulesOf(context.routePattern);
   const rule = ruleOf(context.routePattern, request.method);
   if (rules && !rule)
     throw new AppError('method-not-allowed', `${request.method} does not exist at this address.`, {

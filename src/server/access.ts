@@ -106,12 +106,18 @@ export interface Actor {
 
 export type Decision = 'allow' | 'signed-out' | 'forbidden' | 'not-found';
 
-/** What a route asks of a request; undefined where the route or its verb does not exist. */
-export function ruleOf(routePattern: string, method: string): Rule | undefined {
+/** Astro hands out route patterns in lower case, parameters included. */
+const BY_PATTERN = new Map(Object.entries(ROUTES).map(([pattern, rules]) => [pattern.toLowerCase(), rules]));
+
+/** The verbs of a route; undefined where there is no such route. */
+export function rulesOf(routePattern: string): RouteRules | undefined {
   const pattern = routePattern.length > 1 ? routePattern.replace(/\/$/, '') : routePattern;
-  const rules = Object.hasOwn(ROUTES, pattern) ? ROUTES[pattern] : undefined;
-  return rules?.[(method === 'HEAD' ? 'GET' : method) as Method];
+  return BY_PATTERN.get(pattern.toLowerCase());
 }
+
+/** What a route asks of a request; undefined where the route or its verb does not exist. */
+export const ruleOf = (routePattern: string, method: string): Rule | undefined =>
+  rulesOf(routePattern)?.[(method === 'HEAD' ? 'GET' : method) as Method];
 
 /**
  * Decides a request. A study's rule needs the actor's role in it; a stranger to the study, an administrator
