@@ -1,8 +1,8 @@
 import { foldName } from './codes.ts';
 import { stripGuard } from './guard.ts';
 import { recognise, SITE_FIELDS, type ColumnField, type Recognised, type SiteField } from './headings.ts';
-import type { FigureKind } from './figures.ts';
-import { lengthOf, MAX_COLUMNS, MAX_CRITERION_LENGTH, MAX_UNIT_LENGTH } from './limits.ts';
+import { CriterionNamer, type ExistingCriterion, type FigureKind } from './criterion-columns.ts';
+import { MAX_COLUMNS } from './limits.ts';
 
 /** A column of the file and what it is read as. */
 export interface Column {
@@ -14,6 +14,8 @@ export interface Column {
   readonly unit: string | null;
   /** The name of the entered criterion that the column fills. */
   readonly criterion: string | null;
+  /** The id of that criterion, where the study has it already; null for one to be made. */
+  readonly criterionId: string | null;
   /** Whether that criterion's cells are numbers or texts; null for other columns. */
   readonly kind: FigureKind | null;
 }
@@ -22,6 +24,12 @@ export interface Column {
 export interface ColumnChoice {
   readonly column: number | string;
   readonly field: ColumnField;
+}
+
+export interface ColumnOptions {
+  readonly choices?: readonly ColumnChoice[] | undefined;
+  /** The study's criteria, which columns may fill. */
+  readonly criteria?: readonly ExistingCriterion[] | undefined;
 }
 
 export type Columns =
@@ -43,7 +51,10 @@ const REQUIRED = { name: 'a name', latitudeDeg: 'a latitude', longitudeDeg: 'a l
  * @returns the columns; or why the heading cannot be used: a name, latitude or longitude is missing, or a choice
  * names no column or gives two columns the same field
  */
-export function matchColumns(heading: readonly string[], choices: readonly ColumnChoice[] = []): Columns {
+export function matchColumns(
+  heading: readonly string[],
+  { choices = [], criteria = [] }: ColumnOptions = {},
+): Columns {
   const headings = heading.map((cell) => stripGuard(cell.trim()));
   if (headings.length > MAX_COLUMNS) {
     const message = `The heading has ${headings.length} columns; a file has at most ${MAX_COLUMNS}.`;
@@ -54,7 +65,7 @@ export function matchColumns(heading: readonly string[], choices: readonly Colum
     isBest(recognised, i) ? (recognised[i]?.field ?? 'unused') : text === '' ? 'unused' : 'criterion',
   );
   const wrong = applyChoices(fields, headings, choices);
-  const columns = describe(headings, fields, recognised);
+  const columns = describe(headings, fields, recognised, criteria);
   if (wrong !== undefined) return { kind: 'refused', code: 'columns', message: wrong, columns };
   const missing = missingFields(fields);
   if (missing.length > 0) {
@@ -116,36 +127,20 @@ function describe(
   headings: readonly string[],
   fields: readonly ColumnField[],
   recognised: readonly (Recognised | undefined)[],
+  criteria: readonly ExistingCriterion[],
 ): Column[] {
-  const used = new Set<string>();
+  const namer = new CriterionNamer(criteria);
   return headings.map((heading, index) => {
     const field = fields[index] ?? 'unused';
     if (field === 'criterion') {
-      const { name, unit } = nameCriterion(heading, index, used);
-      return { index, heading, field, unit, criterion: name, kind: 'number' as const };
+      const { id, name, unit, kind } = namer.name(heading, index);
+      return { index, heading, field, unit, criterion: name, criterionId: id, kind };
     }
     const unit = field === 'elevationM' ? (recognised[index]?.unit ?? feetOrMetres(heading)) : null;
-    return { index, heading, field, unit, criterion: null, kind: null };
+    return { index, heading, field, unit, criterion: null, criterionId: null, kind: null };
   });
 }
 
 function feetOrMetres(heading: string): 'm' | 'ft' {
   return /(?:^|[^\p{L}])(?:ft|feet|foot)(?:$|[^\p{L}])/iu.test(heading) ? 'ft' : 'm';
-}
-
-/** "Cost to first launch (M€)" is the criterion "Cost to first launch" in M€; a second like name is numbered. */
-function nameCriterion(heading: string, index: number, used: Set<string>): { name: string; unit: string } {
-  const flat = heading.replace(/\s+/g, ' ');
-  const [, bare, round, square] = /^(.*\S)\s*(?:\(([^()]+)\)|\[([^[\]]+)\])$/.exec(flat) ?? [];
-  const unit = (round ?? square ?? '').trim();
-  const parted = unit !== '' && lengthOf(unit) <= MAX_UNIT_LENGTH;
-  const stem = cut((parted ? bare : flat) || `Column ${index + 1}`, MAX_CRITERION_LENGTH - 6);
-  let name = stem;
-  for (let copy = 2; used.has(foldName(name)); copy += 1) name = `${stem} (${copy})`;
-  used.add(foldName(name));
-  return { name, unit: parted ? unit : '' };
-}
-
-function cut(text: string, length: number): string {
-  return [...text].slice(0, length).join('').trimEnd();
 }

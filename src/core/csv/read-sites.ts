@@ -1,4 +1,5 @@
 import { matchColumns, type Column, type ColumnChoice } from './columns.ts';
+import type { ExistingCriterion } from './criterion-columns.ts';
 import { detectDelimiter, isBlank, isSeparatorLine } from './delimiter.ts';
 import { decode, type Encoding } from './encoding.ts';
 import { settleFigures } from './figures.ts';
@@ -11,6 +12,8 @@ import { tokenise, type CsvRecord, type Delimiter } from './tokenise.ts';
 export interface ReadOptions {
   /** The study's sites, against which rows are duplicates or new. */
   readonly existing: readonly ExistingSite[];
+  /** The study's criteria, which other columns may fill. */
+  readonly criteria?: readonly ExistingCriterion[] | undefined;
   /** Changes to the columns as recognised. */
   readonly columns?: readonly ColumnChoice[] | undefined;
   readonly delimiter?: Delimiter | undefined;
@@ -54,7 +57,7 @@ export function readSites(bytes: Uint8Array, options: ReadOptions): SitesFile | 
   );
   if (heading === undefined) return unreadable('empty', 'The file is empty.');
   const cells = trimEnd(heading.cells);
-  const matched = matchColumns(cells, options.columns);
+  const matched = matchColumns(cells, { choices: options.columns, criteria: options.criteria });
   if (matched.kind === 'refused') return unreadable(matched.code, matched.message, matched.columns);
   if (records.length === 0)
     return unreadable('empty', 'The file has a heading and no rows.', matched.columns);

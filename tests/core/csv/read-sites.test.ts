@@ -182,16 +182,41 @@ describe('the file as a whole', () => {
     );
     if (file.kind === 'refused') throw new Error(file.message);
     expect(file.columns.slice(3)).toEqual([
-      { index: 3, heading: 'Cost (M€)', field: 'criterion', unit: 'M€', criterion: 'Cost', kind: 'number' },
-      { index: 4, heading: 'Owner', field: 'criterion', unit: '', criterion: 'Owner', kind: 'text' },
-      { index: 5, heading: 'Lease', field: 'criterion', unit: '', criterion: 'Lease', kind: 'text' },
-      { index: 6, heading: '', field: 'unused', unit: null, criterion: null, kind: null },
+      {
+        index: 3,
+        heading: 'Cost (M€)',
+        field: 'criterion',
+        unit: 'M€',
+        criterion: 'Cost',
+        criterionId: null,
+        kind: 'number',
+      },
+      {
+        index: 4,
+        heading: 'Owner',
+        field: 'criterion',
+        unit: '',
+        criterion: 'Owner',
+        criterionId: null,
+        kind: 'text',
+      },
+      {
+        index: 5,
+        heading: 'Lease',
+        field: 'criterion',
+        unit: '',
+        criterion: 'Lease',
+        criterionId: null,
+        kind: 'text',
+      },
+      { index: 6, heading: '', field: 'unused', unit: null, criterion: null, criterionId: null, kind: null },
       {
         index: 7,
         heading: 'Cost [k$]',
         field: 'criterion',
         unit: 'k$',
         criterion: 'Cost (2)',
+        criterionId: null,
         kind: 'number',
       },
     ]);
@@ -203,6 +228,37 @@ describe('the file as a whole', () => {
     expect(file.rows[1]?.reasons).toMatchObject([
       { code: 'text-figure', severity: 'warning', field: 'Cost' },
     ]);
+  });
+
+  test('a column fills the study’s criterion of its name, unless the unit differs or it is computed', () => {
+    const criteria = [
+      { id: 'c1', name: 'Cost', unit: 'M€', kind: 'number' },
+      { id: 'c2', name: 'Lease', unit: '', kind: 'text' },
+      { id: 'c3', name: 'Turn', unit: '°', kind: 'computed' },
+      { id: 'c4', name: 'Fence (old)', unit: '', kind: 'number' },
+    ] as const;
+    const file = read('name,lat,lon,COST (k€),cost [M€],lease,Turn,fence  (old)\nA,1,2,3,4,5,6,7\n', {
+      criteria,
+    });
+    if (file.kind === 'refused') throw new Error(file.message);
+    expect(
+      file.columns
+        .slice(3)
+        .map(({ criterion, criterionId, unit, kind }) => [criterion, criterionId, unit, kind]),
+    ).toEqual([
+      ['COST (2)', null, 'k€', 'number'],
+      ['Cost', 'c1', 'M€', 'number'],
+      ['Lease', 'c2', '', 'text'],
+      ['Turn (2)', null, '', 'number'],
+      ['Fence (old)', 'c4', '', 'number'],
+    ]);
+    expect(file.rows[0]?.site.values).toEqual({
+      'COST (2)': 3,
+      Cost: 4,
+      Lease: '5',
+      'Turn (2)': 6,
+      'Fence (old)': 7,
+    });
   });
 
   test('the match can be changed', () => {
