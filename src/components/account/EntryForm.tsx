@@ -26,7 +26,7 @@ export function EntryForm({ label, action, busy, error, advice, onSubmit, childr
   return (
     <form
       method="post"
-      className="grid max-w-[26rem] gap-4"
+      className="grid max-w-[26rem] content-start gap-4"
       aria-label={label}
       noValidate
       onSubmit={onSubmit}
