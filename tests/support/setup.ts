@@ -1,4 +1,5 @@
 import { afterEach, beforeEach, expect, vi } from 'vitest';
+import './matchers.ts';
 
 /** A test that means to provoke console.error or console.warn says so with `expectConsole()`. */
 let allowed = false;
