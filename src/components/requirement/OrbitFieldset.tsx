@@ -1,4 +1,4 @@
-import { Controller, type UseFormReturn } from 'react-hook-form';
+import { Controller, useWatch, type UseFormReturn } from 'react-hook-form';
 import { asTypedNumber, NumberField, Select, Switch, TextField } from '#components/ui/index.ts';
 import { formatNumber } from '#contract/format.ts';
 import { DEFAULT_PARKING_KM } from '#contract/orbit.ts';
@@ -22,7 +22,10 @@ type NumberName = 'perigeeKm' | 'apogeeKm' | 'inclinationDeg' | 'parkingKm' | 'f
 /** The fields of one target orbit, in its own units, each with its reason beside it. */
 export function OrbitFieldset({ form, onLeave }: FieldsetProps) {
   const { errors } = form.formState;
-  const [perigeeKm, apogeeKm, sunSynchronous] = form.watch(['perigeeKm', 'apogeeKm', 'sunSynchronous']);
+  const [perigeeKm, apogeeKm, sunSynchronous] = useWatch({
+    control: form.control,
+    name: ['perigeeKm', 'apogeeKm', 'sunSynchronous'],
+  });
   const text = (name: 'name' | 'code') => ({
     label: ORBIT_LABELS[name],
     error: errors[name],

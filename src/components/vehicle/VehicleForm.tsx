@@ -1,0 +1,108 @@
+import { useEffect, useRef, useState } from 'react';
+import { useForm, useWatch, type FieldPath, type UseFormReturn } from 'react-hook-form';
+import { Select, TextField } from '#components/ui/index.ts';
+import type { VehicleInput } from '#contract/vehicle.ts';
+import { BoosterFields } from './BoosterFields.tsx';
+import { fieldsOf, readVehicle, type VehicleFields } from './fields.ts';
+import { Figure } from './Figure.tsx';
+import { LossFields } from './LossFields.tsx';
+import { StageTable } from './StageTable.tsx';
+
+interface VehicleFormProps {
+  /** The vehicle as it is saved; null where there is none yet. */
+  vehicle: VehicleInput | null;
+  locked: boolean;
+  /** A whole vehicle that differs from the saved one, when a field is left. */
+  onChange: (vehicle: VehicleInput) => void;
+  /** The vehicle as it stands in the fields, whole or not: for what is computed live beside the form. */
+  onDraft?: ((vehicle: VehicleInput | null) => void) | undefined;
+}
+
+const same = (a: unknown, b: unknown): boolean => JSON.stringify(a) === JSON.stringify(b);
+
+/** Puts what the schema refuses beside its fields: those reached so far, or all. */
+function showErrors(
+  form: UseFormReturn<VehicleFields>,
+  issues: readonly { path: PropertyKey[]; message: string }[],
+  which: 'touched' | 'all',
+): void {
+  form.clearErrors();
+  for (const { path, message } of issues) {
+    const field = path[0] === 'boosters' && path.length === 1 ? 'boosters.count' : path.join('.');
+    const name = field as FieldPath<VehicleFields>;
+    if (which === 'all' || form.getFieldState(name, form.formState).isTouched)
+      form.setError(name, { message });
+  }
+}
+
+/** Takes in a vehicle that was saved elsewhere, unless one is being written here. */
+function useSavedVehicle(form: UseFormReturn<VehicleFields>, vehicle: VehicleInput | null): void {
+  const last = useRef(vehicle);
+  useEffect(() => {
+    const before = last.current;
+    last.current = vehicle;
+    if (same(before, vehicle)) return;
+    const read = readVehicle(form.getValues(), before);
+    const untouched = read.success && same(read.data, before ?? undefined);
+    const caughtUp = read.success && same(read.data, vehicle);
+    if (!caughtUp && (untouched || before === null)) form.reset(fieldsOf(vehicle));
+  }, [form, vehicle]);
+}
+
+/** Stages, boosters, fairing, losses and reserve of a vehicle; checked on leaving a field, by the interface's schema. */
+export function VehicleForm({ vehicle, locked, onChange, onDraft }: VehicleFormProps) {
+  const form = useForm<VehicleFields>({ defaultValues: fieldsOf(vehicle) });
+  const [waits, setWaits] = useState(false);
+  useSavedVehicle(form, vehicle);
+  const leave = () => {
+    if (locked) return;
+    const read = readVehicle(form.getValues(), vehicle);
+    showErrors(form, read.error?.issues ?? [], vehicle ? 'all' : 'touched');
+    setWaits(!read.success);
+    onDraft?.(read.success ? read.data : null);
+    if (read.success && !same(read.data, vehicle)) onChange(read.data);
+  };
+  const parts = { form, locked, onLeave: leave };
+  const stages = useWatch({ control: form.control, name: 'stages' }).length;
+  return (
+    <form className="grid gap-6" noValidate onSubmit={(event) => event.preventDefault()}>
+      <div className="max-w-md">
+        <TextField
+          label="Name"
+          readOnly={locked}
+          maxLength={120}
+          error={form.formState.errors.name}
+          {...form.register('name', { onBlur: leave })}
+        />
+      </div>
+      <StageTable {...parts} />
+      <BoosterFields {...parts} />
+      <div className="grid gap-4 phone:grid-cols-3">
+        <Figure {...parts} name="fairingKg" label="Fairing" unit="kg" hint="Default 0" />
+        <Select
+          label="The fairing leaves"
+          disabled={locked}
+          choices={Array.from({ length: stages }, (_, i) => ({
+            value: String(i + 1),
+            name: `after the burn of stage ${i + 1}`,
+          }))}
+          error={form.formState.errors.fairingLeavesAfterStage}
+          {...form.register('fairingLeavesAfterStage', { setValueAs: Number, onChange: leave })}
+        />
+        <Figure
+          {...parts}
+          name="reserveMps"
+          label="Reserve"
+          unit="m/s"
+          hint="Kept unflown at the end; default 0"
+        />
+      </div>
+      <LossFields {...parts} />
+      {waits && (
+        <p className="text-sm text-ink-2" role="status">
+          Not saved yet: the vehicle is saved as soon as every field fits.
+        </p>
+      )}
+    </form>
+  );
+}
