@@ -1,5 +1,5 @@
 import { Criterion } from './criterion.ts';
-import { Weights, WeightsOf } from './weights.ts';
+import { WeightsOf, type Weights } from './weights.ts';
 import { z } from './zod.ts';
 
 /** A figure: a number, null where nobody has entered one, or "worst" where an orbit is out of reach or falls short. */

@@ -1,4 +1,4 @@
-import { and, asc, count, eq, isNull, sql } from 'drizzle-orm';
+import { and, asc, eq, isNull, sql } from 'drizzle-orm';
 import type { Db } from '../client.ts';
 import { criterion } from '../schema/criterion.ts';
 import { site } from '../schema/site.ts';
@@ -95,16 +95,12 @@ export async function deleteCriterion(
   await db.delete(criterion).where(and(eq(criterion.studyId, studyId), eq(criterion.id, criterionId)));
 }
 
-/** How many present sites hold a figure under the criterion. */
-export async function countFigures(
-  db: Db,
-  { studyId, criterionId }: InStudy & { criterionId: string },
-): Promise<number> {
-  const [row] = await db
-    .select({ n: count() })
+/** What was entered for each present site of the study, by criterion id. */
+export function listEnteredValues(db: Db, { studyId }: InStudy) {
+  return db
+    .select({ siteId: site.id, values: site.values })
     .from(site)
-    .where(and(eq(site.studyId, studyId), isNull(site.deletedAt), sql`${site.values} ? ${criterionId}`));
-  return row?.n ?? 0;
+    .where(and(eq(site.studyId, studyId), isNull(site.deletedAt)));
 }
 
 /** Takes a criterion's figures out of every site of the study and returns them by site id, for the record. */

@@ -1,10 +1,10 @@
 import type { InputOrbit, StudyInputs } from '#contract/study-inputs.ts';
 import { VehicleInput } from '#contract/vehicle.ts';
 import type { PooledDb } from '#db/client.ts';
-import { readStudyInputs } from '#db/queries/study-inputs.ts';
+import { readStudyInputs, type selectStudyInputs } from '#db/queries/study-inputs.ts';
 import { notFound } from '#server/errors.ts';
 
-type Rows = NonNullable<Awaited<ReturnType<typeof readStudyInputs>>>;
+type Rows = NonNullable<Awaited<ReturnType<typeof selectStudyInputs>>>;
 
 function presentOrbit(row: Rows['orbits'][number]): InputOrbit {
   return {
@@ -21,10 +21,8 @@ function presentOrbit(row: Rows['orbits'][number]): InputOrbit {
   };
 }
 
-/** What a study's flight figures follow from. @throws AppError 'not-found' */
-export async function loadStudyInputs(db: PooledDb, studyId: string): Promise<StudyInputs> {
-  const rows = await readStudyInputs(db, { studyId });
-  if (!rows) throw notFound();
+/** Rows of a study's inputs as evaluate takes them. */
+export function presentStudyInputs(rows: Rows): StudyInputs {
   return {
     revision: rows.revision,
     sites: rows.sites,
@@ -33,4 +31,11 @@ export async function loadStudyInputs(db: PooledDb, studyId: string): Promise<St
     vehicle: rows.vehicle ? VehicleInput.parse(rows.vehicle) : null,
     settings: { turnSpeedFraction: rows.turnSpeedFraction },
   };
+}
+
+/** What a study's flight figures follow from. @throws AppError 'not-found' */
+export async function loadStudyInputs(db: PooledDb, studyId: string): Promise<StudyInputs> {
+  const rows = await readStudyInputs(db, { studyId });
+  if (!rows) throw notFound();
+  return presentStudyInputs(rows);
 }

@@ -1,11 +1,11 @@
 import type { APIRoute } from 'astro';
 import { WeightsInput, WeightsQuery } from '#contract/weights.ts';
-import { baseVersion, endpoint, readJson, versioned } from '#server/endpoint.ts';
+import { baseVersion, endpoint, readJson, readQuery, versioned } from '#server/endpoint.ts';
 import { requireMember } from '#server/member.ts';
 import { readWeights } from '#server/weights/read-weights.ts';
 import { saveWeights } from '#server/weights/save-weights.ts';
 
-const whose = (url: URL) => WeightsQuery.parse(Object.fromEntries(url.searchParams)).weights;
+const whose = (url: URL) => readQuery(url, WeightsQuery).weights;
 
 export const GET = endpoint(async ({ locals, url }) => {
   const { studyId, userId } = requireMember(locals);

@@ -1,0 +1,37 @@
+import type { Criterion } from '#contract/criterion.ts';
+import type { StudyInputs } from '#contract/study-inputs.ts';
+import type { Weights } from '#contract/weights.ts';
+import type { PooledDb } from '#db/client.ts';
+import { listEnteredValues } from '#db/queries/criterion.ts';
+import { inOneMoment, selectStudyInputs } from '#db/queries/study-inputs.ts';
+import { readCriteria } from '#server/criteria/read-criteria.ts';
+import { notFound } from '#server/errors.ts';
+import { presentStudyInputs } from '#server/evaluate/study-inputs.ts';
+import { readWeights } from '#server/weights/read-weights.ts';
+
+/** Everything a ranking follows from, of one moment. */
+export interface RankingSnapshot {
+  inputs: StudyInputs;
+  /** Text criteria too. */
+  criteria: Criterion[];
+  /** Entered figures by site id, then by criterion id. */
+  values: ReadonlyMap<string, Readonly<Record<string, number | string>>>;
+  study: Weights;
+  mine: Weights;
+}
+
+/** @throws AppError 'not-found' */
+export async function readSnapshot(
+  db: PooledDb,
+  { studyId, userId }: { studyId: string; userId: string },
+): Promise<RankingSnapshot> {
+  const { rows, ...rest } = await inOneMoment(db, async (tx) => ({
+    rows: await selectStudyInputs(tx, { studyId }),
+    criteria: await readCriteria(tx, { studyId }),
+    values: new Map((await listEnteredValues(tx, { studyId })).map(({ siteId, values }) => [siteId, values])),
+    study: await readWeights(tx, { studyId, userId, weights: 'study' }),
+    mine: await readWeights(tx, { studyId, userId, weights: 'mine' }),
+  }));
+  if (!rows) throw notFound();
+  return { inputs: presentStudyInputs(rows), ...rest };
+}
