@@ -80,11 +80,11 @@ function useMapView(props: SiteMapProps, scene: MapScene) {
 }
 
 function DrawnMap(props: SiteMapProps) {
-  const { sites, chosenId, tracks, flown, layers, onSectors } = props;
+  const { sites, chosenId, tracks, flownAzimuthDeg, layers, onSectors } = props;
   const [draft, setDraft] = useState<readonly SectorDeg[] | null>(null);
   const scene = useMemo(
-    () => ({ sites, chosenId, tracks, flown, layers, draft }),
-    [sites, chosenId, tracks, flown, layers, draft],
+    () => ({ sites, chosenId, tracks, flownAzimuthDeg, layers, draft }),
+    [sites, chosenId, tracks, flownAzimuthDeg, layers, draft],
   );
   const { holder, canvas, view, fault } = useMapView(props, scene);
   const chosen = sites.find(({ id }) => id === chosenId);

@@ -99,7 +99,7 @@ export function drawOverlay(canvas: HTMLCanvasElement, map: Map, state: OverlayS
   pen.setTransform(ratio, 0, 0, ratio, 0, 0);
   const inner = innerOf(canvas);
   const globe = state.projection === 'globe';
-  const { layers, flown, chosenId } = state.scene;
+  const { layers, flownAzimuthDeg, chosenId } = state.scene;
   const pads = padsInView(map, state, inner, 160);
   pen.save();
   pen.translate(inner.x, inner.y);
@@ -108,7 +108,8 @@ export function drawOverlay(canvas: HTMLCanvasElement, map: Map, state: OverlayS
   pen.clip();
   if (layers.sectors) drawAllSectors(pen, pads, state);
   const chosen = pads.find(({ site }) => site.id === chosenId);
-  if (chosen && flown && layers.track) drawFlown(pen, chosen.frame, flown, state.palette);
+  if (chosen && flownAzimuthDeg !== null && layers.track)
+    drawFlown(pen, chosen.frame, flownAzimuthDeg, state.palette);
   if (globe && layers.track) drawPolarTracks(pen, map, state);
   if (globe) drawPolarPads(pen, pads, state);
   pen.restore();

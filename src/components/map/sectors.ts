@@ -1,6 +1,6 @@
 import { along, type PadFrame } from './pad-frame.ts';
 import type { Palette } from './palette.ts';
-import type { FlownAzimuth, SectorDeg } from './types.ts';
+import type { SectorDeg } from './types.ts';
 
 export const SECTOR_RADIUS = 64;
 export const CHOSEN_RADIUS = 150;
@@ -68,19 +68,17 @@ export function drawWords(
   pen.fillText(words, x, y);
 }
 
-/** The launch azimuth of the chosen orbit, from the pad: dashed where it is not permitted. */
+/** The launch azimuth of the chosen orbit, from the pad to the edge of its sectors. */
 export function drawFlown(
   pen: CanvasRenderingContext2D,
   frame: PadFrame,
-  { azimuthDeg, permitted }: FlownAzimuth,
+  azimuthDeg: number,
   p: Palette,
 ): void {
   pen.strokeStyle = p.chosen;
-  pen.lineWidth = permitted ? 3 : 2;
-  pen.setLineDash(permitted ? [] : [6, 4]);
+  pen.lineWidth = 3;
   pen.beginPath();
   pen.moveTo(...along(frame, azimuthDeg, 12));
   pen.lineTo(...along(frame, azimuthDeg, CHOSEN_RADIUS));
   pen.stroke();
-  pen.setLineDash([]);
 }

@@ -31,12 +31,6 @@ export interface MapTrack {
   readonly ticks: readonly MapTick[];
 }
 
-/** The azimuth flown from the chosen pad to the chosen orbit. */
-export interface FlownAzimuth {
-  readonly azimuthDeg: number;
-  readonly permitted: boolean;
-}
-
 export interface MapLayers {
   readonly sectors: boolean;
   readonly track: boolean;
@@ -50,7 +44,8 @@ export interface MapScene {
   readonly sites: readonly MapSite[];
   readonly chosenId: string | null;
   readonly tracks: readonly MapTrack[];
-  readonly flown: FlownAzimuth | null;
+  /** The launch azimuth flown from the chosen pad, degrees clockwise from north; null where there is none. */
+  readonly flownAzimuthDeg: number | null;
   readonly layers: MapLayers;
   /** The chosen pad's sectors while a handle is moved; they are not saved yet. */
   readonly draft: readonly SectorDeg[] | null;

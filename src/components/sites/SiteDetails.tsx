@@ -1,0 +1,164 @@
+import { useState } from 'react';
+import { useForm } from 'react-hook-form';
+import { ApiError } from '#components/live/api.ts';
+import { useApi } from '#components/live/hooks.ts';
+import { Button } from '#components/ui/Button.tsx';
+import { NumberField, TextArea, TextField } from '#components/ui/Field.tsx';
+import { SideSheet } from '#components/ui/SideSheet.tsx';
+import { Notice } from '#components/ui/States.tsx';
+import type { Criterion } from '#contract/criterion.ts';
+import { formatFull, readTypedNumber } from '#contract/format.ts';
+import type { List } from '#contract/list.ts';
+import { SiteNotes, type ChangedSite, type Site, type SitePatch } from '#contract/site.ts';
+import { DetailsConflict } from './DetailsConflict.tsx';
+import { CELL_NAMES, CELLS, cellText, readCell, type CellKey } from './read-site.ts';
+
+interface DetailsProps {
+  studyId: string;
+  site: Site;
+  locked: string | null;
+  onClose: () => void;
+  onSave: (site: Site, patch: SitePatch) => Promise<Site>;
+  /** Shows the site as someone else left it. */
+  onKeep: (site: Site) => void;
+}
+
+type Typed = Record<CellKey, string> & { notes: string; values: Record<string, string> };
+
+function typedOf(site: Site, criteria: readonly Criterion[]): Typed {
+  const cells = Object.fromEntries(CELLS.map((key) => [key, cellText(site, key)])) as Record<CellKey, string>;
+  const values = criteria.map(({ id }) => {
+    const value = site.values[id];
+    return [id, typeof value === 'number' ? formatFull(value) : (value ?? '')];
+  });
+  return { ...cells, notes: site.notes, values: Object.fromEntries(values) as Record<string, string> };
+}
+
+/** Only what differs, so that two people who change different fields don't stand in each other's way. */
+function patchOf(typed: Typed, before: Typed, criteria: readonly Criterion[]): SitePatch {
+  const cells = CELLS.filter((key) => typed[key] !== before[key]).map((key) => readCell(key, typed[key]));
+  const patch: SitePatch = Object.assign(
+    {},
+    ...cells.map((reading) => (reading.kind === 'read' ? reading.value : {})),
+  );
+  if (typed.notes !== before.notes) patch.notes = typed.notes;
+  const changed = criteria.filter(({ id }) => typed.values[id] !== before.values[id]);
+  if (changed.length > 0)
+    patch.values = Object.fromEntries(
+      changed.map(({ id, source }) => {
+        const text = typed.values[id] ?? '';
+        if (text.trim() === '') return [id, null];
+        return [id, source === 'text' ? text : Number(readTypedNumber(text))];
+      }),
+    );
+  return patch;
+}
+
+/** One site whole, at the side: its fields, its notes and the figures entered for it. */
+export function SiteDetails(props: DetailsProps) {
+  const { data, error } = useApi<List<Criterion>>(`/api/v1/studies/${props.studyId}/criteria?pageSize=500`);
+  const entered = data?.items.filter(({ source }) => source !== 'computed');
+  return (
+    <SideSheet open onClose={props.onClose} title={props.site.name}>
+      {error && <Notice fact="The criteria could not be read.">{error.message}</Notice>}
+      {entered && (
+        <DetailsForm key={`${props.site.id}/${props.site.version}`} {...props} criteria={entered} />
+      )}
+    </SideSheet>
+  );
+}
+
+function DetailsForm({
+  site,
+  criteria,
+  locked,
+  onSave,
+  onKeep,
+  onClose,
+}: DetailsProps & { criteria: readonly Criterion[] }) {
+  const before = typedOf(site, criteria);
+  const { register, formState, handleSubmit, setError } = useForm<Typed>({
+    defaultValues: before,
+    mode: 'onBlur',
+    reValidateMode: 'onBlur',
+  });
+  const { errors, isSubmitting } = formState;
+  const [conflict, setConflict] = useState<{ patch: SitePatch; current: ChangedSite } | null>(null);
+  const save = async (onto: Site, patch: SitePatch) => {
+    setConflict(null);
+    try {
+      if (Object.keys(patch).length > 0) await onSave(onto, patch);
+      onClose();
+    } catch (failure) {
+      if (!(failure instanceof ApiError)) throw failure;
+      if (failure.code === 'stale') {
+        setConflict({ patch, current: failure.current as ChangedSite });
+        return;
+      }
+      const field = [...CELLS, 'notes' as const].find((key) => key === failure.errors[0]?.path);
+      setError(field ?? 'root', { message: failure.errors[0]?.message ?? failure.message });
+    }
+  };
+  const submit = handleSubmit((typed) => save(site, patchOf(typed, before, criteria)));
+  const cellRule = (key: CellKey) => ({
+    validate: (text: string) => {
+      const reading = readCell(key, text);
+      return reading.kind === 'read' || reading.message;
+    },
+  });
+  return (
+    <form className="site-details" onSubmit={(event) => void submit(event)} noValidate>
+      {CELLS.map((key) => (
+        <TextField
+          key={key}
+          label={CELL_NAMES[key]}
+          unit={unitOf(key)}
+          readOnly={locked !== null}
+          error={errors[key]}
+          {...register(key, cellRule(key))}
+        />
+      ))}
+      <TextArea
+        label="Notes"
+        optional
+        readOnly={locked !== null}
+        error={errors.notes}
+        {...register('notes', {
+          validate: (text) => SiteNotes.safeParse(text).success || 'Notes have up to 2,000 characters.',
+        })}
+      />
+      {criteria.map(({ id, name, unit, source }) => {
+        const rule = {
+          validate: (text: string) =>
+            source === 'text' ||
+            text.trim() === '' ||
+            typeof readTypedNumber(text) === 'number' ||
+            `${name} takes a number.`,
+        };
+        const looks = { label: name, optional: true, readOnly: locked !== null, error: errors.values?.[id] };
+        return source === 'text' ? (
+          <TextField key={id} {...looks} {...register(`values.${id}`, rule)} />
+        ) : (
+          <NumberField key={id} {...looks} unit={unit || undefined} {...register(`values.${id}`, rule)} />
+        );
+      })}
+      {errors.root && (
+        <Notice fact="The site was not saved.">{errors.root.message} What you typed is still here.</Notice>
+      )}
+      {conflict && (
+        <DetailsConflict
+          {...conflict}
+          criteria={criteria}
+          onKeepTheirs={() => onKeep(conflict.current)}
+          onPutYours={() => void save(conflict.current, conflict.patch)}
+        />
+      )}
+      <Button type="submit" busy={isSubmitting} notYet={locked ?? undefined}>
+        Save {site.code}
+      </Button>
+    </form>
+  );
+}
+
+const unitOf = (key: CellKey): string | undefined =>
+  key === 'code' || key === 'name' ? undefined : key === 'elevationM' ? 'm' : '°';

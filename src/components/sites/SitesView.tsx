@@ -1,0 +1,332 @@
+import './sites.css';
+import {
+  lazy,
+  Suspense,
+  useCallback,
+  useDeferredValue,
+  useMemo,
+  useRef,
+  useState,
+  useSyncExternalStore,
+} from 'react';
+import { nameOf } from '#components/flight/words.ts';
+import { ApiError } from '#components/live/api.ts';
+import { useAddressParam } from '#components/live/address.ts';
+import { useApi, useFinding, useStep } from '#components/live/hooks.ts';
+import { useStudyEvents, type LiveEvent } from '#components/live/study-events.ts';
+import type { MapLayers, Projection } from '#components/map/types.ts';
+import { Button, ButtonLink } from '#components/ui/Button.tsx';
+import { Finding } from '#components/ui/Finding.tsx';
+import { EmptyState, Notice } from '#components/ui/States.tsx';
+import { toast } from '#components/ui/Toast.tsx';
+import type { Site, SiteList } from '#contract/site.ts';
+import type { StudyInputs } from '#contract/study-inputs.ts';
+import { AddSite, type AddSiteHandle } from './AddSite.tsx';
+import { ChosenSite } from './ChosenSite.tsx';
+import { sitesFinding, textOf, type SitesFinding } from './finding.ts';
+import { RemoveSites, sitesInWords } from './RemoveSites.tsx';
+import { nextSort, shownSites, sortOf } from './rows.ts';
+import { SiteDetails } from './SiteDetails.tsx';
+import { SitesTable } from './SitesTable.tsx';
+import { SitesToolbar, VIEWS, type View } from './SitesToolbar.tsx';
+import { useEditing } from './use-editing.ts';
+import { useFlights } from './use-flights.ts';
+import { useSites } from './use-sites.ts';
+
+const SiteMap = lazy(() =>
+  import('#components/map/SiteMap.tsx').then((module) => ({ default: module.SiteMap })),
+);
+
+/** What the address asks for. */
+export interface SitesAddress {
+  view: string | null;
+  site: string | null;
+  orbit: string | null;
+  find: string | null;
+  sort: string | null;
+  globe: string | null;
+}
+
+interface SitesViewProps {
+  studyId: string;
+  /** The first sites, drawn on the server. */
+  list: SiteList;
+  /** Null where the study is too large to be flown on the server. */
+  inputs: StudyInputs | null;
+  address: SitesAddress;
+  /** Why the inputs can't be changed; null where they can. */
+  locked: string | null;
+}
+
+const never = () => () => undefined;
+/** False on the server and at the first drawing in the browser: the map is drawn by script alone. */
+const useInBrowser = (): boolean =>
+  useSyncExternalStore(
+    never,
+    () => true,
+    () => false,
+  );
+
+function useInputs(studyId: string, initial: StudyInputs | null): StudyInputs | null {
+  const { data, mutate } = useApi<StudyInputs>(`/api/v1/studies/${studyId}/evaluation/inputs`, {
+    ...(initial ? { fallbackData: initial, revalidateOnMount: false } : {}),
+    revalidateOnFocus: false,
+  });
+  useStudyEvents(
+    studyId,
+    useCallback(
+      (event: LiveEvent) => {
+        if (
+          event.kind === 'gap' ||
+          event.change.objects.some((object) => /orbit|vehicle|settings/.test(object))
+        )
+          void mutate();
+      },
+      [mutate],
+    ),
+  );
+  return data ?? initial;
+}
+
+function Head({
+  finding,
+  locked,
+  onAdd,
+}: {
+  finding: SitesFinding;
+  locked: string | null;
+  onAdd: () => void;
+}) {
+  useFinding(textOf(finding));
+  return (
+    <Finding
+      why={(finding.why || locked) && <p>{[finding.why, locked].filter(Boolean).join(' ')}</p>}
+      actions={
+        <>
+          <ButtonLink icon="upload" href="#upload">
+            Upload CSV
+          </ButtonLink>
+          <Button kind="primary" icon="add" notYet={locked ?? undefined} onClick={onAdd}>
+            Add a site
+          </Button>
+        </>
+      }
+    >
+      {finding.before}
+      {finding.leader && <em>{finding.leader}</em>}
+      {finding.after}
+    </Finding>
+  );
+}
+
+/** The Sites section: every candidate on the map and in the table, each saying what the other says. */
+export function SitesView({ studyId, list, inputs: initialInputs, address, locked }: SitesViewProps) {
+  const store = useSites(studyId, list);
+  const inputs = useInputs(studyId, initialInputs);
+  const editing = useEditing(store);
+  const inBrowser = useInBrowser();
+
+  const [viewParam, setView] = useAddressParam('view', address.view);
+  const [siteCode, setSiteCode] = useAddressParam('site', address.site);
+  const [orbitCode, setOrbit] = useAddressParam('orbit', address.orbit);
+  const [find, setFind] = useAddressParam('find', address.find);
+  const [sortParam, setSort] = useAddressParam('sort', address.sort);
+  const [globe, setGlobe] = useAddressParam('globe', address.globe);
+  const view: View = VIEWS.find((one) => one === viewParam) ?? 'both';
+  const projection: Projection = globe === null ? 'flat' : 'globe';
+
+  const [layers, setLayers] = useState<MapLayers>({ sectors: true, track: true, otherTracks: false });
+  const [ticked, setTicked] = useState<ReadonlySet<string>>(new Set());
+  const [removing, setRemoving] = useState<readonly Site[] | null>(null);
+  const [fault, setFault] = useState<string | null>(null);
+  const [placing, setPlacing] = useState(false);
+  const [detailsOpen, setDetailsOpen] = useState(false);
+  const addSite = useRef<AddSiteHandle>(null);
+
+  const { sites } = store;
+  const filter = useDeferredValue(find ?? '');
+  const sort = useMemo(() => sortOf(sortParam), [sortParam]);
+  const shown = useMemo(() => shownSites(sites, filter, sort), [sites, filter, sort]);
+  const chosen = sites.find(({ code }) => code === siteCode);
+  const flights = useFlights({ sites, inputs, orbitCode, chosen, others: layers.otherTracks });
+  const finding = useMemo(
+    () => sitesFinding(sites, store.total, inputs?.orbits ?? null, flights.results),
+    [sites, store.total, inputs, flights.results],
+  );
+  const chosenTrack = flights.tracks.find(({ siteId }) => siteId === chosen?.id) ?? null;
+
+  const choose = (siteId: string) => setSiteCode(sites.find(({ id }) => id === siteId)?.code ?? null);
+  useStep((step) => {
+    const here = shown.findIndex(({ id }) => id === chosen?.id);
+    const next = shown[(here + step + shown.length) % shown.length] ?? shown[0];
+    if (next) setSiteCode(next.code);
+  });
+  const restore = (removed: readonly Site[]) =>
+    store.restore(removed.map(({ id }) => id)).then(
+      () => setFault(null),
+      (error: unknown) => setFault(error instanceof ApiError ? error.message : String(error)),
+    );
+  const remove = async (gone: readonly Site[]) => {
+    try {
+      await store.remove(gone);
+      setTicked(new Set());
+      setFault(null);
+      toast(`${sitesInWords(gone)} removed`, () => void restore(gone));
+    } catch (error) {
+      if (!(error instanceof ApiError)) throw error;
+      setFault(error.message);
+      store.reload();
+    }
+    setRemoving(null);
+  };
+  const add = async (draft: Parameters<typeof store.add>[0]) => {
+    const made = await store.add(draft);
+    setSiteCode(made.code);
+    return made;
+  };
+  const startAdding = () => {
+    if (view === 'map') setView(null);
+    addSite.current?.focus();
+  };
+
+  const map = (
+    <div className="sites-map">
+      {inBrowser && (
+        <Suspense fallback={<p role="status">Reading the map…</p>}>
+          <SiteMap
+            sites={shown}
+            chosenId={chosen?.id ?? null}
+            tracks={flights.tracks}
+            flownAzimuthDeg={flights.flight?.result.launchAzimuthDeg ?? null}
+            layers={layers}
+            projection={projection}
+            onProjection={(next) => setGlobe(next === 'globe' ? '1' : null)}
+            onChoose={choose}
+            placing={placing}
+            onPlace={([longitudeDeg, latitudeDeg]) => {
+              setPlacing(false);
+              addSite.current?.take(longitudeDeg, latitudeDeg);
+            }}
+            onSectors={
+              locked === null
+                ? async (siteId, sectors) => {
+                    const site = sites.find(({ id }) => id === siteId);
+                    const permittedAzimuthsDeg = sectors.map(([from, to]): [number, number] => [from, to]);
+                    if (site) await editing.write(site, 'permittedAzimuthsDeg', { permittedAzimuthsDeg });
+                  }
+                : undefined
+            }
+          />
+        </Suspense>
+      )}
+    </div>
+  );
+
+  return (
+    <>
+      <Head finding={finding} locked={locked} onAdd={startAdding} />
+      <SitesToolbar
+        studyId={studyId}
+        view={view}
+        onView={(next) => setView(next === 'both' ? null : next)}
+        filter={find ?? ''}
+        onFilter={(text) => setFind(text || null)}
+        shown={shown.length}
+        total={store.total}
+        orbits={(inputs?.orbits ?? []).map((orbit) => ({ value: orbit.code, name: nameOf(orbit) }))}
+        orbit={flights.orbit?.code ?? ''}
+        onOrbit={setOrbit}
+        layers={layers}
+        onLayers={setLayers}
+        ticked={ticked.size}
+        locked={locked}
+        onRemove={() => setRemoving(sites.filter(({ id }) => ticked.has(id)))}
+      />
+      {(fault ?? store.error) && (
+        <Notice
+          fact={fault ?? 'The sites could not be read again.'}
+          requestId={store.error?.requestId}
+          actions={<Button onClick={() => store.reload()}>Read the sites again</Button>}
+        >
+          What you see is what was read last.
+        </Notice>
+      )}
+      <div className="sites-split" data-view={view}>
+        {view !== 'table' && map}
+        <div className="sites-side">
+          {view !== 'map' && (
+            <>
+              <SitesTable
+                sites={shown}
+                chosenId={chosen?.id ?? null}
+                onChoose={choose}
+                ticked={ticked}
+                onTick={setTicked}
+                sort={sort}
+                onSort={(key) => setSort(nextSort(sort, key))}
+                editing={editing}
+                locked={locked}
+              />
+              {store.loading && <p role="status">{`Reading ${store.total} sites…`}</p>}
+              <TableFoot total={store.total} shown={shown.length} onShowAll={() => setFind(null)} />
+            </>
+          )}
+          {chosen && (
+            <ChosenSite
+              site={chosen}
+              flight={flights.flight}
+              track={chosenTrack}
+              onOpen={() => setDetailsOpen(true)}
+            />
+          )}
+          <AddSite
+            ref={addSite}
+            sites={sites}
+            locked={locked}
+            placing={placing}
+            onPlacing={(next) => {
+              if (next && view === 'table') setView(null);
+              setPlacing(next);
+            }}
+            onAdd={add}
+          />
+        </div>
+      </div>
+      <RemoveSites sites={removing} onClose={() => setRemoving(null)} onRemove={remove} />
+      {detailsOpen && chosen && (
+        <SiteDetails
+          studyId={studyId}
+          site={chosen}
+          locked={locked}
+          onClose={() => setDetailsOpen(false)}
+          onSave={store.change}
+          onKeep={(site) => {
+            store.show(site);
+            setDetailsOpen(false);
+          }}
+        />
+      )}
+    </>
+  );
+}
+
+function TableFoot({ total, shown, onShowAll }: { total: number; shown: number; onShowAll: () => void }) {
+  if (total === 0)
+    return (
+      <EmptyState fact="No sites yet.">
+        Add one by typing its coordinates, click a place on the map, or upload a CSV.
+      </EmptyState>
+    );
+  if (shown === 0)
+    return (
+      <EmptyState fact="No site matches." actions={<Button onClick={onShowAll}>Show all sites</Button>}>
+        The text is looked for in code, name and notes.
+      </EmptyState>
+    );
+  return (
+    <p className="caption sites-hint">
+      Drag a round handle on the map, or type in the Azimuths column, to change a sector. Azimuths run
+      clockwise from north. Enter edits a cell.
+    </p>
+  );
+}
