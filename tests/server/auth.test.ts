@@ -58,13 +58,19 @@ describe('signing in', () => {
 
   test('an unknown address is refused in the same words', async () => {
     await person('known@example.org');
-    const [known, unknown] = [await signIn('known@example.org', 'x'), await signIn('nobody@example.org', 'x')];
+    const [known, unknown] = [
+      await signIn('known@example.org', 'x'),
+      await signIn('nobody@example.org', 'x'),
+    ];
     expect(await unknown.json()).toEqual(await known.json());
   });
 
   test('signing out everywhere ends every session', async () => {
     await person('twice@example.org');
-    const [one, two] = [cookieOf(await signIn('twice@example.org')), cookieOf(await signIn('twice@example.org'))];
+    const [one, two] = [
+      cookieOf(await signIn('twice@example.org')),
+      cookieOf(await signIn('twice@example.org')),
+    ];
     expect((await post('revoke-sessions', {}, { cookie: one })).status).toBe(200);
     expect(await whoHas(one)).toBeNull();
     expect(await whoHas(two)).toBeNull();
@@ -121,7 +127,8 @@ describe('limits (api.md: 20 a minute an address, 10 failed ones in 10 minutes a
 
   test('the twenty-first attempt of an address in a minute waits, whatever the account', async () => {
     const from = '192.0.2.7';
-    for (let i = 0; i < 20; i += 1) expect((await signIn(`a${i}@example.org`, 'guess', from)).status).toBe(401);
+    for (let i = 0; i < 20; i += 1)
+      expect((await signIn(`a${i}@example.org`, 'guess', from)).status).toBe(401);
     const refused = await signIn('a20@example.org', 'guess', from);
     expect(refused.status).toBe(429);
     expect(Number(refused.headers.get('retry-after'))).toBeGreaterThan(0);
@@ -175,7 +182,9 @@ describe('passwords', () => {
     const known = await post('request-password-reset', { email });
     const unknown = await post('request-password-reset', { email: 'nobody@example.org' });
     expect(await unknown.json()).toEqual(await known.json());
-    const { rows } = await db.execute(sql`select 1 from mail_message where to_address = 'nobody@example.org'`);
+    const { rows } = await db.execute(
+      sql`select 1 from mail_message where to_address = 'nobody@example.org'`,
+    );
     expect(rows).toEqual([]);
   });
 
