@@ -40,21 +40,29 @@ export function speedShare(early: number, arc: number): number {
   return arc <= EARLY ? early : early + ((1 - early) * (arc - EARLY)) / (LATE - EARLY);
 }
 
+/** sin²i − sin²i*, by sines or by cosines, whichever keep their digits. */
+function differenceOf(leg: Leg, plane: Plane): number {
+  return plane.sin + leg.sin < 1
+    ? (plane.sin - leg.sin) * (plane.sin + leg.sin)
+    : (leg.cos - plane.cos) * (leg.cos + plane.cos);
+}
+
 /**
  * The chord 2 sin(δ/2) between the leg's heading at argument of latitude u and the target plane's heading there, the
  * nearer of its two. With C = sin i* |cos u| and S = √(sin²i − sin²φ) the headings are (cos i*, C) and (cos i, S) over
- * cos φ; S² − C² = sin²i − sin²i* keeps the digits of small turns.
+ * cos φ, and cos²φ = cos²i* + C²; S² − C² = sin²i − sin²i* keeps the digits of small turns.
  */
 function chordAt(leg: Leg, plane: Plane, u: number): number {
-  const sinLatitude = leg.sin * Math.sin(u);
+  const sinLatitude = Math.abs(leg.sin * Math.sin(u));
   const along = leg.sin * Math.abs(Math.cos(u));
-  const rest = plane.sin * plane.sin - sinLatitude * sinLatitude;
+  const difference = differenceOf(leg, plane);
+  const rest =
+    sinLatitude < 0.7 ? (plane.sin - sinLatitude) * (plane.sin + sinLatitude) : difference + along * along;
   const across = rest > 0 ? Math.sqrt(rest) : 0;
-  const difference = (plane.sin - leg.sin) * (plane.sin + leg.sin);
   const opposite = plane.cos * leg.cos < 0;
   const east = opposite ? plane.cos - leg.cos : -difference / (plane.cos + leg.cos || 1);
   const north = across + along === 0 ? 0 : difference / (across + along);
-  const radius = Math.sqrt(1 - sinLatitude * sinLatitude);
+  const radius = Math.sqrt(leg.cos * leg.cos + along * along);
   return radius === 0 ? 0 : Math.sqrt(east * east + north * north) / radius;
 }
 
@@ -74,8 +82,8 @@ function sinHighest(leg: Leg, plane: Plane): number {
 
 /** Whether the target plane passes a latitude, with the slack of reach, for the two ends of the arc. */
 function passes(leg: Leg, plane: Plane, u: number): boolean {
-  const sinLatitude = leg.sin * Math.sin(u);
-  return Math.abs(plane.cos) <= Math.sqrt(1 - sinLatitude * sinLatitude) * (1 + 1e-14) + 1e-15;
+  const along = leg.sin * Math.cos(u);
+  return Math.abs(plane.cos) <= Math.sqrt(leg.cos * leg.cos + along * along) * (1 + 1e-14) + 1e-15;
 }
 
 /** The search for one leg: keeps the best turn found over the stretches of arc where the target plane is in reach. */

@@ -82,6 +82,17 @@ export function targetOf(orbit: TargetOrbit): Target {
   };
 }
 
+/**
+ * The least that transfer and plane change can cost together, by one sine: each burn costs at least 2 √(v₁v₂) sin(x/2),
+ * and sin(α/2) + sin((Δ − α)/2) ≥ sin(Δ/2).
+ * @param sinHalf sin(Δ/2)
+ */
+export function planeChangeFloor({ burns, nodeSpeed, transfer }: Injection, sinHalf: number): number {
+  if (burns === undefined) return 2 * nodeSpeed * sinHalf;
+  const slower = Math.min(burns.first.product, burns.second.product);
+  return Math.max(transfer, Math.sqrt(2 * slower) * sinHalf);
+}
+
 /** What a plane change adds to an injection's transfer burns. */
 export function planeChangeCost(injection: Injection, change: number): MetresPerSecond {
   if (injection.burns === undefined) return simplePlaneChange(injection.nodeSpeed, change);

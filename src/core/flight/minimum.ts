@@ -10,10 +10,15 @@ export interface Least {
 function valley(f: (x: number) => number, low: number, high: number, tolerance: number): Least {
   let a = low;
   let b = high;
-  let [x, w, v] = [a + GOLDEN * (b - a), a + GOLDEN * (b - a), a + GOLDEN * (b - a)];
+  // The lowest place so far, the second lowest, and the second lowest before that.
+  let x = a + GOLDEN * (b - a);
+  let w = x;
+  let v = x;
   let fx = f(x);
-  let [fw, fv] = [fx, fx];
-  let [step, last] = [0, 0];
+  let fw = fx;
+  let fv = fx;
+  let step = 0;
+  let last = 0;
   for (let round = 0; round < 100; round++) {
     const middle = (a + b) / 2;
     if (Math.abs(x - middle) <= 2 * tolerance - (b - a) / 2) break;
@@ -21,8 +26,7 @@ function valley(f: (x: number) => number, low: number, high: number, tolerance: 
     const q = (x - v) * (fx - fw);
     const bottom = 2 * (q - r);
     const move = ((x - v) * q - (x - w) * r) / -bottom;
-    const inside = x + move > a && x + move < b;
-    if (bottom !== 0 && inside && Math.abs(move) < Math.abs(last / 2)) {
+    if (x + move > a && x + move < b && Math.abs(move) < Math.abs(last / 2)) {
       last = step;
       step = move;
     } else {
@@ -34,12 +38,24 @@ function valley(f: (x: number) => number, low: number, high: number, tolerance: 
     if (fu <= fx) {
       if (u < x) b = x;
       else a = x;
-      [v, fv, w, fw, x, fx] = [w, fw, x, fx, u, fu];
-    } else {
-      if (u < x) a = u;
-      else b = u;
-      if (fu <= fw || w === x) [v, fv, w, fw] = [w, fw, u, fu];
-      else if (fu <= fv || v === x || v === w) [v, fv] = [u, fu];
+      v = w;
+      fv = fw;
+      w = x;
+      fw = fx;
+      x = u;
+      fx = fu;
+      continue;
+    }
+    if (u < x) a = u;
+    else b = u;
+    if (fu <= fw || w === x) {
+      v = w;
+      fv = fw;
+      w = u;
+      fw = fu;
+    } else if (fu <= fv || v === x || v === w) {
+      v = u;
+      fv = fu;
     }
   }
   return { at: x, value: fx };

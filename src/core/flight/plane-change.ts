@@ -42,28 +42,28 @@ function slopeOf(burn: Burn, angle: number): number {
 }
 
 /** d² cost / d angle². */
-function curvatureOf(burn: Burn, angle: number): number {
-  const cost = costOf(burn, angle);
+function curvatureOf({ squares, product }: Burn, angle: number, cost: number): number {
   const cosine = Math.cos(angle);
-  const { squares, product } = burn;
-  return (product * (2 * squares * cosine - product - product * cosine * cosine)) / (4 * cost ** 3);
+  return (product * (2 * squares * cosine - product - product * cosine * cosine)) / (4 * cost * cost * cost);
 }
 
-const TOLERANCE = 1e-10;
+const TOLERANCE = 1e-9;
 
-/** Newton's method for the slope's zero between `low` (slope < 0) and `high` (slope > 0), kept inside by halving. */
+/** Newton's method for the slope's zero between `low` (slope ≤ 0) and `high` (slope ≥ 0), kept inside by halving. */
 function flatSpot(first: Burn, second: Burn, change: number, low: number, high: number): number {
   let a = low;
   let b = high;
   let x = (a + b) / 2;
   for (let step = 0; step < 100 && b - a > TOLERANCE; step++) {
-    const slope = slopeOf(first, x) - slopeOf(second, change - x);
+    const one = costOf(first, x);
+    const two = costOf(second, change - x);
+    const slope =
+      (first.product * Math.sin(x)) / (2 * one) - (second.product * Math.sin(change - x)) / (2 * two);
     if (slope < 0) a = x;
     else b = x;
-    const next = x - slope / (curvatureOf(first, x) + curvatureOf(second, change - x));
-    const inside = next > a && next < b;
-    const move = inside ? Math.abs(next - x) : Infinity;
-    x = inside ? next : (a + b) / 2;
+    const next = x - slope / (curvatureOf(first, x, one) + curvatureOf(second, change - x, two));
+    const move = next > a && next < b ? Math.abs(next - x) : Infinity;
+    x = move < Infinity ? next : (a + b) / 2;
     if (move < TOLERANCE) break;
   }
   return x;

@@ -4,6 +4,8 @@ import type { Sector } from './types.ts';
 
 /** An edge of a sector, ready for the legs flown along it. */
 export interface Edge {
+  /** Place among the site's distinct edges, in the order given. */
+  readonly index: number;
   readonly azimuth: Radians;
   readonly sin: number;
   readonly cos: number;
@@ -34,7 +36,7 @@ function edgesOf(sectors: readonly Sector[]): Edge[] {
   for (const bound of sectors.flatMap(({ from, to }) => [from, to])) {
     const azimuth = wrap(bound);
     if (edges.some((edge) => apart(edge.azimuth, azimuth) <= ANGLE_SLACK)) continue;
-    edges.push({ azimuth, sin: Math.sin(azimuth), cos: Math.cos(azimuth) });
+    edges.push({ index: edges.length, azimuth, sin: Math.sin(azimuth), cos: Math.cos(azimuth) });
   }
   return edges;
 }

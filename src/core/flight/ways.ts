@@ -1,7 +1,7 @@
 import { ANGLE_SLACK, isNortherly, wrap } from './azimuths.ts';
 import { bestDogleg } from './dogleg.ts';
 import type { Leg } from './dogleg.ts';
-import { planeChangeCost } from './injection.ts';
+import { planeChangeCost, planeChangeFloor } from './injection.ts';
 import type { Injection, Target } from './injection.ts';
 import { reachOf, sinInertialAzimuth } from './launch-azimuth.ts';
 import type { Reach } from './launch-azimuth.ts';
@@ -42,16 +42,19 @@ function close(way: WayRecord): void {
   way.total = way.requiredSpeed + way.doglegCost + way.planeChangeCost + way.transfer;
 }
 
-/**
- * The northerly (sign 1) or southerly (−1) answer flown directly, if its launch azimuth is permitted. cos β comes from
- * cos²φ′ − cos²i = (sin i − sin φ′)(sin i + sin φ′), which keeps its digits where the two answers draw together.
- */
+/** cos²φ′ − cos²i, by sines or by cosines, whichever keep their digits where the two answers draw together. */
+function roomOf({ sinLatitude, cosLatitude }: Pad, { sinInclination, cosInclination }: Target): number {
+  const room =
+    cosLatitude > 0.7
+      ? (sinInclination - sinLatitude) * (sinInclination + sinLatitude)
+      : (cosLatitude - cosInclination) * (cosLatitude + cosInclination);
+  return Math.max(room, 0);
+}
+
+/** The northerly (sign 1) or southerly (−1) answer flown directly, if its launch azimuth is permitted. */
 function addAnswer({ pad, target, ways }: Listing, injection: Injection, sin: number, sign: number): boolean {
-  const { cosLatitude, sinLatitude, rotationSpeed } = pad;
-  const room = (target.sinInclination - sinLatitude) * (target.sinInclination + sinLatitude);
-  const across = Math.abs(sin) === 1 || room <= 0 ? 0 : Math.sqrt(room) / cosLatitude;
-  const cos = sin === 0 ? sign : sign * across;
-  const east = injection.speed * sin - rotationSpeed;
+  const cos = sin === 0 ? sign : (sign * Math.sqrt(roomOf(pad, target))) / pad.cosLatitude;
+  const east = injection.speed * sin - pad.rotationSpeed;
   const north = injection.speed * cos;
   const launchAzimuth = wrap(Math.atan2(east, north));
   if (!isPermitted(pad.sectors, launchAzimuth)) return false;
@@ -142,6 +145,7 @@ export function legAlong(pad: Pad, edge: Edge, injectionSpeed: number): EdgeLeg 
 
 function startLeg(ways: WayList, kind: number, injection: Injection, edge: Edge, leg: EdgeLeg): WayRecord {
   const way = start(ways, kind, injection);
+  way.edge = edge.index;
   way.branch = isNortherly(edge.cos) ? 0 : 1;
   way.inertialAzimuth = leg.inertialAzimuth;
   way.launchAzimuth = edge.azimuth;
@@ -149,43 +153,71 @@ function startLeg(ways: WayList, kind: number, injection: Injection, edge: Edge,
   return way;
 }
 
-/** The two ways along one sector edge: change the plane in orbit, or turn during the ascent. */
-function addEdge(
-  { target, ways, early }: Listing,
+function addPlaneChange(
+  { ways }: Listing,
   injection: Injection,
   edge: Edge,
-  index: number,
   leg: EdgeLeg,
+  change: number,
 ): void {
-  const change = Math.abs(target.inclination - leg.inclination);
-  if (change <= LARGEST_CHANGE) {
-    const way = startLeg(ways, PLANE_CHANGE, injection, edge, leg);
-    way.edge = index;
-    way.planeChange = change;
-    way.planeChangeCost = planeChangeCost(injection, change);
-    close(way);
-  }
+  const way = startLeg(ways, PLANE_CHANGE, injection, edge, leg);
+  way.planeChange = change;
+  way.planeChangeCost = planeChangeCost(injection, change);
+  close(way);
+}
+
+function addDogleg({ target, ways, early }: Listing, injection: Injection, edge: Edge, leg: EdgeLeg): void {
   const dogleg = bestDogleg(leg, { cos: target.cosInclination, sin: target.sinInclination }, early);
   if (dogleg === undefined) return;
   const way = startLeg(ways, DOGLEG, injection, edge, leg);
-  way.edge = index;
   way.turn = dogleg.turn;
   way.doglegCost = dogleg.cost * injection.speed;
   close(way);
 }
 
+/**
+ * The two ways along one sector edge: turn during the ascent, or change the plane in orbit. A turn is never less than
+ * the difference of the inclinations, which is what it is at the equator; so 60° of difference rule out both, and one
+ * sine tells the least that either can cost.
+ */
+function addEdge(listing: Listing, injection: Injection, edge: Edge, leg: EdgeLeg): void {
+  const change = Math.abs(listing.target.inclination - leg.inclination);
+  if (change > LARGEST_CHANGE) return;
+  const sinHalf = Math.sin(change / 2);
+  const turned = leg.requiredSpeed + injection.transfer + 2 * listing.early * injection.speed * sinHalf;
+  if (listing.all || turned <= most(listing.ways)) addDogleg(listing, injection, edge, leg);
+  const changed = leg.requiredSpeed + planeChangeFloor(injection, sinHalf);
+  if (listing.all || changed <= most(listing.ways)) addPlaneChange(listing, injection, edge, leg, change);
+}
+
+/** The most a way may cost and still be taken or tie with what is. */
+function most(ways: WayList): number {
+  let least = Infinity;
+  for (let k = 0; k < ways.length; k++) least = Math.min(least, ways.at(k).total);
+  return least + 2 * TIE;
+}
+
+/** Index of the leg whose plane lies nearest the target's: worked out first, it rules out most of the others. */
+function nearestLeg(legs: readonly EdgeLeg[], { inclination }: Target): number {
+  let nearest = 0;
+  let least = Infinity;
+  for (let k = 0; k < legs.length; k++) {
+    const distance = Math.abs((legs[k] as EdgeLeg).inclination - inclination);
+    if (distance >= least) continue;
+    least = distance;
+    nearest = k;
+  }
+  return nearest;
+}
+
 function addEdges(listing: Listing, injection: Injection): void {
-  const { pad, ways, all } = listing;
-  pad.sectors.edges.forEach((edge, index) => {
-    const leg = legAlong(pad, edge, injection.speed);
-    if (!all && ways.length > 0) {
-      const floor = leg.requiredSpeed + injection.transfer;
-      let least = Infinity;
-      for (let k = 0; k < ways.length; k++) least = Math.min(least, ways.at(k).total);
-      if (floor > least + 2 * TIE) return;
-    }
-    addEdge(listing, injection, edge, index, leg);
-  });
+  const { edges } = listing.pad.sectors;
+  const legs = edges.map((edge) => legAlong(listing.pad, edge, injection.speed));
+  const first = nearestLeg(legs, listing.target);
+  for (let k = 0; k < edges.length; k++) {
+    const at = k === 0 ? first : k <= first ? k - 1 : k;
+    addEdge(listing, injection, edges[at] as Edge, legs[at] as EdgeLeg);
+  }
 }
 
 /**
