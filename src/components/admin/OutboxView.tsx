@@ -22,7 +22,7 @@ export function OutboxView({ outbox }: { outbox: Outbox }) {
     refreshInterval: READ_AGAIN_MS,
   });
   return (
-    <div className="grid gap-9">
+    <div className="grid grid-cols-1 gap-9">
       {(!data.mailServer || data.kept.total > 0) && (
         <Panel
           title="Kept here"

@@ -28,7 +28,7 @@ export function PeopleView(props: PeopleProps) {
     void leaderless.mutate();
   };
   return (
-    <div className="grid gap-9">
+    <div className="grid grid-cols-1 gap-9">
       {open.total > 0 && (
         <Panel
           title="Studies without an active lead"
