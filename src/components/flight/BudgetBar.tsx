@@ -12,7 +12,8 @@ export const barAt = (scale: BudgetScale, mps: number): number =>
 
 const tornLeft = (to: number): string => `M0 0H${to}V${HEIGHT}H0L4 15 0 10 4 5Z`;
 
-function fillOf(paint: BudgetPart['paint'], patterns: string) {
+/** The paint of a part: a class for a tint, a fill for a pattern. */
+export function partFill(paint: BudgetPart['paint'], patterns: string) {
   return paint.startsWith('fill-')
     ? { className: paint }
     : { className: 'part-outline', fill: `url(#${patterns}-${paint})` };
@@ -48,7 +49,7 @@ function Parts({ parts, scale, patterns }: { parts: BudgetPart[]; scale: BudgetS
     reached += part.mps;
     const to = barAt(scale, reached);
     if (part.mps <= 0 || to <= 0) return null;
-    const paint = fillOf(part.paint, patterns);
+    const paint = partFill(part.paint, patterns);
     return from === 0 ? (
       <path key={part.name} d={tornLeft(to)} {...paint} />
     ) : (

@@ -11,7 +11,7 @@ interface BudgetTableProps {
   rows: readonly FlightRow[];
   losses: VehicleInput['lossesMps'] | null;
   hasVehicle: boolean;
-  chosenCode: string | null;
+  chosenCode: string;
   onChoose: (code: string) => void;
 }
 
@@ -91,7 +91,7 @@ export function BudgetTable({ rows, losses, hasVehicle, chosenCode, onChoose }: 
   const patterns = useId();
   const scale = budgetScale(rows.map(({ result }) => result));
   return (
-    <div className="table-scroll">
+    <div className="table-scroll mt-5">
       <svg width="0" height="0" aria-hidden="true" className="absolute">
         <ChartPatterns id={patterns} />
       </svg>
@@ -106,14 +106,16 @@ export function BudgetTable({ rows, losses, hasVehicle, chosenCode, onChoose }: 
             >
               <th scope="row">
                 <button type="button" className="text-left" onClick={() => onChoose(site.code)}>
-                  <span className="name">{site.name}</span>
+                  <span className="name max-w-56 truncate" title={site.name}>
+                    {site.name}
+                  </span>
                 </button>
                 <span className="sub num">
                   {site.code} {formatLatitude(site.latitudeDeg)}
                 </span>
                 <span className="sub tablet:hidden">{wayInWords(result)}</span>
               </th>
-              <td className="text-ink-2 max-tablet:hidden">{wayInWords(result)}</td>
+              <td className="whitespace-nowrap text-ink-2 max-tablet:hidden">{wayInWords(result)}</td>
               <td className="num max-tablet:hidden">
                 <Figure value={result.launchAzimuthDeg} decimals={1} />
               </td>

@@ -88,7 +88,8 @@ function Sheets({ studyId, inputs, results, orbitCode, siteCode }: SheetsProps) 
   const rows = useMemo(() => byTotal(rowsOf(inputs, results, index)), [inputs, results, index]);
   const year = useMemo(() => manifestRows(inputs, results), [inputs, results]);
   const shown = value === MANIFEST ? year : rows;
-  const chosen = inputs.sites.some(({ code }) => code === site) ? site : null;
+  // Without a choice in the address the first row is the chosen one: its azimuths and ways stand below.
+  const chosen = inputs.sites.find(({ code }) => code === site)?.code ?? shown[0]?.site.code ?? '';
   useStep((step) => {
     const here = shown.findIndex((row) => row.site.code === chosen);
     const next = shown[(here + step + shown.length) % shown.length];
@@ -127,11 +128,13 @@ function Sheets({ studyId, inputs, results, orbitCode, siteCode }: SheetsProps) 
           />
         )}
       </Tabs>
-      <Caution>
-        <b>Estimates for comparing sites, not flight data.</b> Closed-form Δv with entered losses; no ascent
-        has been flown. {formatCount(inputs.sites.length * inputs.orbits.length, 'result')} of revision{' '}
-        {formatNumber(inputs.revision)}.
-      </Caution>
+      <div className="mt-10">
+        <Caution>
+          <b>Estimates for comparing sites, not flight data.</b> Closed-form Δv with entered losses; no ascent
+          has been flown. {formatCount(inputs.sites.length * inputs.orbits.length, 'result')} of revision{' '}
+          {formatNumber(inputs.revision)}.
+        </Caution>
+      </div>
     </>
   );
 }

@@ -25,7 +25,7 @@ interface GainChartProps {
   curves: readonly CurveOf[];
   chosenOrbit: string;
   rows: readonly FlightRow[];
-  chosenCode: string | null;
+  chosenCode: string;
 }
 
 interface Scales {

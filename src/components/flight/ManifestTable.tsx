@@ -12,7 +12,7 @@ interface ManifestTableProps {
   rows: readonly ManifestRow[];
   orbits: readonly InputOrbit[];
   hasVehicle: boolean;
-  chosenCode: string | null;
+  chosenCode: string;
   onChoose: (code: string) => void;
 }
 
@@ -36,7 +36,7 @@ export function ManifestTable({ rows, orbits, hasVehicle, chosenCode, onChoose }
   const [count, setCount] = useState(ROWS_AT_FIRST);
   return (
     <>
-      <div className="table-scroll">
+      <div className="table-scroll mt-5">
         <table className="table" data-hover="">
           <thead>
             <tr>
@@ -57,7 +57,9 @@ export function ManifestTable({ rows, orbits, hasVehicle, chosenCode, onChoose }
               <tr key={site.siteId} aria-selected={site.code === chosenCode}>
                 <th scope="row">
                   <button type="button" className="text-left" onClick={() => onChoose(site.code)}>
-                    <span className="name">{site.name}</span>
+                    <span className="name max-w-56 truncate" title={site.name}>
+                      {site.name}
+                    </span>
                   </button>
                   <span className="sub num">
                     {site.code} {formatLatitude(site.latitudeDeg)}

@@ -4,6 +4,7 @@ import type { SiteResult } from '#contract/evaluate.ts';
 import { formatCount, formatNumber } from '#contract/format.ts';
 import type { StudyInputs } from '#contract/study-inputs.ts';
 import { AzimuthRose } from './AzimuthRose.tsx';
+import { BudgetKey, BudgetLines } from './BudgetLines.tsx';
 import { BudgetTable } from './BudgetTable.tsx';
 import { withOthers } from './compute.ts';
 import { GainChart, type CurveOf } from './GainChart.tsx';
@@ -19,20 +20,20 @@ interface OrbitSheetProps {
   results: readonly SiteResult[];
   rows: readonly FlightRow[];
   orbitIndex: number;
-  chosenCode: string | null;
+  chosenCode: string;
   onChoose: (code: string) => void;
 }
 
 function Sources({ vehicle }: { vehicle: StudyInputs['vehicle'] }) {
   if (!vehicle)
     return (
-      <p className="caption mt-3">
+      <p className="caption">
         No vehicle yet: losses and reserve are 0 and there is no payload. Choose one in Requirement.
       </p>
     );
   const { gravity, drag, steering } = vehicle.lossesMps;
   return (
-    <p className="caption mt-3">
+    <p className="caption">
       <b>Losses {formatNumber(gravity + drag + steering)} m/s at every site</b>, entered for the vehicle:
       gravity {formatNumber(gravity)}, drag {formatNumber(drag)}, steering {formatNumber(steering)}. Reserve{' '}
       {formatNumber(vehicle.reserveMps)} m/s.
@@ -56,7 +57,7 @@ export function OrbitSheet(props: OrbitSheetProps) {
   const { inputs, results, rows, orbitIndex, chosenCode, onChoose } = props;
   const [count, setCount] = useState(ROWS_AT_FIRST);
   const orbit = inputs.orbits[orbitIndex];
-  const chosenRow = rows.find(({ site }) => site.code === chosenCode) ?? rows[0];
+  const chosenRow = rows.find(({ site }) => site.code === chosenCode);
   if (!orbit || !chosenRow) return null;
   const { site } = chosenRow;
   const curves = curvesOf(props);
@@ -84,7 +85,11 @@ export function OrbitSheet(props: OrbitSheetProps) {
           </span>
         </div>
       )}
-      <Sources vehicle={inputs.vehicle} />
+      <div className="mt-3 grid gap-2">
+        <BudgetKey />
+        <Sources vehicle={inputs.vehicle} />
+        <BudgetLines rows={rows.slice(0, count)} losses={inputs.vehicle?.lossesMps ?? null} />
+      </div>
       <div className="mt-10 grid gap-x-14 gap-y-10 sheet:grid-cols-2">
         <GainChart curves={curves} chosenOrbit={orbit.code} rows={rows} chosenCode={chosenCode} />
         <AzimuthRose site={site} orbits={rose} chosenOrbit={orbit.code} />

@@ -12,19 +12,23 @@ export interface BudgetPart {
 
 type Losses = VehicleInput['lossesMps'];
 
-/** The lines of a budget in drawing order; the losses by kind, as the vehicle enters them. */
+/** The lines of a budget in drawing order. */
+export const BUDGET_LINES = [
+  { name: 'required speed', paint: 'fill-1' },
+  { name: 'gravity', paint: 'fill-2' },
+  { name: 'drag', paint: 'fill-3' },
+  { name: 'steering', paint: 'fill-3' },
+  { name: 'dogleg', paint: 'hatched' },
+  { name: 'plane change', paint: 'crossed' },
+  { name: 'transfer', paint: 'dotted' },
+  { name: 'reserve', paint: 'fill-open' },
+] as const satisfies { name: string; paint: Paint }[];
+
+/** A result's budget line by line; the losses by kind, as the vehicle enters them. */
 export function budgetParts({ deltaVMps: dv }: FlownOrbit, losses: Losses | null): BudgetPart[] {
-  const kinds = losses ?? { gravity: 0, drag: 0, steering: 0 };
-  return [
-    { name: 'required speed', mps: dv.required, paint: 'fill-1' },
-    { name: 'gravity', mps: kinds.gravity, paint: 'fill-2' },
-    { name: 'drag', mps: kinds.drag, paint: 'fill-3' },
-    { name: 'steering', mps: kinds.steering, paint: 'fill-3' },
-    { name: 'dogleg', mps: dv.dogleg, paint: 'hatched' },
-    { name: 'plane change', mps: dv.planeChange, paint: 'crossed' },
-    { name: 'transfer', mps: dv.transfer, paint: 'dotted' },
-    { name: 'reserve', mps: dv.reserve, paint: 'fill-open' },
-  ];
+  const { gravity, drag, steering } = losses ?? { gravity: 0, drag: 0, steering: 0 };
+  const mps = [dv.required, gravity, drag, steering, dv.dogleg, dv.planeChange, dv.transfer, dv.reserve];
+  return BUDGET_LINES.map((line, i) => ({ ...line, mps: mps[i] ?? 0 }));
 }
 
 export interface BudgetScale {
