@@ -142,7 +142,8 @@ export function turnAt(latitude: number, beta: number, inclination: number, arc:
   );
   const cosHere = Math.sqrt(1 - sinHere * sinHere);
   const needed = Math.abs(cosOf(inclination));
-  if (needed > cosHere * (1 + 1e-14) + 1e-15) return undefined;
+  // At a pole itself there is no heading to turn from.
+  if (cosHere === 0 || needed > cosHere * (1 + 1e-14) + 1e-15) return undefined;
   const heading = Math.atan2(
     Math.cos(latitude) * Math.sin(beta),
     Math.cos(latitude) * Math.cos(beta) * Math.cos(arc) - Math.sin(latitude) * Math.sin(arc),
