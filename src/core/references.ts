@@ -14,6 +14,10 @@ export const references = {
   rocketEquation: 'Tsiolkovsky rocket equation over the burns of a staged vehicle',
   brent:
     'Brent, Algorithms for Minimization without Derivatives (1973), chapter 4: root of a bracketed function',
+  keeneyRaiffa:
+    'Keeney and Raiffa, Decisions with Multiple Objectives (1976): value functions and the additive value',
+  goodwinWright:
+    'Goodwin and Wright, Decision Analysis for Management Judgment, chapter 3: points made into weights that sum to 1',
 } as const;
 
 export type ReferenceKey = keyof typeof references;
