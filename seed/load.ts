@@ -75,7 +75,8 @@ export async function loadDemo(db: PooledDb, scenario: Scenario): Promise<boolea
     const [someone] = await tx.select({ id: user.id }).from(user).limit(1);
     if (someone) return false;
     const people = await makePeople(tx, scenario.people);
-    for (const study of scenario.studies) await makeStudy(tx, study, people);
+    // The list shows the latest first, and the example is what one comes to look at.
+    for (const study of [...scenario.studies].reverse()) await makeStudy(tx, study, people);
     return true;
   });
 }

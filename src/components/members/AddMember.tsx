@@ -32,7 +32,7 @@ export function AddMember({ studyId, onAdded }: { studyId: string; onAdded: () =
   return (
     <form onSubmit={(event) => void add(event)} noValidate aria-label="Add a member">
       <div className="flex flex-wrap items-start gap-4">
-        <div className="w-full phone:w-80">
+        <div className="w-full phone:w-72">
           <TextField
             label="Mail address"
             type="email"

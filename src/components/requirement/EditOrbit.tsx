@@ -48,12 +48,14 @@ export function EditOrbit({ studyId, orbit, onKept, onClose }: EditProps) {
       ),
     onKept,
   });
-  useKeptValues(form, fields, autosave.settled);
+  const basedOn = useKeptValues(form, fields, autosave.settled);
   const leave = () => {
     const input = checkForm(form, 'all');
     if (!input) return;
     const change = changesOf(orbit, input);
-    if (Object.keys(change).length > 0) autosave.save(change);
+    if (Object.keys(change).length === 0) return;
+    const { inclinationDeg = null, ...others } = basedOn();
+    autosave.save(change, { ...others, inclinationDeg } as Partial<StudyOrbit>);
   };
   return (
     <SideSheet open onClose={onClose} title={`Orbit ${nameOfOrbit(orbit)}`}>

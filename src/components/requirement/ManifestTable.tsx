@@ -18,7 +18,7 @@ interface TableProps extends OrbitActions {
 function OrbitButtons({ orbit, last, ...actions }: { orbit: StudyOrbit; last: number } & OrbitActions) {
   const name = nameOfOrbit(orbit);
   return (
-    <span className="flex items-center justify-end gap-1">
+    <span className="flex items-center justify-end gap-1 whitespace-nowrap">
       <IconButton
         icon="up"
         label={`Move ${name} up`}
@@ -63,7 +63,7 @@ function OrbitRow({ orbit }: { orbit: StudyOrbit }) {
           </span>
         )}
       </td>
-      <td>{PROFILE_NAMES[orbit.profile]}</td>
+      <td className="pl-6 whitespace-nowrap">{PROFILE_NAMES[orbit.profile]}</td>
       <td className="num">{formatFull(orbit.parkingKm)}</td>
       <td className="num">{formatFull(orbit.flightsPerYear)}</td>
     </>
@@ -89,7 +89,7 @@ export function ManifestTable({ orbits, locked, ...actions }: TableProps) {
           <tr>
             <th scope="col">Target orbit</th>
             {HEADINGS.map(({ name, unit }) => (
-              <th key={name} scope="col" className={unit === null ? undefined : 'num'}>
+              <th key={name} scope="col" className={unit === null ? 'pl-6' : 'num'}>
                 {name} {unit && <span className="unit">{unit}</span>}
               </th>
             ))}

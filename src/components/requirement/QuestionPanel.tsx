@@ -46,12 +46,12 @@ export function QuestionPanel({ study, onKept, locked }: QuestionProps) {
       send<Study & Saved>('PATCH', `/api/v1/studies/${study.id}`, { ...change, version }),
     onKept,
   });
-  useKeptValues(form, head, autosave.settled);
+  const basedOn = useKeptValues(form, head, autosave.settled);
   const { errors } = form.formState;
   const leave = async (field: (typeof FIELDS)[number]) => {
     if (locked || !(await form.trigger(field))) return;
     const value = StudyHead.shape[field].parse(form.getValues(field));
-    if (value !== study[field]) autosave.save({ [field]: value });
+    if (value !== study[field]) autosave.save({ [field]: value }, basedOn());
   };
   const field = (name: (typeof FIELDS)[number]) => ({
     label: LABELS[name],
@@ -64,17 +64,23 @@ export function QuestionPanel({ study, onKept, locked }: QuestionProps) {
   });
   return (
     <Panel title="The question">
-      <form className="grid gap-4" noValidate onSubmit={(event) => event.preventDefault()}>
+      <form
+        className="grid gap-4 sheet:grid-cols-2 sheet:gap-14"
+        noValidate
+        onSubmit={(event) => event.preventDefault()}
+      >
         <TextArea
           {...field('question')}
-          rows={3}
+          rows={5}
           hint="What the study is to decide, in a sentence or two. It opens the memo."
         />
-        <div className="grid gap-4 phone:grid-cols-[11rem_1fr]">
-          <TextField {...field('decideBy')} type="date" hint="UTC day" />
+        <div className="grid content-start gap-4 phone:grid-cols-[11rem_1fr]">
+          <TextField {...field('decideBy')} optional placeholder="YYYY-MM-DD" hint="UTC day" />
           <TextField {...field('organisation')} optional hint="Whose decision it is" />
+          <div className="phone:col-span-2">
+            <TextField {...field('title')} hint="Of the study, on every sheet and on the memo" />
+          </div>
         </div>
-        <TextField {...field('title')} />
       </form>
       <SaveTrouble autosave={autosave} what="this" describe={describe} />
     </Panel>

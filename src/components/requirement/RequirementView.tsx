@@ -85,7 +85,8 @@ export function RequirementView(props: RequirementProps) {
       >
         {finding}
       </Finding>
-      <div className="grid gap-10">
+      <div className="grid grid-cols-[minmax(0,1fr)] gap-10">
+        <QuestionPanel study={study.data} onKept={study.keep} locked={locked} />
         <ManifestPanel
           studyId={studyId}
           orbits={manifest}
@@ -102,10 +103,7 @@ export function RequirementView(props: RequirementProps) {
           turnSpeedFraction={settings.data.turnSpeedFraction}
           locked={locked}
         />
-        <div className="grid gap-10 sheet:grid-cols-2 sheet:gap-14">
-          <QuestionPanel study={study.data} onKept={study.keep} locked={locked} />
-          <SettingsPanel studyId={studyId} kept={settings.data} onKept={settings.keep} locked={locked} />
-        </div>
+        <SettingsPanel studyId={studyId} kept={settings.data} onKept={settings.keep} locked={locked} />
       </div>
     </>
   );

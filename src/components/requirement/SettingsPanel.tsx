@@ -32,13 +32,14 @@ export function SettingsPanel({ studyId, kept, onKept, locked }: SettingsProps) 
       send<StudySettings & Saved>('PATCH', `/api/v1/studies/${studyId}/settings`, { ...change, version }),
     onKept,
   });
-  useKeptValues(form, fields, autosave.settled);
+  const basedOn = useKeptValues(form, fields, autosave.settled);
   const leave = () => {
     const read = TurnSpeedFraction.safeParse(form.getValues('turnSpeedFraction'));
     const message = read.error?.issues[0]?.message;
     if (message) form.setError('turnSpeedFraction', { message });
     else form.clearErrors();
-    if (read.success && read.data !== turnSpeedFraction) autosave.save({ turnSpeedFraction: read.data });
+    if (read.success && read.data !== turnSpeedFraction)
+      autosave.save({ turnSpeedFraction: read.data }, basedOn());
   };
   const isDefault = turnSpeedFraction === DEFAULT_TURN_SPEED_FRACTION;
   return (

@@ -29,7 +29,7 @@ interface TakeProps {
 
 /** Choosing from the library; a vehicle that would be replaced is asked about first. */
 function TakeFromLibrary({ library, kept, onTake }: TakeProps) {
-  const [chosen, setChosen] = useState(library[0]?.id ?? '');
+  const [chosen, setChosen] = useState(kept.libraryVehicleId ?? library[0]?.id ?? '');
   const [asking, setAsking] = useState(false);
   const entry = library.find(({ id }) => id === chosen);
   if (!entry) return <p className="caption">The library has no vehicle; an administrator fills it.</p>;
@@ -47,7 +47,12 @@ function TakeFromLibrary({ library, kept, onTake }: TakeProps) {
           onChange={(event) => setChosen(event.target.value)}
         />
       </div>
-      <Button onClick={() => (kept.vehicle ? setAsking(true) : take())}>Take {shortName(entry.name)}</Button>
+      <Button
+        notYet={entry.id === kept.libraryVehicleId ? 'The study flies this vehicle already.' : undefined}
+        onClick={() => (kept.vehicle ? setAsking(true) : take())}
+      >
+        Take {shortName(entry.name)}
+      </Button>
       <ConfirmDialog
         open={asking}
         onClose={() => setAsking(false)}
@@ -116,12 +121,14 @@ export function VehiclePanel(props: VehicleProps) {
         describe={(version) => differencesOf(version, autosave.clash)}
       />
       {shown ? (
-        <div className="grid gap-8 sheet:grid-cols-[1fr_26rem] sheet:gap-14">
+        <div className="grid grid-cols-[minmax(0,1fr)] gap-8 sheet:grid-cols-[minmax(0,1fr)_26rem] sheet:gap-14">
           <VehicleForm
             key={`${taken}-${autosave.settled}`}
             vehicle={kept.vehicle}
             locked={locked}
-            onChange={(vehicle) => autosave.save({ vehicle, libraryVehicleId: null })}
+            onChange={(vehicle, basedOn) =>
+              autosave.save({ vehicle, libraryVehicleId: null }, { vehicle: basedOn })
+            }
             onDraft={(vehicle) => setDraft({ vehicle })}
           />
           <section aria-label="Payload check">

@@ -22,7 +22,11 @@ interface AutosaveOptions<T extends Versioned> {
 }
 
 export interface Autosave<T> {
-  save: (change: Partial<T>) => void;
+  /**
+   * Saves a change. `basedOn` holds the values its fields were edited from: where someone else's are there now, the
+   * person chooses before anything is written.
+   */
+  save: (change: Partial<T>, basedOn?: Partial<T>) => void;
   clash: Clash<T> | null;
   keepTheirs: () => void;
   putMine: () => void;
@@ -36,9 +40,9 @@ export interface Autosave<T> {
 const same = (a: unknown, b: unknown): boolean => JSON.stringify(a) === JSON.stringify(b);
 
 /** Whether someone else changed a field that is being written here. */
-function clashes<T extends Versioned>(mine: Partial<T>, base: T, theirs: T): boolean {
+function clashes<T extends Versioned>(mine: Partial<T>, basedOn: Partial<T>, theirs: T): boolean {
   return (Object.keys(mine) as (keyof T)[]).some(
-    (field) => !same(theirs[field], base[field]) && !same(theirs[field], mine[field]),
+    (field) => field in basedOn && !same(theirs[field], basedOn[field]) && !same(theirs[field], mine[field]),
   );
 }
 
@@ -108,7 +112,12 @@ export function useAutosave<T extends Versioned>({ kept, write, onKept }: Autosa
   }, [refused, take]);
 
   const save = useCallback(
-    (change: Partial<T>) => {
+    (change: Partial<T>, basedOn?: Partial<T>) => {
+      if (basedOn && clashes(change, basedOn, base.current)) {
+        setClash({ mine: change, theirs: base.current, at: new Date().toISOString() });
+        announceKept();
+        return;
+      }
       pending.current = { ...pending.current, ...change };
       void pump();
     },

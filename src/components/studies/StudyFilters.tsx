@@ -44,7 +44,7 @@ export function StudyFilters({ query, onChange }: FiltersProps) {
           onChange={(event) => setText(event.target.value)}
         />
       </div>
-      <div className="w-44 pb-5">
+      <div className="w-44 phone:pb-5">
         <Select
           label="State"
           choices={STATES}
@@ -54,7 +54,7 @@ export function StudyFilters({ query, onChange }: FiltersProps) {
           }
         />
       </div>
-      <div className="pb-5">
+      <div className="phone:pb-5">
         <Segmented
           legend="Archived or not"
           segments={ARCHIVE}

@@ -9,6 +9,9 @@ interface RowActions {
   onArchive: (study: Study) => void;
 }
 
+/** A phone reads the title and the state; the rest is for wider screens. */
+const WIDE = 'hidden phone:table-cell';
+
 function StudyRow({ study, onCopy, onArchive }: { study: Study } & RowActions) {
   const reason = study.role === 'lead' ? undefined : 'A lead of the study archives and restores it.';
   return (
@@ -17,17 +20,22 @@ function StudyRow({ study, onCopy, onArchive }: { study: Study } & RowActions) {
         <a className="name" href={`/studies/${study.id}`}>
           {study.title}
         </a>
-        <span className="sub max-w-[32rem] truncate">
+        <span className="sub phone:hidden">
+          {ROLE_NAMES[study.role]}, revision {formatNumber(study.revision)}
+        </span>
+        <span className="sub hidden max-w-[32rem] truncate phone:block">
           {[study.organisation, study.question].filter(Boolean).join(': ') || 'No question written yet'}
         </span>
       </th>
       <td>
         <Tag>{STATE_NAMES[study.state]}</Tag> {study.archived && <Tag>Archived</Tag>}
       </td>
-      <td>{ROLE_NAMES[study.role]}</td>
-      <td className="num">{study.decideBy ?? '–'}</td>
-      <td className="num">{formatNumber(study.revision)}</td>
-      <td className="num whitespace-nowrap">{formatDateTimeUtc(study.updatedAt).replace(' UTC', '')}</td>
+      <td className={WIDE}>{ROLE_NAMES[study.role]}</td>
+      <td className={`num ${WIDE}`}>{study.decideBy ?? '–'}</td>
+      <td className={`num ${WIDE}`}>{formatNumber(study.revision)}</td>
+      <td className={`num whitespace-nowrap ${WIDE}`}>
+        {formatDateTimeUtc(study.updatedAt).replace(' UTC', '')}
+      </td>
       <td>
         <span className="flex justify-end gap-2">
           <Button size="small" icon="copy" aria-label={`Copy ${study.title}`} onClick={() => onCopy(study)}>
@@ -61,14 +69,16 @@ export function StudyTable({
           <tr>
             <th scope="col">Study</th>
             <th scope="col">State</th>
-            <th scope="col">Your role</th>
-            <th scope="col" className="num">
+            <th scope="col" className={WIDE}>
+              Your role
+            </th>
+            <th scope="col" className={`num ${WIDE}`}>
               Decide by
             </th>
-            <th scope="col" className="num">
+            <th scope="col" className={`num ${WIDE}`}>
               Revision
             </th>
-            <th scope="col" className="num">
+            <th scope="col" className={`num ${WIDE}`}>
               Changed <span className="unit">UTC</span>
             </th>
             <th scope="col">

@@ -11,15 +11,19 @@ const LABELS: Record<Loss, string> = {
   steering: 'Steering loss',
 };
 
+/** What drag comes to on small vehicles. */
+const MOST_DRAG_MPS = 400;
+
 function guidance(loss: Loss): string {
   const [low, high] = lossGuidanceMps[loss];
   const usual = `Usual ${formatNumber(low)} to ${formatNumber(high)}`;
-  return loss === 'drag' ? `${usual}, to 400 on small vehicles` : usual;
+  return loss === 'drag' ? `${usual}, to ${MOST_DRAG_MPS} on small vehicles` : usual;
 }
 
 /** Said, not refused: a figure outside the usual range may be right for its vehicle. */
 function remark(loss: Loss, value: unknown): string | undefined {
-  const [low, high] = lossGuidanceMps[loss];
+  const [low, usual] = lossGuidanceMps[loss];
+  const high = loss === 'drag' ? MOST_DRAG_MPS : usual;
   if (typeof value !== 'number' || (value >= low && value <= high)) return undefined;
   return value < low ? 'Below the usual range' : 'Above the usual range';
 }

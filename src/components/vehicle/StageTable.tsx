@@ -63,17 +63,19 @@ export function StageTable(parts: VehicleFormParts) {
   return (
     <>
       <div className="table-scroll" role="region" aria-label="Stages" tabIndex={0}>
-        <table className="table min-w-[44rem]">
+        <table className="table min-w-[44rem] table-fixed">
           <thead>
             <tr>
-              <th scope="col">Stage</th>
+              <th scope="col" className="w-16">
+                Stage
+              </th>
               {ENGINE_COLUMNS.map(({ key, name, optional }) => (
                 <th key={key} scope="col">
                   {name} {optional && <span className="unit">none: vacuum throughout</span>}
                 </th>
               ))}
               {!locked && (
-                <th scope="col">
+                <th scope="col" className="w-12">
                   <span className="sr-only">Remove</span>
                 </th>
               )}

@@ -1,4 +1,4 @@
-import { useEffect, useRef, useState } from 'react';
+import { useCallback, useEffect, useRef, useState } from 'react';
 import { useForm, useWatch, type FieldPath, type UseFormReturn } from 'react-hook-form';
 import { Select, TextField } from '#components/ui/index.ts';
 import type { VehicleInput } from '#contract/vehicle.ts';
@@ -12,8 +12,8 @@ interface VehicleFormProps {
   /** The vehicle as it is saved; null where there is none yet. */
   vehicle: VehicleInput | null;
   locked: boolean;
-  /** A whole vehicle that differs from the saved one, when a field is left. */
-  onChange: (vehicle: VehicleInput) => void;
+  /** A whole vehicle that differs from the saved one, when a field is left, and the saved one it was edited from. */
+  onChange: (vehicle: VehicleInput, basedOn: VehicleInput | null) => void;
   /** The vehicle as it stands in the fields, whole or not: for what is computed live beside the form. */
   onDraft?: ((vehicle: VehicleInput | null) => void) | undefined;
 }
@@ -35,37 +35,48 @@ function showErrors(
   }
 }
 
-/** Takes in a vehicle that was saved elsewhere, unless one is being written here. */
-function useSavedVehicle(form: UseFormReturn<VehicleFields>, vehicle: VehicleInput | null): void {
-  const last = useRef(vehicle);
+/**
+ * Takes in a vehicle that was saved elsewhere, unless one is being written here.
+ * @returns the saved vehicle that what stands in the fields is based on
+ */
+function useSavedVehicle(
+  form: UseFormReturn<VehicleFields>,
+  vehicle: VehicleInput | null,
+): () => VehicleInput | null {
+  const basedOn = useRef(vehicle);
   useEffect(() => {
-    const before = last.current;
-    last.current = vehicle;
-    if (same(before, vehicle)) return;
-    const read = readVehicle(form.getValues(), before);
-    const untouched = read.success && same(read.data, before ?? undefined);
+    if (same(basedOn.current, vehicle)) return;
+    const read = readVehicle(form.getValues(), basedOn.current);
     const caughtUp = read.success && same(read.data, vehicle);
-    if (!caughtUp && (untouched || before === null)) form.reset(fieldsOf(vehicle));
+    const untouched = same(form.getValues(), fieldsOf(basedOn.current));
+    if (!caughtUp && !untouched) return;
+    basedOn.current = vehicle;
+    if (!caughtUp) form.reset(fieldsOf(vehicle));
   }, [form, vehicle]);
+  return useCallback(() => basedOn.current, []);
 }
 
 /** Stages, boosters, fairing, losses and reserve of a vehicle; checked on leaving a field, by the interface's schema. */
 export function VehicleForm({ vehicle, locked, onChange, onDraft }: VehicleFormProps) {
   const form = useForm<VehicleFields>({ defaultValues: fieldsOf(vehicle) });
   const [waits, setWaits] = useState(false);
-  useSavedVehicle(form, vehicle);
+  const basedOn = useSavedVehicle(form, vehicle);
   const leave = () => {
     if (locked) return;
     const read = readVehicle(form.getValues(), vehicle);
     showErrors(form, read.error?.issues ?? [], vehicle ? 'all' : 'touched');
     setWaits(!read.success);
     onDraft?.(read.success ? read.data : null);
-    if (read.success && !same(read.data, vehicle)) onChange(read.data);
+    if (read.success && !same(read.data, vehicle)) onChange(read.data, basedOn());
   };
   const parts = { form, locked, onLeave: leave };
   const stages = useWatch({ control: form.control, name: 'stages' }).length;
   return (
-    <form className="grid gap-6" noValidate onSubmit={(event) => event.preventDefault()}>
+    <form
+      className="grid grid-cols-[minmax(0,1fr)] content-start gap-6"
+      noValidate
+      onSubmit={(event) => event.preventDefault()}
+    >
       <div className="max-w-md">
         <TextField
           label="Name"
@@ -75,7 +86,9 @@ export function VehicleForm({ vehicle, locked, onChange, onDraft }: VehicleFormP
           {...form.register('name', { onBlur: leave })}
         />
       </div>
-      <StageTable {...parts} />
+      <div>
+        <StageTable {...parts} />
+      </div>
       <BoosterFields {...parts} />
       <div className="grid gap-4 phone:grid-cols-3">
         <Figure {...parts} name="fairingKg" label="Fairing" unit="kg" hint="Default 0" />
