@@ -1,9 +1,9 @@
-import { useState } from 'react';
+import { useState, type ReactNode } from 'react';
 import type { KeptMail, MailEntry, Outbox } from '#contract/admin.ts';
-import { useApi } from '#components/live/hooks.ts';
+import { useApi, useFinding } from '#components/live/hooks.ts';
 import { Pager } from '#components/studies/Pager.tsx';
-import { EmptyState, Panel, SideSheet, TableScroll, Tag } from '#components/ui/index.ts';
-import { at } from './words.ts';
+import { EmptyState, Finding, Panel, SideSheet, TableScroll, Tag } from '#components/ui/index.ts';
+import { at, outboxFinding } from './words.ts';
 
 const PAGE_SIZE = 50;
 const READ_AGAIN_MS = 5_000;
@@ -14,40 +14,46 @@ const STATES: Record<MailEntry['state'], string> = {
 };
 
 /** Mail that stayed here for want of a mail server, and the log of all mail. */
-export function OutboxView({ outbox }: { outbox: Outbox }) {
+export function OutboxView({ outbox, children }: { outbox: Outbox; children: ReactNode }) {
   const [page, setPage] = useState(1);
   const [reading, setReading] = useState<KeptMail | null>(null);
   const { data = outbox } = useApi<Outbox>(`/api/v1/admin/outbox?page=${page}&pageSize=${PAGE_SIZE}`, {
     ...(page === 1 ? { fallbackData: outbox } : {}),
     refreshInterval: READ_AGAIN_MS,
   });
+  const finding = outboxFinding(data);
+  useFinding(finding);
   return (
-    <div className="grid grid-cols-1 gap-9">
-      {(!data.mailServer || data.kept.total > 0) && (
+    <>
+      <Finding>{finding}</Finding>
+      {children}
+      <div className="grid grid-cols-1 gap-9">
+        {(!data.mailServer || data.kept.total > 0) && (
+          <Panel
+            title="Kept here"
+            caption="Without a mail server (SMTP_URL) nothing leaves this machine. Each message stands here as it would have gone out."
+          >
+            <KeptTable items={data.kept.items} onRead={setReading} />
+          </Panel>
+        )}
         <Panel
-          title="Kept here"
-          caption="Without a mail server (SMTP_URL) nothing leaves this machine. Each message stands here as it would have gone out."
+          title="Sent"
+          caption="Every message and how it fared. Its text is kept only until it is sent, because it may carry a link."
         >
-          <KeptTable items={data.kept.items} onRead={setReading} />
+          <SentTable items={data.sent.items} />
         </Panel>
-      )}
-      <Panel
-        title="Sent"
-        caption="Every message and how it fared. Its text is kept only until it is sent, because it may carry a link."
-      >
-        <SentTable items={data.sent.items} />
-      </Panel>
-      <Pager
-        what="messages"
-        page={page}
-        pageSize={PAGE_SIZE}
-        total={Math.max(data.kept.total, data.sent.total)}
-        onPage={setPage}
-      />
-      <SideSheet open={reading !== null} onClose={() => setReading(null)} title={reading?.subject ?? ''}>
-        {reading && <Message mail={reading} />}
-      </SideSheet>
-    </div>
+        <Pager
+          what="messages"
+          page={page}
+          pageSize={PAGE_SIZE}
+          total={Math.max(data.kept.total, data.sent.total)}
+          onPage={setPage}
+        />
+        <SideSheet open={reading !== null} onClose={() => setReading(null)} title={reading?.subject ?? ''}>
+          {reading && <Message mail={reading} />}
+        </SideSheet>
+      </div>
+    </>
   );
 }
 

@@ -1,10 +1,10 @@
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
 import { LibraryVehicleInput } from '#contract/admin.ts';
 import type { LibraryVehicle } from '#contract/requirement.ts';
 import type { VehicleInput } from '#contract/vehicle.ts';
 import { send, type ApiError } from '#components/live/api.ts';
 import { useAction } from '#components/live/hooks.ts';
-import { Button, Conflict, Notice, Panel, TextField } from '#components/ui/index.ts';
+import { Button, ConfirmDialog, Conflict, Notice, Panel, TextField } from '#components/ui/index.ts';
 import { VehicleForm } from '#components/vehicle/VehicleForm.tsx';
 import { at } from './words.ts';
 
@@ -30,11 +30,22 @@ function notReady(code: string, vehicle: VehicleInput | null): string | undefine
   return vehicle.name ? undefined : 'Give the vehicle a name first.';
 }
 
+/** The browser asks before a page with unsaved changes is left. */
+function useUnloadGuard(changed: boolean) {
+  useEffect(() => {
+    if (!changed) return;
+    const ask = (event: BeforeUnloadEvent) => event.preventDefault();
+    addEventListener('beforeunload', ask);
+    return () => removeEventListener('beforeunload', ask);
+  }, [changed]);
+}
+
 /** Adding or editing a vehicle of the library; unlike a study's, it is saved by a button. */
 export function VehicleEditor({ entry, onSaved, onLeave }: EditorProps) {
   const [base, setBase] = useState(entry);
   const [code, setCode] = useState(entry?.code ?? '');
   const [left, setLeft] = useState(false);
+  const [leaving, setLeaving] = useState(false);
   const [draft, setDraft] = useState<VehicleInput | null>(entry?.vehicle ?? null);
   const { busy, error, run } = useAction();
   const save = (version: number | undefined) =>
@@ -45,6 +56,9 @@ export function VehicleEditor({ entry, onSaved, onLeave }: EditorProps) {
         : await send<LibraryVehicle>('POST', ADDRESS, body);
       onSaved(saved);
     });
+  const changed =
+    code !== (base?.code ?? '') || JSON.stringify(draft) !== JSON.stringify(base?.vehicle ?? null);
+  useUnloadGuard(changed && !busy);
   const theirs = error?.code === 'stale' ? (error.current as LibraryVehicle) : null;
   const takeTheirs = (kept: LibraryVehicle) => {
     setBase(kept);
@@ -97,10 +111,20 @@ export function VehicleEditor({ entry, onSaved, onLeave }: EditorProps) {
         >
           Save vehicle
         </Button>
-        <Button kind="text" onClick={onLeave}>
+        <Button kind="text" onClick={() => (changed ? setLeaving(true) : onLeave())}>
           Leave without saving
         </Button>
       </div>
+      <ConfirmDialog
+        open={leaving}
+        onClose={() => setLeaving(false)}
+        onConfirm={onLeave}
+        destructive
+        title="Leave without saving?"
+        confirm="Leave without saving"
+      >
+        What you changed of {entry?.name ?? 'the new vehicle'} is lost.
+      </ConfirmDialog>
     </Panel>
   );
 }

@@ -1,17 +1,18 @@
-import { useState } from 'react';
+import { useState, type ReactNode } from 'react';
 import type { LibraryVehicle, LibraryVehicleList } from '#contract/requirement.ts';
 import { send } from '#components/live/api.ts';
-import { useAction, useApi } from '#components/live/hooks.ts';
+import { useAction, useApi, useFinding } from '#components/live/hooks.ts';
 import { Pager } from '#components/studies/Pager.tsx';
-import { Button, ConfirmDialog, EmptyState, Notice, toast } from '#components/ui/index.ts';
+import { Button, ConfirmDialog, EmptyState, Finding, Notice, toast } from '#components/ui/index.ts';
 import { VehicleEditor } from './VehicleEditor.tsx';
 import { VehicleTable } from './VehicleTable.tsx';
+import { libraryFinding } from './words.ts';
 
 const ADDRESS = '/api/v1/admin/vehicles';
 const PAGE_SIZE = 50;
 
 /** The shared library: what studies choose from. Studies hold copies, so a change here moves none of them. */
-export function VehiclesView({ list }: { list: LibraryVehicleList }) {
+export function VehiclesView({ list, children }: { list: LibraryVehicleList; children: ReactNode }) {
   const [page, setPage] = useState(1);
   const [editing, setEditing] = useState<{ vehicle: LibraryVehicle | null } | null>(null);
   const [archiving, setArchiving] = useState<LibraryVehicle | null>(null);
@@ -36,15 +37,28 @@ export function VehiclesView({ list }: { list: LibraryVehicleList }) {
     toast(`${vehicle.name} is in the library`);
     void mutate();
   };
+  const finding = libraryFinding(data);
+  useFinding(finding);
   if (editing)
-    return <VehicleEditor entry={editing.vehicle} onSaved={saved} onLeave={() => setEditing(null)} />;
+    return (
+      <>
+        <Finding>{finding}</Finding>
+        {children}
+        <VehicleEditor entry={editing.vehicle} onSaved={saved} onLeave={() => setEditing(null)} />
+      </>
+    );
   return (
     <>
-      <div className="bar">
-        <Button kind="primary" icon="add" onClick={() => setEditing({ vehicle: null })}>
-          Add a vehicle
-        </Button>
-      </div>
+      <Finding
+        actions={
+          <Button kind="primary" icon="add" onClick={() => setEditing({ vehicle: null })}>
+            Add a vehicle
+          </Button>
+        }
+      >
+        {finding}
+      </Finding>
+      {children}
       {error && (
         <div className="mb-4">
           <Notice fact={error.message} requestId={error.status >= 500 ? error.requestId : undefined}>
