@@ -76,6 +76,16 @@ describe('signing in', () => {
     expect(await whoHas(two)).toBeNull();
   });
 
+  test('no address tells a script the session’s token', async () => {
+    await person('script@example.org');
+    const cookie = cookieOf(await signIn('script@example.org'));
+    for (const path of ['get-session', 'list-sessions']) {
+      const request = new Request(`${ORIGIN}/api/auth/${path}`, { headers: { cookie } });
+      const answer = await handleAuth({ db, request, clientAddress: '192.0.2.1', requestId: 'test' });
+      expect(answer.status).toBe(404);
+    }
+  });
+
   test('nobody registers on their own where sign-up is shut', async () => {
     const response = await post('sign-up/email', { name: 'X', email: 'x@example.org', password: PASSWORD });
     expect(response.status).toBe(403);

@@ -24,7 +24,7 @@ export function AccountView({ account, keys, sessions }: AccountProps) {
       <div className="tablet:col-span-2">
         <Panel
           title="Sessions"
-          caption="Where you are signed in. A session ends by itself after a week without use."
+          caption="Where you are signed in. A session ends by itself a week after signing in."
         >
           <SessionsTable sessions={sessions} />
         </Panel>

@@ -1,6 +1,6 @@
 import { useState } from 'react';
 import { AccountPatch, type Account } from '#contract/account.ts';
-import type { ApiError} from '#components/live/api.ts';
+import type { ApiError } from '#components/live/api.ts';
 import { send } from '#components/live/api.ts';
 import { useAction } from '#components/live/hooks.ts';
 import { Button, Conflict, Notice, TextField, toast, useContractForm } from '#components/ui/index.ts';

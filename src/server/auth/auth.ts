@@ -39,8 +39,10 @@ function make() {
         deactivatedAt: { type: 'date', required: false, input: false },
       },
     },
-    // Names are changed, and people listed, through this product's own interface, which keeps the record.
-    disabledPaths: ['/update-user', '/list-sessions', '/revoke-session'],
+    // Names are changed through this product's own interface, which keeps the record; what tells a session's token
+    // to a script, and the library's own pages, are not for anyone.
+    disabledPaths: ['/update-user', '/get-session', '/list-sessions', '/revoke-session', '/error', '/ok'],
+    onAPIError: { errorURL: '/sign-in' },
     emailAndPassword: {
       enabled: true,
       minPasswordLength: MIN_PASSWORD_LENGTH,
