@@ -1,6 +1,13 @@
 import { foldName } from './codes.ts';
 import { stripGuard } from './guard.ts';
-import { recognise, SITE_FIELDS, type ColumnField, type Recognised, type SiteField } from './headings.ts';
+import {
+  isRefusedHeading,
+  recognise,
+  SITE_FIELDS,
+  type ColumnField,
+  type Recognised,
+  type SiteField,
+} from './headings.ts';
 import { CriterionNamer, type ExistingCriterion, type FigureKind } from './criterion-columns.ts';
 import { MAX_COLUMNS } from './limits.ts';
 
@@ -62,7 +69,11 @@ export function matchColumns(
   }
   const recognised = headings.map(recognise);
   const fields: ColumnField[] = headings.map((text, i) =>
-    isBest(recognised, i) ? (recognised[i]?.field ?? 'unused') : text === '' ? 'unused' : 'criterion',
+    isBest(recognised, i)
+      ? (recognised[i]?.field ?? 'unused')
+      : text === '' || isRefusedHeading(text)
+        ? 'unused'
+        : 'criterion',
   );
   const wrong = applyChoices(fields, headings, choices);
   const columns = describe(headings, fields, recognised, criteria);

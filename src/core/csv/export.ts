@@ -1,6 +1,7 @@
 import { addGuard } from './guard.ts';
 import { readNumber } from './numbers.ts';
 import { writeSectors, type Sector } from './sectors.ts';
+import type { Delimiter } from './tokenise.ts';
 
 /** A site as the export writes it. `values` are by criterion id. */
 export interface ExportedSite {
@@ -54,9 +55,15 @@ export function writeSites(sites: readonly ExportedSite[], criteria: readonly Ex
   return writeCsv([[...HEADING, ...names], ...lines]);
 }
 
-/** Writes any table as CSV made harmless for spreadsheets: numbers, as such or as text, plainly; texts guarded. */
-export function writeCsv(rows: readonly (readonly (string | number)[])[]): string {
-  return rows.map((row) => `${row.map(writeCell).join(',')}\r\n`).join('');
+/**
+ * Writes any table as CSV made harmless for spreadsheets: numbers, as such or as text, plainly; texts guarded.
+ * @param delimiter what parts the cells
+ */
+export function writeCsv(
+  rows: readonly (readonly (string | number)[])[],
+  delimiter: Delimiter = ',',
+): string {
+  return rows.map((row) => `${row.map(writeCell).join(delimiter)}\r\n`).join('');
 }
 
 function writeCell(value: string | number): string {

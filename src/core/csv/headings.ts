@@ -103,6 +103,13 @@ const KNOWN: ReadonlyMap<string, { field: SiteField; rank: number }> = new Map(
   SITE_FIELDS.flatMap((field) => SYNONYMS[field].map((word, rank) => [word, { field, rank }] as const)),
 );
 
+/** Columns that a file of refused rows carries for people; they are read as nothing. */
+export const REFUSED_HEADINGS = ['Line in the file', 'Why it was refused'] as const;
+
+export function isRefusedHeading(heading: string): boolean {
+  return REFUSED_HEADINGS.some((known) => known === heading);
+}
+
 /** Words in a heading that name a unit or a datum and not the thing itself. */
 const QUALIFIERS = new Set(
   'deg degs degree degrees dd dms decimal wgs wgs84 84 m metre metres meter meters ft feet foot msl amsl asl'.split(

@@ -3,6 +3,7 @@ import Papa from 'papaparse';
 import { describe, expect, test } from 'vitest';
 import { writeCsv, writeSites, type ExportedSite } from '#core/csv/export.ts';
 import { readSites } from '#core/csv/read-sites.ts';
+import { writeRefused } from '#core/csv/refused.ts';
 
 const CRITERIA = [
   { id: 'c1', name: 'Cost to first launch', unit: 'M€' },
@@ -105,4 +106,29 @@ describe('writeSites', () => {
 
 test('writeCsv leaves a number a number, even as text, and guards the rest', () => {
   expect(writeCsv([['-4.5', '-4 30 S', '+1', "'quoted", 7, '']])).toBe(`-4.5,'-4 30 S,+1,'quoted,7,\r\n`);
+});
+
+test('writeRefused gives the refused rows to put right, which can be uploaded again', () => {
+  const text = 'Ort;Breite;Länge;Kosten\nA;-4,5;200;1,5\nB;x;-7,25;2\nC;97;=1;"a;b"\n';
+  const columns = [{ column: 'Ort', field: 'name' }] as const;
+  const file = readSites(new TextEncoder().encode(text), { existing: [], columns });
+  if (file.kind === 'refused') throw new Error(file.message);
+  const refused = writeRefused(file);
+  expect(Papa.parse(refused, { delimiter: ';', skipEmptyLines: true }).data).toEqual([
+    ['Ort', 'Breite', 'Länge', 'Kosten', 'Line in the file', 'Why it was refused'],
+    ['B', 'x', "'-7,25", '2', '3', 'Latitude “x” is not a number of degrees.'],
+    [
+      'C',
+      '97',
+      "'=1",
+      'a;b',
+      '4',
+      'Latitude 97 is outside −90 to 90. Longitude “=1” is not a number of degrees.',
+    ],
+  ]);
+  const again = readSites(new TextEncoder().encode(refused.replace(';x;', ';1;')), { existing: [], columns });
+  expect(again).toMatchObject({
+    counts: { new: 1, refused: 1 },
+    rows: [{ site: { name: 'B', longitudeDeg: -7.25, values: { Kosten: 2 } } }, { outcome: 'refused' }],
+  });
 });
