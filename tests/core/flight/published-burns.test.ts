@@ -9,7 +9,7 @@ import {
   simplePlaneChange,
 } from '#core/flight/plane-change.ts';
 import type { Vehicle } from '#core/flight/types.ts';
-import { burnsOf, idealDeltaV } from '#core/flight/vehicle.ts';
+import { burnsOf, idealDeltaV, massFlow } from '#core/flight/vehicle.ts';
 import {
   fromDegrees,
   fromKilometres,
@@ -89,9 +89,35 @@ const vehicleOf = (...stages: Vehicle['stages']): Vehicle => ({
 /** The example's two stages: 100 t and 8 t at 300 s, 20 t and 2 t at 340 s. */
 const twoStages = vehicleOf(stage(100_000, 8000, 300), stage(20_000, 2000, 340));
 
+/** Impulse of a stage of the four-phase ascent benchmark from its thrust, propellant and burn time. */
+const impulseOf = (thrustN: number, propellantKg: number, burnS: number) =>
+  (massFlow({ ...stage(1, 1, 1), vacuumThrust: newtons(thrustN) }) * burnS) / propellantKg;
+
+/** The benchmark's four burns: six boosters with the core, three with the core, the core alone, the second stage. */
+function fourBurns(): number {
+  const [booster, core, second] = [226.196809, 366.091954, 24.028571];
+  const burn = (thrustN: number, flow: number, startKg: number, endKg: number) => ({
+    exhaustSpeed: metresPerSecond(thrustN / flow),
+    startMass: kilograms(startKg),
+    endMass: kilograms(endKg),
+  });
+  return idealDeltaV(
+    [
+      burn(4_854_100, 6 * booster + core, 301_454, 171_863.885057),
+      burn(2_968_600, 3 * booster + core, 158_183.885057, 79_623.770115),
+      burn(1_083_100, core, 72_783.770115, 32_294),
+      burn(110_094, second, 23_464, 7529.712412),
+    ],
+    kilograms(0),
+  );
+}
+
 const rocket: Record<string, (row: ReferenceRow<'rocket'>) => number> = {
   'one burn': () => idealDeltaV(burnsOf(vehicleOf(stage(4000, 1000, 300))), kilograms(0)),
   ideal: (row) => idealDeltaV(burnsOf(twoStages), kilograms(Number(row.payload_kg))),
+  'booster impulse': () => impulseOf(628_500, 17_010, 75.2),
+  'second stage impulse': () => impulseOf(110_094, 16_820, 700),
+  'four burns': fourBurns,
   payload: (row) => {
     const payload = payloadFor(twoStages, metresPerSecond(Number(row.delta_v_mps)));
     return payload.kind === 'carries' ? payload.mass : NaN;
