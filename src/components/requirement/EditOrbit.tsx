@@ -29,7 +29,10 @@ const inWords = (value: StudyOrbit[keyof StudyOrbit] | undefined): string => {
 function describe(version: Partial<StudyOrbit>, fields: readonly (keyof StudyOrbit)[]) {
   return fields.map((field) => (
     <span key={field} className="block">
-      {field in ORBIT_LABELS ? ORBIT_LABELS[field as keyof OrbitFields] : field}: {inWords(version[field])}
+      <span className="font-sans text-sm">
+        {field in ORBIT_LABELS ? ORBIT_LABELS[field as keyof OrbitFields] : field}
+      </span>{' '}
+      {inWords(version[field])}
     </span>
   ));
 }

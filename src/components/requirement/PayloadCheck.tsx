@@ -1,7 +1,7 @@
 import { useMemo, useState } from 'react';
 import { NumberField } from '#components/ui/index.ts';
 import type { OrbitResult } from '#contract/evaluate.ts';
-import { formatFull, formatNumber, readTypedNumber } from '#contract/format.ts';
+import { formatNumber, readTypedNumber } from '#contract/format.ts';
 import type { StudyOrbit } from '#contract/requirement.ts';
 import type { VehicleInput } from '#contract/vehicle.ts';
 import { carriedFor, flightsFromEquator, type Carried } from './payload-check.ts';
@@ -16,10 +16,13 @@ interface CheckProps {
 
 const MOST_DELTA_V_MPS = 50_000;
 
+/** Decimals on hover: payloads are solved to a hundredth; the last bits differ between browser and server. */
+const FULL = 2;
+
 function Payload({ carried }: { carried: Carried | null }) {
   if (!carried) return <>–</>;
   return 'payloadKg' in carried ? (
-    <span title={`${formatFull(carried.payloadKg)} kg`}>{formatNumber(carried.payloadKg)}</span>
+    <span title={`${formatNumber(carried.payloadKg, FULL)} kg`}>{formatNumber(carried.payloadKg)}</span>
   ) : (
     <span className="font-sans">falls short by {formatNumber(carried.shortfallMps)} m/s</span>
   );
@@ -40,7 +43,7 @@ function OrbitRow({ name, result }: { name: string; result: OrbitResult }) {
         </td>
       ) : (
         <>
-          <td className="num" title={`${formatFull(result.deltaVMps.total)} m/s`}>
+          <td className="num" title={`${formatNumber(result.deltaVMps.total, FULL)} m/s`}>
             {formatNumber(result.deltaVMps.total)}
           </td>
           <td className="num">

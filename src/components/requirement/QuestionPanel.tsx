@@ -30,7 +30,7 @@ const headOf = ({ title, organisation, question, decideBy }: Study): StudyHead =
 
 function describe(version: Partial<Study>, fields: readonly (keyof Study)[]) {
   return FIELDS.filter((field) => fields.includes(field)).map((field) => (
-    <span key={field} className="block">
+    <span key={field} className="block font-sans text-base">
       {LABELS[field]}: {version[field] || 'nothing'}
     </span>
   ));

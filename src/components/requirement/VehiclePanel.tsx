@@ -38,8 +38,8 @@ function TakeFromLibrary({ library, kept, onTake }: TakeProps) {
     onTake(entry);
   };
   return (
-    <div className="flex flex-wrap items-end gap-3">
-      <div className="w-full phone:w-96">
+    <div className="flex max-w-full min-w-0 flex-wrap items-end gap-3">
+      <div className="w-full min-w-0 phone:w-96">
         <Select
           label="From the library"
           choices={library.map(({ id, name }) => ({ value: id, name }))}

@@ -48,8 +48,8 @@ export function differencesOf(version: Partial<StudyVehicle>, clash: Clash<Study
   const different = paths.filter((path) => mine.get(path) !== theirs.get(path));
   if (shown.size === 0) return 'no vehicle';
   return different.map((path) => (
-    <span key={path} className="block text-sm">
-      {labelOf(path)}: {shown.get(path) ?? 'none'}
+    <span key={path} className="block">
+      <span className="font-sans text-sm">{labelOf(path)}</span> {shown.get(path) ?? 'none'}
     </span>
   ));
 }
