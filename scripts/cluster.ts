@@ -1,7 +1,7 @@
-import { randomUUID } from 'node:crypto';
 import fs from 'node:fs';
 import path from 'node:path';
 import pg from 'pg';
+import { choosePlace, majorOfCluster, readPlace, runningServer, type Place } from './cluster-place.ts';
 import { inLock } from './lock.mjs';
 import { freePort } from './ports.ts';
 import { clusterUser, runAs, serverPrograms, type SystemUser } from './postgres.ts';
@@ -22,11 +22,9 @@ export interface ClusterOptions {
   durable?: boolean;
 }
 
-interface Place {
-  folder: string;
-  port?: number | undefined;
-}
 type Passwords = Record<ClusterRole, string>;
+
+const REJOIN_MS = 1_000;
 
 /** SQLSTATE of a wrong password. */
 const INVALID_PASSWORD = '28P01';
@@ -94,6 +92,13 @@ export class Cluster {
     await client.query(`drop database if exists "${name}" with (force)`).finally(() => client.end());
   }
 
+  /** Lets go of the cluster and leaves it running. */
+  async leave(): Promise<void> {
+    const use = this.#use;
+    this.#use = undefined;
+    await use?.end().catch(() => undefined);
+  }
+
   /** Stops the cluster unless another server still uses it. */
   async stop(): Promise<void> {
     await inLock(`cluster:${this.#data}`, async () => {
@@ -113,7 +118,7 @@ export class Cluster {
 
   /** Whether nobody else holds the lock of use, asked on a new connection: the old one may have died meanwhile. */
   async #isLastUser(): Promise<boolean> {
-    await this.#use?.end().catch(() => undefined);
+    await this.leave();
     try {
       const client = await this.connect(SUPERUSER, 'postgres');
       const { rows } = await client.query<{ alone: boolean }>('select pg_try_advisory_lock($1) as alone', [
@@ -190,7 +195,14 @@ export class Cluster {
       const { rowCount } = await client.query('select 1 from pg_roles where rolname = $1', [role]);
       if (!rowCount) await client.query(`create role ${role} login password '${this.#passwords[role]}'`);
     }
+    client.once('end', () => this.#use === client && this.#rejoin());
     this.#use = client;
+  }
+
+  /** After an outage: joins again as soon as the cluster is back. */
+  #rejoin(): void {
+    const again = (): Promise<void> => (this.#use ? this.#join() : Promise.resolve());
+    setTimeout(() => void again().catch(() => this.#rejoin()), REJOIN_MS).unref();
   }
 }
 
@@ -198,32 +210,3 @@ const pause = (ms: number): Promise<void> => new Promise((resolve) => setTimeout
 
 const makePasswords = (): string =>
   JSON.stringify(Object.fromEntries([SUPERUSER, OWNER_ROLE, APP_ROLE].map((role) => [role, randomSecret()])));
-
-function majorOfCluster(folder: string | undefined): number | undefined {
-  const file = path.join(folder ?? '', 'PG_VERSION');
-  return folder && fs.existsSync(file) ? Number(fs.readFileSync(file, 'utf8')) : undefined;
-}
-
-function readPlace(data: string): Place | undefined {
-  const file = path.join(data, 'cluster.json');
-  return fs.existsSync(file) ? (JSON.parse(fs.readFileSync(file, 'utf8')) as Place) : undefined;
-}
-
-/** Inside the data folder; or, where the cluster's user can't enter that, in a folder of that user's own. */
-function choosePlace(data: string, user: SystemUser | undefined): string {
-  if (!user || runAs(user, '/usr/bin/test', ['-x', data]).status === 0) return path.join(data, 'pg');
-  const parent = path.join(user.home, 'spinward');
-  fs.mkdirSync(parent, { recursive: true, mode: 0o711 });
-  return path.join(parent, randomUUID());
-}
-
-/** The port of the server that runs in the folder, by its pid file; undefined when that process isn't its server. */
-function runningServer(folder: string): number | undefined {
-  const file = path.join(folder, 'postmaster.pid');
-  if (!fs.existsSync(file)) return undefined;
-  const [pid = '', , , port = ''] = fs.readFileSync(file, 'utf8').split('\n');
-  const command = `/proc/${pid.trim()}/cmdline`;
-  if (!fs.existsSync(command)) return undefined;
-  const words = fs.readFileSync(command, 'utf8').split('\0');
-  return /postgres$/.test(words[0] ?? '') && words.includes(folder) ? Number(port) : undefined;
-}

@@ -22,6 +22,7 @@ interface Step {
 function installPrograms(browser: boolean): void {
   serverPrograms();
   if (!programPath('pdftotext')) aptInstall(['poppler-utils'], 'The memo tests read PDFs with poppler-utils');
+  if (browser && !programPath('curl')) aptInstall(['curl'], 'A test uploads with curl');
   if (browser && !chromiumPath())
     aptInstall(['chromium', 'fonts-liberation'], 'The browser tests drive Chromium');
 }

@@ -108,6 +108,22 @@ describe('a private cluster', () => {
   });
 });
 
+test('an outage does not make a user forgotten', async () => {
+  const data = newData();
+  const [first, second] = await Promise.all([open(data), open(data)]);
+  first.interrupt();
+  await first.resume();
+  const users = async (): Promise<unknown> => {
+    const client = await first.connect(SUPERUSER, 'postgres');
+    const counted = `select count(*)::int as users from pg_locks where locktype = 'advisory' and granted`;
+    const { rows } = await client.query(counted).finally(() => client.end());
+    return rows;
+  };
+  await vi.waitFor(async () => expect(await users()).toEqual([{ users: 2 }]), { timeout: 10_000 });
+  await first.stop();
+  expect(await answers(second)).toEqual([{ one: 1 }]);
+});
+
 describe('a killed run', () => {
   test('that left the server running is joined', async () => {
     const data = newData();
