@@ -1,3 +1,4 @@
+import type { ColumnChoice } from '#core/csv/columns.ts';
 import { COLUMN_FIELDS, recognise, type ColumnField } from '#core/csv/headings.ts';
 import { MAX_COLUMNS, MAX_ROWS } from '#core/csv/limits.ts';
 import { listFields, listOf } from './list.ts';
@@ -78,10 +79,12 @@ const Field = z.string().transform((text, ctx): ColumnField => {
 const ByPlace = z
   .array(z.object({ index: z.int().min(0), field: Field }))
   .max(MAX_COLUMNS)
-  .transform((choices) => choices.map(({ index, field }) => ({ column: index, field })));
+  .transform((choices): ColumnChoice[] => choices.map(({ index, field }) => ({ column: index, field })));
 const ByHeading = z
   .record(z.string(), Field)
-  .transform((choices) => Object.entries(choices).map(([column, field]) => ({ column, field })));
+  .transform((choices): ColumnChoice[] =>
+    Object.entries(choices).map(([column, field]) => ({ column, field })),
+  );
 
 function fromJson(text: string, ctx: z.core.$RefinementCtx): unknown {
   try {
