@@ -3,9 +3,9 @@ import { type SectionFrame, type SectionKey, type StudyFrame, type ViewerFrame }
 import { findFrame } from '#db/queries/frame.ts';
 import { notFound } from '#server/errors.ts';
 import { requireMember, requireUser } from '#server/member.ts';
+import { rankingFact, type Fact } from './ranking-fact.ts';
 
 type Row = NonNullable<Awaited<ReturnType<typeof findFrame>>>;
-type Fact = Pick<SectionFrame, 'fact' | 'outstanding'>;
 
 /** "Rowan M" of "Rowan M (invented medium two-stage, boosters optional)": what stands in brackets is a remark. */
 const shortName = (name: string): string => name.replace(/\s*\(.*\)\s*$/, '') || 'vehicle chosen';
@@ -24,14 +24,7 @@ function criteriaFact({ criteria, weighted }: Row): Fact {
   return { fact: `${criteria}, weights ${weighted ? 'set' : 'not set'}`, outstanding: !weighted };
 }
 
-function rankingFact({ sites, criteria, gaps }: Row): Fact {
-  if (sites === 0 || criteria === 0) return { fact: 'nothing to rank', outstanding: true };
-  return gaps > 0
-    ? { fact: `${formatCount(gaps, 'site')} without a figure`, outstanding: true }
-    : { fact: `${formatCount(sites, 'site')} weighed`, outstanding: false };
-}
-
-const factsOf = (row: Row): Record<SectionKey, Fact> => ({
+const factsOf = (row: Row, ranking: Fact): Record<SectionKey, Fact> => ({
   requirement: requirementFact(row),
   sites: {
     fact: row.sites === 0 ? 'none yet' : formatCount(row.sites, 'candidate'),
@@ -42,7 +35,7 @@ const factsOf = (row: Row): Record<SectionKey, Fact> => ({
     outstanding: row.sites * row.orbits === 0,
   },
   criteria: criteriaFact(row),
-  ranking: rankingFact(row),
+  ranking,
   memo: { fact: 'draft', outstanding: false },
 });
 
@@ -72,9 +65,10 @@ export function viewerOf(locals: App.Locals): ViewerFrame {
 
 /** What a study's page shows round its sheet: title block and sections, each with its line of fact. */
 export async function loadFrame(locals: App.Locals): Promise<StudyFrame> {
-  const { studyId, role } = requireMember(locals);
+  const { studyId, userId, role } = requireMember(locals);
   const row = await findFrame(locals.db, { studyId });
   if (!row) throw notFound();
+  const ranking = await rankingFact(locals.db, { ...row, studyId, userId });
   return {
     study: {
       id: row.id,
@@ -87,6 +81,6 @@ export async function loadFrame(locals: App.Locals): Promise<StudyFrame> {
       archived: row.archivedAt !== null,
     },
     viewer: viewerOf(locals),
-    sections: sectionsOf(studyId, factsOf(row)),
+    sections: sectionsOf(studyId, factsOf(row, ranking)),
   };
 }
