@@ -3,7 +3,7 @@ import { formatNumber } from '#contract/format.ts';
 import { arrowStep, handlesOf, moveHandle, type Handle } from './handles.ts';
 import type { MapView } from './map-view.ts';
 import { along, azimuthTo } from './pad-frame.ts';
-import { CHOSEN_RADIUS } from './sectors.ts';
+import { chosenRadius } from './sectors.ts';
 import type { MapSite, SectorDeg } from './types.ts';
 
 interface HandlesProps {
@@ -29,12 +29,13 @@ export function SectorHandles({ view, site, sectors, onMove, onSettle }: Handles
   useEffect(() => {
     const place = () => {
       const frame = view.frameOf(site);
+      const radius = chosenRadius(view.map.getContainer().clientWidth);
       const ends = [...(holder.current?.children ?? [])] as HTMLElement[];
       ends.forEach((element, index) => {
         const handle = handles[index];
         element.hidden = !frame || !handle;
         if (!frame || !handle) return;
-        const [x, y] = along(frame, handle.azimuthDeg, CHOSEN_RADIUS);
+        const [x, y] = along(frame, handle.azimuthDeg, radius);
         element.style.transform = `translate(${x}px, ${y}px)`;
         element.dataset['side'] = x < frame.x ? 'left' : 'right';
       });

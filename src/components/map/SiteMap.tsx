@@ -89,10 +89,18 @@ function DrawnMap(props: SiteMapProps) {
   const { holder, canvas, view, fault } = useMapView(props, scene);
   const chosen = sites.find(({ id }) => id === chosenId);
 
+  // Keys settle after a pause, by a callback of an earlier drawing: the newest draft is kept apart from it.
+  const newest = useRef<readonly SectorDeg[] | null>(null);
+  const move = (sectors: readonly SectorDeg[]) => {
+    newest.current = sectors;
+    setDraft(sectors);
+  };
   const settle = () => {
-    if (!draft || !chosen || !onSectors) return;
-    const clear = () => setDraft((now) => (now === draft ? null : now));
-    void onSectors(chosen.id, draft).then(clear, clear);
+    const settled = newest.current;
+    if (!settled || !chosen || !onSectors) return;
+    newest.current = null;
+    const clear = () => setDraft((now) => (now === settled ? null : now));
+    void onSectors(chosen.id, settled).then(clear, clear);
   };
   return (
     <div className="map-sheet">
@@ -106,7 +114,7 @@ function DrawnMap(props: SiteMapProps) {
               view={view}
               site={chosen}
               sectors={draft ?? chosen.permittedAzimuthsDeg}
-              onMove={onSectors && setDraft}
+              onMove={onSectors && move}
               onSettle={settle}
             />
           )}

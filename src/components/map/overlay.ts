@@ -4,7 +4,7 @@ import { drawChosenPad, drawPad } from './images.ts';
 import { drawNeatline, drawScale, FRAME, type Inner } from './neatline.ts';
 import { padFrame, type PadFrame } from './pad-frame.ts';
 import type { Palette } from './palette.ts';
-import { drawFlown, drawSectors, drawWords, sectorLooks } from './sectors.ts';
+import { chosenLooks, chosenRadius, drawFlown, drawSectors, drawWords, sectorLooks } from './sectors.ts';
 import type { MapScene, MapSite, Projection } from './types.ts';
 
 /** Beyond this many pads in view their sectors would only be a grey cloud; the chosen one's is drawn still. */
@@ -46,16 +46,21 @@ export function padsInView(
   });
 }
 
-function drawAllSectors(pen: CanvasRenderingContext2D, pads: readonly InView[], state: OverlayState): void {
+function drawAllSectors(
+  pen: CanvasRenderingContext2D,
+  pads: readonly InView[],
+  state: OverlayState,
+  radius: number,
+): void {
   const { chosenId } = state.scene;
   const others = pads.filter(({ site }) => site.id !== chosenId && site.permittedAzimuthsDeg.length > 0);
-  const looks = sectorLooks(state.palette, false);
+  const looks = sectorLooks(state.palette);
   if (others.length <= MOST_SECTORS)
     for (const { site, frame } of others) drawSectors(pen, frame, site.permittedAzimuthsDeg, looks);
   const chosen = pads.find(({ site }) => site.id === chosenId);
   if (!chosen) return;
   const sectors = state.scene.draft ?? chosen.site.permittedAzimuthsDeg;
-  drawSectors(pen, chosen.frame, sectors, sectorLooks(state.palette, true));
+  drawSectors(pen, chosen.frame, sectors, chosenLooks(state.palette, radius));
 }
 
 /** Pads about the poles, which tiles can't hold. */
@@ -101,15 +106,16 @@ export function drawOverlay(canvas: HTMLCanvasElement, map: Map, state: OverlayS
   const globe = state.projection === 'globe';
   const { layers, flownAzimuthDeg, chosenId } = state.scene;
   const pads = padsInView(map, state, inner, 160);
+  const radius = chosenRadius(inner.width);
   pen.save();
   pen.translate(inner.x, inner.y);
   pen.beginPath();
   pen.rect(0, 0, inner.width, inner.height);
   pen.clip();
-  if (layers.sectors) drawAllSectors(pen, pads, state);
+  if (layers.sectors) drawAllSectors(pen, pads, state, radius);
   const chosen = pads.find(({ site }) => site.id === chosenId);
   if (chosen && flownAzimuthDeg !== null && layers.track)
-    drawFlown(pen, chosen.frame, flownAzimuthDeg, state.palette);
+    drawFlown(pen, chosen.frame, { azimuthDeg: flownAzimuthDeg, radius, colour: state.palette.chosen });
   if (globe && layers.track) drawPolarTracks(pen, map, state);
   if (globe) drawPolarPads(pen, pads, state);
   pen.restore();

@@ -2,8 +2,11 @@ import { along, type PadFrame } from './pad-frame.ts';
 import type { Palette } from './palette.ts';
 import type { SectorDeg } from './types.ts';
 
-export const SECTOR_RADIUS = 64;
-export const CHOSEN_RADIUS = 150;
+const SECTOR_RADIUS = 64;
+const CHOSEN_RADIUS = 150;
+
+/** The chosen pad's radius: less where the map is narrow, so that both handles can be reached. */
+export const chosenRadius = (mapWidth: number): number => Math.min(CHOSEN_RADIUS, mapWidth * 0.3);
 
 const allRound = ([from, to]: SectorDeg): boolean => to - from === 360;
 
@@ -27,10 +30,19 @@ interface Looks {
   readonly edgeWidth: number;
 }
 
-export const sectorLooks = (p: Palette, chosen: boolean): Looks =>
-  chosen
-    ? { radius: CHOSEN_RADIUS, fill: p.chosenSector, edge: p.chosen, edgeWidth: 1.5 }
-    : { radius: SECTOR_RADIUS, fill: p.sector, edge: p.pad, edgeWidth: 1 };
+export const sectorLooks = (p: Palette): Looks => ({
+  radius: SECTOR_RADIUS,
+  fill: p.sector,
+  edge: p.pad,
+  edgeWidth: 1,
+});
+
+export const chosenLooks = (p: Palette, radius: number): Looks => ({
+  radius,
+  fill: p.chosenSector,
+  edge: p.chosen,
+  edgeWidth: 1.5,
+});
 
 /** A pad's permitted azimuths; a pad without sectors, open all round, has none drawn. */
 export function drawSectors(
@@ -72,13 +84,12 @@ export function drawWords(
 export function drawFlown(
   pen: CanvasRenderingContext2D,
   frame: PadFrame,
-  azimuthDeg: number,
-  p: Palette,
+  { azimuthDeg, radius, colour }: { azimuthDeg: number; radius: number; colour: string },
 ): void {
-  pen.strokeStyle = p.chosen;
+  pen.strokeStyle = colour;
   pen.lineWidth = 3;
   pen.beginPath();
   pen.moveTo(...along(frame, azimuthDeg, 12));
-  pen.lineTo(...along(frame, azimuthDeg, CHOSEN_RADIUS));
+  pen.lineTo(...along(frame, azimuthDeg, radius));
   pen.stroke();
 }

@@ -67,7 +67,7 @@ export function useEditing(store: SiteStore): Editing {
     edit,
     conflict,
     begin: (site, key) => setEdit({ siteId: site.id, key, text: cellText(site, key), message: null }),
-    type: (text) => setEdit((now) => now && { ...now, text }),
+    type: (text) => setEdit((now) => now && { ...now, text, message: null, meant: undefined }),
     cancel: () => setEdit(null),
     commit: async (site, text) => {
       if (!edit) return;

@@ -1,4 +1,4 @@
-import { useCallback, useMemo } from 'react';
+import { useCallback, useMemo, useRef } from 'react';
 import useSWR from 'swr';
 import { apiFetch, send, type ApiError } from '#components/live/api.ts';
 import { announceKept, announceSaved, announceSaving, type Saved } from '#components/live/saved.ts';
@@ -58,6 +58,29 @@ async function saved<T extends Saved>(write: Promise<T>): Promise<T> {
   }
 }
 
+/**
+ * Writes to one site one after the other, each based on what the one before made of it: two quick edits by the same
+ * hand are no conflict. A change by someone else in between still is one.
+ */
+function useTurns() {
+  const state = useRef({ last: new Map<string, Promise<unknown>>(), after: new Map<string, number>() });
+  return useCallback((site: Site, write: (version: number) => Promise<Site>): Promise<Site> => {
+    const { last, after } = state.current;
+    const turn = async (): Promise<Site> => {
+      await last.get(site.id)?.catch(() => undefined);
+      let { version } = site;
+      for (let next = after.get(`${site.id}/${version}`); next; next = after.get(`${site.id}/${version}`))
+        version = next;
+      const made = await write(version);
+      if (made.version !== version) after.set(`${site.id}/${version}`, made.version);
+      return made;
+    };
+    const taken = turn();
+    last.set(site.id, taken);
+    return taken;
+  }, []);
+}
+
 /** A study's sites, kept fresh as others change them, and the ways to change them. */
 export function useSites(studyId: string, initial: SiteList): SiteStore {
   const address = `/api/v1/studies/${studyId}/sites`;
@@ -84,6 +107,7 @@ export function useSites(studyId: string, initial: SiteList): SiteStore {
     ),
   );
 
+  const inTurn = useTurns();
   const put = useCallback(
     (edit: (items: readonly Site[]) => Site[]) =>
       mutate(
@@ -111,25 +135,26 @@ export function useSites(studyId: string, initial: SiteList): SiteStore {
       reload: () => void mutate(),
       show,
       change: async (site, patch) => {
-        const body = { ...patch, version: site.version };
-        const answer = await saved(send<SavedSite & Saved>('PATCH', `${address}/${site.id}`, body));
+        const answer = await inTurn(site, (version) =>
+          saved(send<SavedSite>('PATCH', `${address}/${site.id}`, { ...patch, version })),
+        );
         show(answer);
         return answer;
       },
       add: async (draft) => {
-        const answer = await saved(send<SavedSite & Saved>('POST', address, draft));
+        const answer = await saved(send<SavedSite>('POST', address, draft));
         await merge([answer]);
         return answer;
       },
       remove: async (sites) => {
         const body = { sites: sites.map(({ id, version }) => ({ id, version })) };
-        const { siteIds } = await saved(send<SitesRemoved & Saved>('POST', `${address}/remove`, body));
+        const { siteIds } = await saved(send<SitesRemoved>('POST', `${address}/remove`, body));
         await put((items) => items.filter(({ id }) => !siteIds.includes(id)));
       },
       restore: async (siteIds) => {
-        const { items } = await saved(send<SitesRestored & Saved>('POST', `${address}/restore`, { siteIds }));
+        const { items } = await saved(send<SitesRestored>('POST', `${address}/restore`, { siteIds }));
         await merge(items);
       },
     };
-  }, [data, error, mutate, put, address]);
+  }, [data, error, mutate, put, inTurn, address]);
 }
