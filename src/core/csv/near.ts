@@ -1,3 +1,5 @@
+import { meridianOf } from '../flight/earth.ts';
+import { fromDegrees, metres } from '../units.ts';
 import { NEAR_KM } from './limits.ts';
 
 export interface Position {
@@ -5,9 +7,7 @@ export interface Position {
   readonly longitudeDeg: number;
 }
 
-/** WGS 84, kilometres and a pure number (NGA.STND.0036). */
-const A_KM = 6378.137;
-const E2 = 6.69437999014e-3;
+/** Cubes each way: the Earth's width in kilometres with room. */
 const SPAN = 16_384;
 
 /**
@@ -49,9 +49,8 @@ function keyOf(x: number, y: number, z: number): number {
 }
 
 function toCartesianKm({ latitudeDeg, longitudeDeg }: Position): readonly [number, number, number] {
-  const phi = (latitudeDeg * Math.PI) / 180;
-  const lambda = (longitudeDeg * Math.PI) / 180;
-  const n = A_KM / Math.sqrt(1 - E2 * Math.sin(phi) ** 2);
-  const p = n * Math.cos(phi);
-  return [p * Math.cos(lambda), p * Math.sin(lambda), n * (1 - E2) * Math.sin(phi)];
+  const { axisDistance, z } = meridianOf(fromDegrees(latitudeDeg), metres(0));
+  const longitude = fromDegrees(longitudeDeg);
+  const p = axisDistance / 1000;
+  return [p * Math.cos(longitude), p * Math.sin(longitude), z / 1000];
 }

@@ -40,7 +40,7 @@ export const DELIMITER_NAMES = { ',': 'Comma', ';': 'Semicolon', '\t': 'Tab' } a
 export function unitOf({ field, unit, kind }: Column): string {
   if (field === 'unused') return '';
   if (field === 'elevationM') return unit === 'ft' ? 'ft → m' : 'm';
-  if (field === 'criterion') return kind === 'text' ? 'text' : unit || 'number';
+  if (field === 'criterion') return kind === 'text' ? 'text' : unit || (kind ?? '');
   return field === 'name' || field === 'code' || field === 'notes' ? 'text' : '°';
 }
 
