@@ -1,4 +1,4 @@
-import { useEffect, useImperativeHandle, useRef, type Ref } from 'react';
+import { useEffect, useImperativeHandle, useMemo, useRef, type Ref } from 'react';
 import { useForm, useWatch, type Path } from 'react-hook-form';
 import { ApiError } from '#components/live/api.ts';
 import { Button } from '#components/ui/Button.tsx';
@@ -57,13 +57,17 @@ function looksExchanged({ latitudeDeg, longitudeDeg }: Typed): boolean {
 }
 
 /** A warning, not a refusal: another site within a kilometre. */
-function nearWords(sites: readonly Site[], { latitudeDeg, longitudeDeg }: Typed): string | undefined {
+function nearWords(index: NearIndex<Site>, { latitudeDeg, longitudeDeg }: Typed): string | undefined {
   const [latitude, longitude] = [latitudeOf(latitudeDeg), longitudeOf(longitudeDeg)];
   if (latitude.kind !== 'read' || longitude.kind !== 'read') return undefined;
-  const index = new NearIndex<Site>();
-  for (const site of sites) index.add(site);
   const near = index.find({ latitudeDeg: latitude.value, longitudeDeg: longitude.value }, () => true);
   return near && `${formatNumber(near.distanceKm, 2)} km from ${near.place.name}. It can still be added.`;
+}
+
+function indexOf(sites: readonly Site[]): NearIndex<Site> {
+  const index = new NearIndex<Site>();
+  for (const site of sites) index.add(site);
+  return index;
 }
 
 function draftOf(typed: Typed): SiteDraft | undefined {
@@ -130,7 +134,8 @@ export function AddSite({ sites, locked, placing, onPlacing, onAdd, ref }: AddSi
     validate: (text: string) => refusalOf(read(text)),
   });
   const { errors, isSubmitting } = formState;
-  const near = nearWords(sites, typed);
+  const index = useMemo(() => indexOf(sites), [sites]);
+  const near = nearWords(index, typed);
 
   return (
     <form className="add-site" onSubmit={(event) => void submit(event)} noValidate>

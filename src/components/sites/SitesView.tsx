@@ -147,6 +147,7 @@ export function SitesView({ studyId, list, inputs: initialInputs, address, locke
   const filter = useDeferredValue(find ?? '');
   const sort = useMemo(() => sortOf(sortParam), [sortParam]);
   const shown = useMemo(() => shownSites(sites, filter, sort), [sites, filter, sort]);
+  const tickedSites = useMemo(() => shown.filter(({ id }) => ticked.has(id)), [shown, ticked]);
   const chosen = sites.find(({ code }) => code === siteCode);
   const flights = useFlights({ sites, inputs, orbitCode, chosen, others: layers.otherTracks });
   const finding = useMemo(
@@ -238,9 +239,9 @@ export function SitesView({ studyId, list, inputs: initialInputs, address, locke
         onOrbit={setOrbit}
         layers={layers}
         onLayers={setLayers}
-        ticked={ticked.size}
+        ticked={tickedSites.length}
         locked={locked}
-        onRemove={() => setRemoving(sites.filter(({ id }) => ticked.has(id)))}
+        onRemove={() => setRemoving(tickedSites)}
       />
       {(fault ?? store.error) && (
         <Notice

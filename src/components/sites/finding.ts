@@ -1,8 +1,9 @@
 import { nameOf } from '#components/flight/words.ts';
 import type { OrbitResult, SiteResult } from '#contract/evaluate.ts';
 import { formatCount, formatNumber, listInWords } from '#contract/format.ts';
-import type { Site } from '#contract/site.ts';
-import type { InputOrbit } from '#contract/study-inputs.ts';
+import type { Site, SiteList } from '#contract/site.ts';
+import type { InputOrbit, StudyInputs } from '#contract/study-inputs.ts';
+import { flySites } from './flights.ts';
 
 /** The screen's result. `leader` is the one site that does what no other does, set in signal where it stands. */
 export interface SitesFinding {
@@ -100,4 +101,11 @@ export function sitesFinding(
   if (!orbits || flown.length < total) return { before: count, leader: null, after: '', why: '' };
   const direct = flown.filter(({ result }) => result.orbits.every(isDirect)).map(({ site }) => site);
   return { before: `${count} `, ...directClause(direct, total), why: turnsClause(flown, orbits) };
+}
+
+/** The finding in plain text as the page is first drawn: its title. */
+export function firstFinding({ items, total }: SiteList, inputs: StudyInputs | null): string {
+  const results =
+    inputs && inputs.orbits.length > 0 && items.length > 0 ? flySites(inputs, items) : new Map<string, SiteResult>();
+  return textOf(sitesFinding(items, total, inputs?.orbits ?? null, results));
 }
