@@ -131,7 +131,6 @@ export interface MemoContributions {
   description: string;
   bars: { name: string; value: string; total: number; leads: boolean; parts: MemoPart[] }[];
   key: { letter: string; pattern: number; name: string; weight: string }[];
-  notes: string[];
 }
 
 /** A map in points of its own frame, drawn as vectors. */

@@ -1,28 +1,13 @@
-import { Path, StyleSheet, Svg, Text, View } from '@react-pdf/renderer';
-import type { MemoBlock, MemoCaution, MemoCode, MemoFormulas, MemoText } from '#contract/memo.ts';
-import { cautionBand } from './bars.ts';
+import { StyleSheet, Text, View } from '@react-pdf/renderer';
+import type { MemoBlock, MemoCode, MemoFormulas, MemoText } from '#contract/memo.ts';
+import { Caution } from './caution.tsx';
 import { Contributions } from './contributions.tsx';
 import { MapFigure } from './map.tsx';
 import { Table } from './table.tsx';
-import { INK, MONO, RULE, TYPE } from './theme.ts';
-
-const BAND = 10;
-/** The band is drawn taller than any caution and cut to its height. */
-const BAND_HEIGHT = 160;
+import { INK, MONO, TYPE } from './theme.ts';
 
 const s = StyleSheet.create({
   paragraph: { ...TYPE.body, marginBottom: 6 },
-  caution: {
-    flexDirection: 'row',
-    borderWidth: RULE.light,
-    borderColor: INK.ink,
-    marginTop: 8,
-    marginBottom: 8,
-    paddingLeft: BAND,
-    overflow: 'hidden',
-  },
-  band: { position: 'absolute', left: 0, top: 0, bottom: 0, width: BAND, overflow: 'hidden' },
-  cautionText: { ...TYPE.note, color: INK.ink2, paddingHorizontal: 10, paddingVertical: 6 },
   formula: { flexDirection: 'row', gap: 10, marginBottom: 4 },
   formulaText: { ...TYPE.table, width: '46%' },
   meaning: { ...TYPE.table, color: INK.ink2, width: '54%' },
@@ -43,22 +28,6 @@ export function Runs({ text }: { text: MemoText }) {
         ),
       )}
     </>
-  );
-}
-
-function Caution({ caution }: { caution: MemoCaution }) {
-  return (
-    <View style={s.caution} wrap={false}>
-      <View style={s.band}>
-        <Svg viewBox={`0 0 ${BAND} ${BAND_HEIGHT}`} style={{ width: BAND, height: BAND_HEIGHT }}>
-          <Path {...cautionBand(BAND, BAND_HEIGHT)} fill="none" />
-        </Svg>
-      </View>
-      <Text style={s.cautionText}>
-        <Text style={{ fontWeight: 600, color: INK.ink }}>{caution.strong}</Text>
-        {` ${caution.text}`}
-      </Text>
-    </View>
   );
 }
 
@@ -100,7 +69,7 @@ export function Block({ block, width }: { block: MemoBlock; width: number }) {
     case 'code':
       return <Code code={block} />;
     case 'table':
-      return <Table table={block} />;
+      return <Table table={block} width={width} />;
     case 'contributions':
       return <Contributions figure={block} />;
     case 'map':

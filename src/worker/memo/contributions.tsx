@@ -5,13 +5,15 @@ import { INK, MONO, RULE, TYPE } from './theme.ts';
 
 const NAME = 130;
 const BAR = 296;
-const HEIGHT = 10;
-const ROW = 15;
+const HEIGHT = 9;
+const ROW = 13;
+/** Up to so many bars stay on one page. */
+const WHOLE = 24;
 const TICKS = [0, 0.25, 0.5, 0.75, 1];
 
 const s = StyleSheet.create({
-  figure: { marginTop: 10, marginBottom: 10 },
-  caption: { ...TYPE.caption, marginBottom: 2 },
+  figure: { marginBottom: 8 },
+  caption: { ...TYPE.caption, marginTop: 5, marginBottom: 2 },
   row: { flexDirection: 'row', alignItems: 'center', minHeight: ROW },
   name: { ...TYPE.table, width: NAME, paddingRight: 6 },
   value: { ...TYPE.table, fontFamily: MONO, paddingLeft: 6, width: 60 },
@@ -122,21 +124,14 @@ export function Contributions({ figure }: { figure: MemoContributions }) {
   const first = figure.bars[0];
   const leader = figure.bars.find((bar) => bar.leads)?.total ?? first?.total ?? 0;
   return (
-    <View style={s.figure}>
-      <Text style={s.caption} minPresenceAhead={60}>{`Figure ${figure.number}. ${figure.caption}`}</Text>
-      <View>
-        {first && <Letters bar={first} />}
-        {figure.bars.map((bar, at) => (
-          <BarRow key={at} bar={bar} leader={leader} />
-        ))}
-        <Ticks />
-      </View>
-      <Key figure={figure} />
-      {figure.notes.map((note, at) => (
-        <Text key={at} style={s.note}>
-          {note}
-        </Text>
+    <View style={s.figure} wrap={figure.bars.length > WHOLE}>
+      <Text style={s.caption}>{`Figure ${figure.number}. ${figure.caption}`}</Text>
+      {first && <Letters bar={first} />}
+      {figure.bars.map((bar, at) => (
+        <BarRow key={at} bar={bar} leader={leader} />
       ))}
+      <Ticks />
+      <Key figure={figure} />
     </View>
   );
 }

@@ -1,9 +1,11 @@
+import { Fragment } from 'react';
 import { Document, Page, StyleSheet, Text, View } from '@react-pdf/renderer';
-import type { MemoHeadline, MemoModel, MemoSection } from '#contract/memo.ts';
+import type { MemoHeadline, MemoModel } from '#contract/memo.ts';
 import { Block, Runs } from './blocks.tsx';
-import { Foot, Head, pageStyle, TITLE_BLOCK, TitleBlock } from './frame.tsx';
-import { figureFont } from './table.tsx';
-import { INK, MARGIN, PAPER, TYPE } from './theme.ts';
+import { isFigure } from './columns.ts';
+import { FIRST_FOOT, FirstFoot, Foot, Head, pageStyle } from './frame.tsx';
+import { pageRuns, type Item } from './page-runs.ts';
+import { INK, MARGIN, MONO, PAPER, SANS, TYPE } from './theme.ts';
 
 const s = StyleSheet.create({
   finding: { ...TYPE.title, marginBottom: 4 },
@@ -26,7 +28,7 @@ function Headline({ items }: { items: MemoHeadline[] }) {
             <Text
               style={[
                 s.figure,
-                { fontFamily: figureFont(item.figure) },
+                { fontFamily: isFigure(item.figure) ? MONO : SANS },
                 item.leads ? { color: INK.signal } : {},
               ]}
             >
@@ -59,19 +61,17 @@ function Opening({ model }: { model: MemoModel }) {
   );
 }
 
-function Section({ section, width }: { section: MemoSection; width: number }) {
-  return (
-    <View {...(section.heading === null ? {} : { bookmark: section.heading })}>
-      {section.heading !== null && (
-        <Text style={s.heading} minPresenceAhead={110}>
-          {section.heading}
+function Blocks({ items, width }: { items: readonly Item[]; width: number }) {
+  return items.map(({ heading, block }, at) => (
+    <Fragment key={at}>
+      {heading !== null && (
+        <Text style={s.heading} minPresenceAhead={110} bookmark={heading}>
+          {heading}
         </Text>
       )}
-      {section.blocks.map((block, at) => (
-        <Block key={at} block={block} width={width} />
-      ))}
-    </View>
-  );
+      <Block block={block} width={width} />
+    </Fragment>
+  ));
 }
 
 /** The whole memo. Dates are the model's UTC day, so that a day's memo of the same inputs is the same file. */
@@ -81,6 +81,9 @@ export function MemoDocument({ model }: { model: MemoModel }) {
   const size: [number, number] = [paper.width, paper.height];
   const width = paper.width - MARGIN.left - MARGIN.right;
   const [first, ...rest] = model.sections;
+  // The first page's caution is pinned over the title block, so that it never stands on a page of its own.
+  const caution = first?.blocks.find((block) => block.kind === 'caution');
+  const opening = first?.blocks.filter((block) => block !== caution) ?? [];
   return (
     <Document
       title={model.documentTitle}
@@ -92,22 +95,20 @@ export function MemoDocument({ model }: { model: MemoModel }) {
       creationDate={day}
       modificationDate={day}
     >
-      <Page size={size} style={pageStyle(TITLE_BLOCK + 10)}>
-        <TitleBlock block={model.titleBlock} />
+      <Page size={size} style={pageStyle(FIRST_FOOT + 4)}>
+        <FirstFoot block={model.titleBlock} caution={caution} paperHeight={paper.height} />
         <Head status={model.status} />
-        <Foot text={model.foot} />
+        <Foot text={model.foot} paperHeight={paper.height} />
         <Opening model={model} />
-        {first && <Section section={first} width={width} />}
+        <Blocks items={opening.map((block) => ({ heading: null, block }))} width={width} />
       </Page>
-      {rest.length > 0 && (
-        <Page size={size} style={pageStyle(8)}>
+      {pageRuns(rest).map((items, at) => (
+        <Page key={at} size={size} style={pageStyle(8)}>
           <Head status={model.status} />
-          <Foot text={model.foot} />
-          {rest.map((section) => (
-            <Section key={section.id} section={section} width={width} />
-          ))}
+          <Foot text={model.foot} paperHeight={paper.height} />
+          <Blocks items={items} width={width} />
         </Page>
-      )}
+      ))}
     </Document>
   );
 }

@@ -1,14 +1,17 @@
+import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import { Font } from '@react-pdf/renderer';
 import { MONO, SANS } from './theme.ts';
+import { unpackWoff } from './woff.ts';
 
 // From this module, not from the working directory: the server may be started anywhere. The complete files, because
 // a PDF has no unicode-range to pick among subsets.
 const require = createRequire(import.meta.url);
-const plex = (family: 'sans' | 'mono', style: string): string =>
-  require.resolve(
-    `@ibm/plex-${family}/fonts/complete/woff/IBMPlex${family === 'sans' ? 'Sans' : 'Mono'}-${style}.woff`,
-  );
+const plex = (family: 'sans' | 'mono', style: string): string => {
+  const name = `IBMPlex${family === 'sans' ? 'Sans' : 'Mono'}-${style}.woff`;
+  const woff = readFileSync(require.resolve(`@ibm/plex-${family}/fonts/complete/woff/${name}`));
+  return `data:font/ttf;base64,${unpackWoff(woff).toString('base64')}`;
+};
 
 /** Longest run of letters that is never parted; a longer one may break anywhere, without a hyphen of ours. */
 const LONGEST_WORD = 16;

@@ -1,10 +1,14 @@
 import { Path, StyleSheet, Svg, Text, View } from '@react-pdf/renderer';
-import type { MemoTitleBlock } from '#contract/memo.ts';
+import type { MemoCaution, MemoTitleBlock } from '#contract/memo.ts';
+import { Caution } from './caution.tsx';
 import { INK, MARGIN, MM, RULE, SANS, TYPE } from './theme.ts';
 
 /** The foot line stands in the foot margin, under the title block of the first page. */
-const FOOT_LINE = 7 * MM;
-export const TITLE_BLOCK = 12 * MM;
+const FOOT_LINE = 5 * MM;
+const FOOT_HEIGHT = 12;
+const TITLE_BLOCK = 13 * MM;
+/** Title block and the caution over it. */
+export const FIRST_FOOT = TITLE_BLOCK + 32;
 
 const s = StyleSheet.create({
   head: {
@@ -23,26 +27,31 @@ const s = StyleSheet.create({
     position: 'absolute',
     left: MARGIN.left,
     right: MARGIN.right,
-    bottom: FOOT_LINE,
+    height: FOOT_HEIGHT,
     flexDirection: 'row',
     justifyContent: 'space-between',
     gap: 12,
   },
-  footText: { ...TYPE.dense, color: INK.ink3, flex: 1 },
-  page: { ...TYPE.dense, color: INK.ink3, width: 70, textAlign: 'right' },
+  footText: { ...TYPE.dense, color: INK.ink3, flex: 1, maxLines: 1, textOverflow: 'ellipsis' },
+  // Without a leading: a text that is made anew on each page loses its height with one.
+  page: { fontSize: TYPE.dense.fontSize, color: INK.ink3, width: 70, textAlign: 'right' },
   block: {
     position: 'absolute',
     left: MARGIN.left,
     right: MARGIN.right,
-    bottom: MARGIN.foot,
+    height: FIRST_FOOT,
+    justifyContent: 'flex-end',
+  },
+  cells: {
     flexDirection: 'row',
+    height: TITLE_BLOCK,
     borderWidth: RULE.light,
     borderColor: INK.ink,
-    minHeight: TITLE_BLOCK,
+    overflow: 'hidden',
   },
   cell: { paddingHorizontal: 6, paddingVertical: 4, borderColor: INK.ink },
   key: { fontSize: 7.5, lineHeight: 10 / 7.5, color: INK.ink3 },
-  value: { fontSize: 8.5, lineHeight: 11 / 8.5, fontWeight: 600, maxLines: 3, textOverflow: 'ellipsis' },
+  value: { fontSize: 8.5, lineHeight: 11 / 8.5, fontWeight: 600, maxLines: 2, textOverflow: 'ellipsis' },
 });
 
 function Mark() {
@@ -74,17 +83,16 @@ export function Head({ status }: { status: string }) {
 }
 
 /** Foot of every page: what the figures rest on, and the page of how many. */
-export function Foot({ text }: { text: string }) {
+export function Foot({ text, paperHeight }: { text: string; paperHeight: number }) {
   return (
-    <View fixed style={s.foot}>
+    <View fixed style={[s.foot, { top: paperHeight - FOOT_LINE - FOOT_HEIGHT }]}>
       <Text style={s.footText}>{text}</Text>
       <Text style={s.page} render={({ pageNumber, totalPages }) => `${pageNumber} of ${totalPages}`} />
     </View>
   );
 }
 
-/** The title block at the foot of the first page, as on a drawing sheet. */
-export function TitleBlock({ block }: { block: MemoTitleBlock }) {
+function TitleCells({ block }: { block: MemoTitleBlock }) {
   const cells: [string, string, number][] = [
     ['Study', block.study, 3.2],
     ['Memo', block.memo, 1.1],
@@ -93,7 +101,7 @@ export function TitleBlock({ block }: { block: MemoTitleBlock }) {
     ['Prepared', block.prepared, 2.2],
   ];
   return (
-    <View style={s.block}>
+    <View style={s.cells}>
       {cells.map(([key, value, share], index) => (
         <View key={key} style={[s.cell, { flex: share, borderLeftWidth: index === 0 ? 0 : RULE.light }]}>
           <Text style={s.key}>{key}</Text>
@@ -101,6 +109,33 @@ export function TitleBlock({ block }: { block: MemoTitleBlock }) {
         </View>
       ))}
     </View>
+  );
+}
+
+interface FirstFootProps {
+  block: MemoTitleBlock;
+  caution: MemoCaution | undefined;
+  paperHeight: number;
+}
+
+/**
+ * The foot of the first page, as on a drawing sheet: its caution and the title block. It is fixed and drawn on the
+ * first page alone: a block below the text area that isn't fixed would move on from page to page for ever.
+ */
+export function FirstFoot({ block, caution, paperHeight }: FirstFootProps) {
+  return (
+    <View
+      fixed
+      style={[s.block, { top: paperHeight - MARGIN.foot - FIRST_FOOT }]}
+      render={({ subPageNumber }) =>
+        subPageNumber === 1 ? (
+          <>
+            {caution && <Caution caution={caution} />}
+            <TitleCells block={block} />
+          </>
+        ) : null
+      }
+    />
   );
 }
 

@@ -1,6 +1,7 @@
 import { StyleSheet, Text, View } from '@react-pdf/renderer';
-import type { MemoCell, MemoColumn, MemoRow, MemoTable } from '#contract/memo.ts';
-import { INK, MONO, ROW, RULE, SANS, TYPE } from './theme.ts';
+import type { MemoCell, MemoRow, MemoTable } from '#contract/memo.ts';
+import { padded, runsOf, snapped, type Column, type Run } from './columns.ts';
+import { INK, MONO, ROW, RULE, TYPE } from './theme.ts';
 
 /** More columns than this are set a size smaller. */
 const DENSE_FROM = 10;
@@ -8,8 +9,8 @@ const DENSE_FROM = 10;
 const START = 72;
 
 const s = StyleSheet.create({
-  table: { marginTop: 10, marginBottom: 10 },
-  caption: { ...TYPE.caption, marginBottom: 4 },
+  after: { height: 4 },
+  caption: { ...TYPE.caption, marginTop: 10, marginBottom: 4 },
   head: {
     flexDirection: 'row',
     alignItems: 'flex-end',
@@ -19,74 +20,29 @@ const s = StyleSheet.create({
     paddingVertical: 3,
   },
   row: { flexDirection: 'row', alignItems: 'center', minHeight: ROW, borderColor: INK.rule },
-  cell: { paddingHorizontal: 3 },
-  unit: { color: INK.ink3 },
-  end: { borderTopWidth: RULE.heavy, borderColor: INK.ink },
+  edge: { position: 'absolute', left: 0, top: 0, bottom: 0, width: 2.4, backgroundColor: INK.signal },
+  unit: { ...TYPE.dense, color: INK.ink3 },
+  end: { borderBottomWidth: RULE.heavy, borderColor: INK.ink },
+  words: { paddingLeft: 3, paddingVertical: 2 },
   note: { ...TYPE.note, color: INK.ink2, marginTop: 3 },
 });
 
-/** Characters that the figure font has; anything else is set in the text font. */
-const FIGURE = /^[ -~−–°±×·]*$/;
-export const figureFont = (text: string): string => (FIGURE.test(text) ? MONO : SANS);
+type Type = { fontSize: number; lineHeight: number };
 
-const width = (columns: readonly MemoColumn[], from: number, span: number): string => {
-  const all = columns.reduce((sum, column) => sum + column.share, 0);
-  const taken = columns.slice(from, from + span).reduce((sum, column) => sum + column.share, 0);
-  return `${(100 * taken) / all}%`;
-};
+/** Room at the left of a column; words that follow figures are clear of them by the figures' own padding. */
+const GAP = 3;
 
-function Heading({ table, type }: { table: MemoTable; type: typeof TYPE.table | typeof TYPE.dense }) {
+function Heading({ columns, type }: { columns: readonly Column[]; type: Type }) {
   return (
     <View fixed style={s.head}>
-      {table.columns.map((column, at) => (
-        <View key={at} style={[s.cell, { width: width(table.columns, at, 1) }]}>
-          <Text style={{ ...type, fontWeight: 600, textAlign: column.align }}>{column.heading}</Text>
-          {column.unit !== '' && (
-            <Text style={[s.unit, { ...TYPE.dense, textAlign: column.align }]}>{column.unit}</Text>
-          )}
-        </View>
-      ))}
-    </View>
-  );
-}
-
-function cellStyle(cell: MemoCell, column: MemoColumn, mark: MemoRow['mark']) {
-  const figure = column.align === 'right' && cell.span === undefined;
-  return {
-    textAlign: cell.span === undefined ? column.align : ('left' as const),
-    fontFamily: figure ? figureFont(cell.text) : SANS,
-    fontWeight: cell.strong || mark === 'leads' ? (600 as const) : (400 as const),
-    color: mark === 'leads' && cell.strong ? INK.signal : mark === 'set-aside' ? INK.ink3 : INK.ink,
-  };
-}
-
-function Row({
-  table,
-  row,
-  type,
-}: {
-  table: MemoTable;
-  row: MemoRow;
-  type: { fontSize: number; lineHeight: number };
-}) {
-  let at = 0;
-  const cells = row.cells.map((cell) => {
-    const from = at;
-    at += cell.span ?? 1;
-    return { cell, from };
-  });
-  const last = row === table.rows.at(-1);
-  const edge = row.mark === 'leads' ? { borderLeftWidth: 2.4, borderLeftColor: INK.signal } : {};
-  return (
-    <View wrap={false} style={[s.row, { borderBottomWidth: last ? 0 : RULE.hair }, edge]}>
-      {cells.map(({ cell, from }) => {
-        const column = table.columns[from];
-        if (!column) return null;
+      {columns.map((column, at) => {
+        const textAlign = column.align;
         return (
-          <View key={from} style={[s.cell, { width: width(table.columns, from, cell.span ?? 1) }]}>
-            <Text style={{ ...type, paddingVertical: 2, ...cellStyle(cell, column, row.mark) }}>
-              {cell.text}
-            </Text>
+          <View key={at} style={{ width: column.width, paddingLeft: GAP, paddingRight: roomAfter(column) }}>
+            {column.heading !== '' && (
+              <Text style={{ ...type, fontWeight: 600, textAlign }}>{column.heading}</Text>
+            )}
+            {column.unit !== '' && <Text style={[s.unit, { textAlign }]}>{column.unit}</Text>}
           </View>
         );
       })}
@@ -94,26 +50,135 @@ function Row({
   );
 }
 
-/** A numbered table: breaks between rows, repeats its headings on every page it reaches, never splits a row. */
-export function Table({ table }: { table: MemoTable }) {
-  const type = table.columns.length >= DENSE_FROM ? TYPE.dense : TYPE.table;
+const roomAfter = ({ align, width, characters }: Column): number =>
+  align === 'right' ? width / characters : GAP;
+
+const inkOf = (cell: Pick<MemoCell, 'strong'>, mark: MemoRow['mark']) => ({
+  fontWeight: cell.strong || mark === 'leads' ? (600 as const) : (400 as const),
+  color: mark === 'leads' && cell.strong ? INK.signal : mark === 'set-aside' ? INK.ink3 : INK.ink,
+});
+
+function Figures({
+  run,
+  columns,
+  mark,
+  type,
+}: {
+  run: Run;
+  columns: readonly Column[];
+  mark: MemoRow['mark'];
+  type: Type;
+}) {
+  // The first figure's room is a padding: a line's leading spaces are not printed.
+  const first = columns[run.from];
+  const before = (first?.characters ?? 1) - 1 - (run.cells[0]?.text.length ?? 0);
+  const paddingLeft = before * ((first?.width ?? 0) / (first?.characters ?? 1));
+  const pieces: { text: string; strong: boolean }[] = [];
+  run.cells.forEach((cell, index) => {
+    const column = columns[run.from + index];
+    const strong = cell.strong === true;
+    const text = column === undefined ? '' : index === 0 ? `${cell.text} ` : padded(cell, column);
+    const last = pieces.at(-1);
+    if (last?.strong === strong) last.text += text;
+    else pieces.push({ text, strong });
+  });
   return (
-    <View style={s.table}>
+    <Text
+      style={{ ...type, ...inkOf({ strong: false }, mark), width: run.width, paddingLeft, fontFamily: MONO }}
+    >
+      {pieces.map(({ text, strong }, index) => {
+        const shown = index === pieces.length - 1 ? text.trimEnd() : text;
+        return strong ? (
+          <Text key={index} style={inkOf({ strong }, mark)}>
+            {shown}
+          </Text>
+        ) : (
+          shown
+        );
+      })}
+    </Text>
+  );
+}
+
+function Words({
+  run,
+  columns,
+  mark,
+  type,
+}: {
+  run: Run;
+  columns: readonly Column[];
+  mark: MemoRow['mark'];
+  type: Type;
+}) {
+  const [cell] = run.cells;
+  const column = columns[run.from];
+  if (!cell || !column) return null;
+  const align = cell.span === undefined ? column.align : 'left';
+  return (
+    <Text
+      style={{
+        ...type,
+        ...s.words,
+        ...inkOf(cell, mark),
+        width: run.width,
+        textAlign: align,
+        paddingRight: align === 'right' ? roomAfter(column) : GAP,
+      }}
+    >
+      {cell.text}
+    </Text>
+  );
+}
+
+/** One row, never split. */
+function Row({
+  row,
+  last,
+  columns,
+  type,
+}: {
+  row: MemoRow;
+  last: boolean;
+  columns: readonly Column[];
+  type: Type;
+}) {
+  return (
+    <View wrap={false} style={[s.row, last ? s.end : { borderBottomWidth: RULE.hair }]}>
+      {row.mark === 'leads' && <View style={s.edge} />}
+      {runsOf(row, columns).map((run) => {
+        const Cells = run.padded ? Figures : Words;
+        return <Cells key={run.from} run={run} columns={columns} mark={row.mark} type={type} />;
+      })}
+    </View>
+  );
+}
+
+/**
+ * A numbered table: breaks between rows, repeats its headings on every page it reaches, never splits a row. Caption
+ * and notes stand beside the rows' container and not in it: so the caption moves on with the rows, and a note that
+ * falls on the next page brings no headings with it.
+ */
+export function Table({ table, width }: { table: MemoTable; width: number }) {
+  const type = table.columns.length >= DENSE_FROM ? TYPE.dense : TYPE.table;
+  const columns = snapped(table.columns, width, type.fontSize);
+  return (
+    <>
       <Text style={s.caption} minPresenceAhead={START}>
         {`Table ${table.number}. ${table.caption}`}
       </Text>
       <View>
-        <Heading table={table} type={type} />
+        <Heading columns={columns} type={type} />
         {table.rows.map((row, at) => (
-          <Row key={at} table={table} row={row} type={type} />
+          <Row key={at} row={row} last={at === table.rows.length - 1} columns={columns} type={type} />
         ))}
-        <View style={s.end} />
       </View>
       {table.notes.map((note, at) => (
         <Text key={at} style={s.note}>
           {note}
         </Text>
       ))}
-    </View>
+      <View style={s.after} />
+    </>
   );
 }

@@ -1,0 +1,88 @@
+import { decimalsNeeded } from '#core/printed/figure.ts';
+import { formatNumber } from '#contract/format.ts';
+import type { MemoBlock, MemoTable } from '#contract/memo.ts';
+import { QUANTITIES } from '#contract/quantity.ts';
+import type { WeighedCriterion } from '#contract/ranking.ts';
+import { decimalsOf, letterOf } from '#contract/ranking-words.ts';
+import { cell, figure, figures, row, table, words } from './cells.ts';
+import type { MemoFacts } from './facts.ts';
+
+/** Figures of levels and limits need no fewer decimals than the column they bound. */
+const bound = (value: number, decimals: number): string =>
+  figure(value, Math.max(decimals, decimalsNeeded([value])));
+
+function levels({ span }: WeighedCriterion, decimals: number): [string, string] {
+  if (span.kind === 'span') return [bound(span.worst, decimals), bound(span.best, decimals)];
+  return span.kind === 'flat' ? [bound(span.figure, decimals), 'all equal'] : ['–', '–'];
+}
+
+function sourceOf(facts: MemoFacts, { source, quantity, orbitId }: WeighedCriterion): string {
+  if (source !== 'computed' || quantity === null) return 'entered';
+  const orbit = facts.inputs.orbits.find((one) => one.orbitId === orbitId);
+  const over = orbit ? `for ${orbit.name || orbit.code}` : QUANTITIES[quantity].overManifest;
+  return over === '' ? 'computed' : `computed: ${over}`;
+}
+
+function criteriaTable(facts: MemoFacts): MemoTable {
+  return table(
+    'Criteria, levels, limits and weights',
+    [
+      words('', 4, true),
+      words('Criterion', 21, true),
+      words('Unit', 7),
+      words('Better', 7),
+      words('Source', 23),
+      figures('Worst', 'value 0', 10),
+      figures('Best', 'value 1', 10),
+      words('Levels', 10),
+      figures('Limit', '', 11),
+      figures('Weight', 'sum 1', 8, true),
+    ],
+    facts.ranking.criteria.map((criterion, place) => {
+      const decimals = decimalsOf(facts.figures, place);
+      const [worst, best] = levels(criterion, decimals);
+      const { limit } = criterion;
+      return row([
+        cell(letterOf(place), true),
+        cell(criterion.name),
+        cell(criterion.unit === '' ? '–' : criterion.unit),
+        cell(criterion.direction),
+        cell(sourceOf(facts, criterion)),
+        cell(worst),
+        cell(best),
+        cell(criterion.levels.mode === 'fixed' ? 'fixed' : 'candidates'),
+        cell(
+          limit === null ? '–' : `${limit.kind === 'at-least' ? '≥' : '≤'} ${bound(limit.value, decimals)}`,
+        ),
+        cell(figure(criterion.weight, 4)),
+      ]);
+    }),
+    [
+      'A value runs straight from 0 at the worst level to 1 at the best and stays there beyond.',
+      ...(facts.ranking.criteria.some(({ span }) => span.kind === 'flat')
+        ? ['Where all candidates are equal the criterion tells none apart: its value is 0 for all.']
+        : []),
+    ],
+  );
+}
+
+/** What the candidates are weighed by. */
+export function criteriaBlocks(facts: MemoFacts): MemoBlock[] {
+  const { criteria } = facts.ranking;
+  if (criteria.length === 0)
+    return [{ kind: 'paragraph', text: ['The study has no criteria to weigh by yet.'] }];
+  const moving = criteria.filter(({ levels: { mode } }) => mode === 'candidates').length;
+  return [
+    criteriaTable(facts),
+    ...(moving > 0
+      ? [
+          {
+            kind: 'paragraph' as const,
+            text: [
+              `${moving === criteria.length ? 'All levels are' : `The levels of ${formatNumber(moving)} of ${formatNumber(criteria.length)} criteria are`} set by the candidates themselves: adding or removing a site can move the values of all the others, and with them the order. Fixed levels keep values comparable.`,
+            ],
+          },
+        ]
+      : []),
+  ];
+}

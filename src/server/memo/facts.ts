@@ -1,0 +1,34 @@
+import type { EvaluateOutput } from '#contract/evaluate.ts';
+import type { MemoPaper } from '#contract/memo.ts';
+import type { Ranking, RankingFigures } from '#contract/ranking.ts';
+import type { StudyInputs } from '#contract/study-inputs.ts';
+
+/** What a memo is written from: the same inputs, results and ranking that the screens show, of one revision. */
+export interface MemoFacts {
+  paper: MemoPaper;
+  /** UTC day, ISO 8601. */
+  date: string;
+  /** Address of the installation, without a closing slash. */
+  origin: string;
+  study: {
+    id: string;
+    title: string;
+    organisation: string;
+    question: string;
+    /** ISO 8601 day. */
+    decideBy: string | null;
+    /** Names of the leads. */
+    leads: string[];
+  };
+  inputs: StudyInputs;
+  /** Results in the order of the inputs' sites and orbits; no site or no orbit leaves them empty. */
+  evaluation: EvaluateOutput;
+  figures: RankingFigures;
+  ranking: Ranking;
+  /** SHA-256 of the canonical inputs, hexadecimal. */
+  checksum: string;
+}
+
+/** Sites that a memo lists: beyond these the rest are counted and point to the CSV. */
+export const MOST_RANKED = 40;
+export const MOST_OTHERS = 20;

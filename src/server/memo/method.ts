@@ -1,0 +1,113 @@
+import { constants } from '#core/constants.ts';
+import { references } from '#core/references.ts';
+import { formatNumber } from '#contract/format.ts';
+import type { MemoBlock, MemoFormulas, MemoTable } from '#contract/memo.ts';
+import { cell, figures, row, table, words } from './cells.ts';
+
+const FLIGHT: MemoFormulas['items'] = [
+  {
+    formula: 'N = a / √(1 − e² sin²φ);  p = (N + h) cos φ',
+    meaning: 'Distance of the pad from the Earth’s axis; φ geodetic latitude, h height, e² = f (2 − f).',
+  },
+  {
+    formula: 'φ′ = atan2((N (1 − e²) + h) sin φ, p);  u = ω p',
+    meaning: 'Geocentric latitude, and the eastward speed u of the pad.',
+  },
+  {
+    formula: 'v = √(μ (2/r − 1/A));  r = a + altitude',
+    meaning: 'Speed on an orbit of semi-major axis A (vis-viva); altitudes count from the equatorial radius.',
+  },
+  {
+    formula: 'cos i = −(2/3) (2π / T) / (J₂ n) · (P / a)²',
+    meaning:
+      'Inclination of a sun-synchronous orbit, first order in J₂; n mean motion, P semi-latus rectum, T tropical year.',
+  },
+  {
+    formula: 'sin β = cos i / cos φ′',
+    meaning:
+      'Inertial azimuth, northerly β and southerly 180° − β. Where |cos i| > cos φ′ the nearest inclination is flown due east or west and the rest is owed as a plane change.',
+  },
+  {
+    formula: 'E = v sin β − u;  N = v cos β;  launch azimuth = atan2(E, N)',
+    meaning:
+      'Earth-relative velocity, east and north; its length is the required speed, and v less that is the rotation gain.',
+  },
+  {
+    formula: '√(v₁² + v₂² − 2 v₁ v₂ cos α)',
+    meaning:
+      'A burn that changes speed and plane together. A plane change owed is split between the two transfer burns so that the sum is least.',
+  },
+  {
+    formula: '2 k v sin(δ/2)',
+    meaning:
+      'A dogleg of δ; k is the share of the injection speed flown by then: the setting up to 7° of arc, rising straight to 1 at 15°. No turn above 60° is flown.',
+  },
+  {
+    formula: 'Δv = required + losses + dogleg + plane change + transfer + reserve',
+    meaning: 'The budget. Of all permitted ways the one of least total is flown.',
+  },
+  {
+    formula: 'Δv = Σ g₀ I ln(m₀ / m₁)',
+    meaning:
+      'Rocket equation over the burns, I specific impulse, m₀ and m₁ the mass before and after, solved for the payload to 0.01 kg. A first stage from lift-off counts its sea-level impulse plus 0.8 of the step to vacuum, boosters and core together 0.75 of it, flow-weighted.',
+  },
+];
+
+const DECISION: MemoFormulas['items'] = [
+  {
+    formula: 'v = (x − worst) / (best − worst)',
+    meaning: 'Value of a figure x, 0 to 1 and clamped there (Keeney and Raiffa 1976, straight).',
+  },
+  { formula: 'w = points / Σ points', meaning: 'Weight of a criterion; the weights sum to 1.' },
+  { formula: 'V = Σ w v', meaning: 'Overall value. Values within 1e-12 tie and share a rank.' },
+  {
+    formula: 'payload a year = Σ flights × payload',
+    meaning: 'Over the manifest; an orbit out of reach or fallen short counts 0.',
+  },
+];
+
+/** Digits as a person would copy them: plain where short, else with a power of ten. */
+function constantText(value: number): string {
+  const size = Math.abs(value);
+  if (size >= 1e-2 && size < 1e9) {
+    const digits = String(value).split('.')[1]?.length ?? 0;
+    return formatNumber(value, digits);
+  }
+  return value.toExponential().replace('e+', 'e').replace('e-', 'e−');
+}
+
+function constantsTable(): MemoTable {
+  return table(
+    'Constants',
+    [
+      words('Symbol', 9, true),
+      words('Constant', 33, true),
+      figures('Value', '', 22, true),
+      words('Unit', 10, true),
+      words('Source', 40),
+    ],
+    Object.values(constants).map(({ symbol, name, value, unit, source }) =>
+      row([cell(symbol), cell(name), cell(constantText(value)), cell(unit), cell(references[source])]),
+    ),
+  );
+}
+
+function sources(): MemoTable {
+  return table(
+    'Sources of the method',
+    [words('Source', 100, true)],
+    Object.values(references).map((source) => row([cell(source)])),
+  );
+}
+
+/** How the figures come about: formulas, constants, sources. */
+export function methodBlocks(): MemoBlock[] {
+  return [
+    { kind: 'paragraph', text: [{ strong: 'Flight' }] },
+    { kind: 'formulas', items: FLIGHT },
+    { kind: 'paragraph', text: [{ strong: 'Weighing' }] },
+    { kind: 'formulas', items: DECISION },
+    constantsTable(),
+    sources(),
+  ];
+}
