@@ -14,7 +14,7 @@ interface AccountProps {
 /** One's own account: name, password, sessions, personal keys. */
 export function AccountView({ account, keys, sessions }: AccountProps) {
   return (
-    <div className="grid gap-x-14 gap-y-9 tablet:grid-cols-2">
+    <div className="grid grid-cols-1 gap-x-14 gap-y-9 tablet:grid-cols-2">
       <Panel title="Name" caption={`You sign in as ${account.email}.`}>
         <NamePanel account={account} />
       </Panel>
