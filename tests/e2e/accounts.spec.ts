@@ -56,7 +56,7 @@ test('signing in leads to the page that was asked for, and only to one of ours',
   await signIn('reader');
   await page.waitForURL('**/account');
   await page.getByRole('button', { name: /open the menu/ }).click();
-  await page.getByRole('button', { name: 'Sign out' }).click();
+  await page.getByRole('button', { name: 'Sign out', exact: true }).click();
   await page.waitForURL('**/sign-in');
   await page.goto('/sign-in?next=//elsewhere.test/');
   await signIn('reader');

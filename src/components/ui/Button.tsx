@@ -17,6 +17,12 @@ interface ButtonProps extends Looks, Omit<ComponentProps<'button'>, 'children'> 
   busy?: boolean | undefined;
 }
 
+/**
+ * Pressing a form's button must not leave the field first: checking it then would take its error line away, and the
+ * button would move from under the pointer before the click. The submission checks every field anyway.
+ */
+const keepFocus = (event: MouseEvent) => event.preventDefault();
+
 /** Verb and object in the label ("Add 9 good rows"). One primary a screen. */
 export function Button({
   kind = 'secondary',
@@ -47,6 +53,7 @@ export function Button({
         aria-describedby={notYet ? reasonId : undefined}
         title={notYet}
         onClick={press}
+        onMouseDown={type === 'submit' ? keepFocus : undefined}
         {...rest}
       >
         {icon && <Icon name={icon} />}
