@@ -68,24 +68,21 @@ test('10,000 rows are read and added while the page answers', async ({ open, bas
     (_, i) => `Site ${i},${(i % 1700) / 10 - 85},${(i * 7) % 360},${i}`,
   );
   const buffer = Buffer.from(`name,lat,lon,Cost\n${rows.join('\n')}\n`);
-  await page.evaluate(() => {
-    let last = performance.now();
-    const tick = () => {
-      const now = performance.now();
-      const worst = Number(document.body.dataset['worst'] ?? 0);
-      document.body.dataset['worst'] = String(Math.max(worst, now - last));
-      last = now;
-      requestAnimationFrame(tick);
-    };
-    tick();
-  });
+  // The main thread's own time, so that a busy machine does not count as a busy page.
+  const devtools = await page.context().newCDPSession(page);
+  await devtools.send('Performance.enable', { timeDomain: 'threadTicks' });
+  const mainThreadS = async (): Promise<number> => {
+    const { metrics } = await devtools.send('Performance.getMetrics');
+    return metrics.find(({ name }) => name === 'TaskDuration')?.value ?? Infinity;
+  };
+  const before = await mainThreadS();
   const panel = page.locator('#upload');
   const started = Date.now();
   await panel.locator('input[type=file]').setInputFiles({ name: 'many.csv', mimeType: 'text/csv', buffer });
   await expect(panel.getByText('10,000 rows read')).toBeVisible();
   expect(Date.now() - started).toBeLessThan(3_000);
-  // No frame was held up for longer than a person takes for "at once": half a second, the spec's bound for progress.
-  expect(Number(await page.evaluate(() => document.body.dataset['worst']))).toBeLessThan(500);
+  // All of the page's work together stays under the half second after which progress would have to be shown.
+  expect((await mainThreadS()) - before).toBeLessThan(0.5);
   const sent = Date.now();
   await panel.getByRole('button', { name: 'Add 10,000 good rows' }).click();
   await expect(page.getByText('10,000 sites added from many.csv')).toBeVisible({ timeout: 10_000 });
