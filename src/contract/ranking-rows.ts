@@ -1,5 +1,6 @@
 import { failuresOf, type Listed } from '#core/decision/listing.ts';
 import { CELL } from '#core/decision/figures.ts';
+import { decimalsNeeded } from '#core/printed/figure.ts';
 import { formatNumber } from './format.ts';
 import { decimalsOf } from './ranking-words.ts';
 import type { RankingModel } from './ranking-model.ts';
@@ -53,7 +54,7 @@ function reasonsOf(model: RankingModel, site: number): SetAsideSite['reasons'] {
       prepared.table.states[at] === CELL.figure
         ? [formatNumber(prepared.table.figures[at] ?? 0, decimals), unit].filter(Boolean).join(' ')
         : (notes.get(at) ?? 'out of reach');
-    const bound = `${limit.kind === 'at-least' ? '≥' : '≤'} ${formatNumber(limit.value, decimals)}`;
+    const bound = `${limit.kind === 'at-least' ? '≥' : '≤'} ${formatNumber(limit.value, decimalsNeeded([limit.value]))}`;
     return [{ criterionId: id, message: `${name} ${figure}, limit ${bound}` }];
   });
 }

@@ -1,6 +1,5 @@
+import { MOST_POINTS } from './points.ts';
 import { z } from './zod.ts';
-
-export const MOST_POINTS = 100;
 
 /** Whose weights: the study's, which a lead sets and everyone sees, or the member's own. */
 export const WeightsOf = z.enum(['study', 'mine']);

@@ -1,0 +1,171 @@
+import {
+  CellStyleModule,
+  ClientSideRowModelModule,
+  ColumnApiModule,
+  ModuleRegistry,
+  NumberFilterModule,
+  RowApiModule,
+  RowSelectionModule,
+  RowStyleModule,
+  ScrollApiModule,
+  TextFilterModule,
+  type GridApi,
+  type IRowNode,
+} from 'ag-grid-community';
+import { AgGridReact } from 'ag-grid-react';
+import { useEffect, useMemo, useRef, useState } from 'react';
+import type { RankingModel } from '#contract/ranking-model.ts';
+import type { Sheet } from './columns.ts';
+import { BAND_HEIGHT, DrawnBand, GridSheetContext, ROW_HEIGHT } from './grid-cells.tsx';
+import { criterionColumn, defaultColumn, fixedColumns } from './grid-columns.ts';
+import { gridLines, keepGroups, type GridLine } from './grid-rows.ts';
+import { gridTheme } from './grid-theme.ts';
+import { applyGridView, gridViewOf, type GridView } from './grid-view.ts';
+
+ModuleRegistry.registerModules([
+  CellStyleModule,
+  ClientSideRowModelModule,
+  ColumnApiModule,
+  NumberFilterModule,
+  RowApiModule,
+  RowSelectionModule,
+  RowStyleModule,
+  ScrollApiModule,
+  TextFilterModule,
+]);
+
+interface RankingGridProps {
+  model: RankingModel;
+  sheet: Sheet;
+  nonce: string;
+  barWidth: number;
+  /** Ids of criteria whose columns are hidden. */
+  hidden: ReadonlySet<string>;
+  filtersShown: boolean;
+  view: GridView;
+  onView: (view: GridView) => void;
+  /** Id of the site chosen. */
+  chosen: string | null;
+  onChoose: (siteId: string | null) => void;
+  /** Told how to ask for the sites in sight, in their order; null when the grid goes. */
+  onShown: (ask: (() => string[]) | null) => void;
+}
+
+/** Up to here every row is drawn and the page scrolls; beyond, the grid scrolls and draws what is in sight. */
+const MOST_DRAWN = 40;
+
+const isBand = (node: IRowNode<GridLine>): boolean => node.data?.kind === 'band';
+const kindIs =
+  (kind: string) =>
+  ({ data }: { data: GridLine | undefined }): boolean =>
+    data?.kind === 'site' && data.listed.kind === kind;
+const rowClasses = {
+  'rk-row-lead': ({ data }: { data: GridLine | undefined }) =>
+    data?.kind === 'site' && data.listed.kind === 'ranked' && data.listed.rank === 1,
+  'rk-row-incomplete': kindIs('incomplete'),
+  'rk-row-aside': kindIs('set-aside'),
+};
+
+export default function RankingGrid(props: RankingGridProps) {
+  const { model, sheet, barWidth, hidden, filtersShown, chosen, onChoose, onView, onShown } = props;
+  const [api, setApi] = useState<GridApi<GridLine> | null>(null);
+  const lines = useMemo(() => gridLines(model), [model]);
+  const drawing = useMemo(() => ({ sheet, barWidth }), [sheet, barWidth]);
+  const { criteria } = model.figures;
+  const columns = useMemo(
+    () => [
+      ...fixedColumns(barWidth),
+      ...criteria.map((criterion, place) => ({
+        ...criterionColumn(criterion, place),
+        hide: hidden.has(criterion.id),
+      })),
+    ],
+    [barWidth, criteria, hidden],
+  );
+  const defaults = useMemo(() => ({ ...defaultColumn, floatingFilter: filtersShown }), [filtersShown]);
+  useChosenRow(api, chosen, lines);
+  const firstView = useRef(props.view);
+
+  const start = (ready: GridApi<GridLine>): void => {
+    setApi(ready);
+    applyGridView(ready, firstView.current);
+    onShown(() => siteIdsIn(ready));
+  };
+  const tellView = (): void => {
+    if (api) onView(gridViewOf(api));
+  };
+  return (
+    <GridSheetContext value={drawing}>
+      <div className={lines.length > MOST_DRAWN ? 'rk-grid rk-grid-tall' : 'rk-grid'}>
+        <AgGridReact<GridLine>
+          theme={gridTheme}
+          styleNonce={props.nonce}
+          rowData={lines}
+          columnDefs={columns}
+          defaultColDef={defaults}
+          getRowId={({ data }) => data.id}
+          getRowHeight={({ data }) => (data?.kind === 'band' ? BAND_HEIGHT : ROW_HEIGHT)}
+          domLayout={lines.length > MOST_DRAWN ? 'normal' : 'autoHeight'}
+          headerHeight={HEADER_HEIGHT}
+          floatingFiltersHeight={FILTER_HEIGHT}
+          isFullWidthRow={({ rowNode }) => isBand(rowNode as IRowNode<GridLine>)}
+          fullWidthCellRenderer={DrawnBand}
+          postSortRows={({ nodes }) => keepGroups(nodes)}
+          alwaysPassFilter={isBand}
+          rowClassRules={rowClasses}
+          rowSelection={{
+            mode: 'singleRow',
+            checkboxes: false,
+            enableClickSelection: true,
+            isRowSelectable: (node) => !isBand(node),
+          }}
+          animateRows={!matchMedia('(prefers-reduced-motion: reduce)').matches}
+          ensureDomOrder
+          suppressCellFocus={false}
+          onGridReady={(event) => start(event.api)}
+          onGridPreDestroyed={() => onShown(null)}
+          onFilterChanged={tellView}
+          onSortChanged={tellView}
+          onSelectionChanged={(event) => {
+            if (event.source === 'rowClicked' || event.source === 'spaceKey')
+              onChoose(event.api.getSelectedNodes()[0]?.id ?? null);
+          }}
+          onCellKeyDown={({ event, node }) => {
+            if (event instanceof KeyboardEvent && event.key === 'Enter' && node.data?.kind === 'site')
+              onChoose(node.data.id);
+          }}
+        />
+      </div>
+    </GridSheetContext>
+  );
+}
+
+const HEADER_HEIGHT = 116;
+const FILTER_HEIGHT = 42;
+
+/** Brings the row chosen elsewhere (by n and p, by the address) to the grid. */
+function useChosenRow(
+  api: GridApi<GridLine> | null,
+  chosen: string | null,
+  lines: readonly GridLine[],
+): void {
+  useEffect(() => {
+    if (!api) return;
+    if (chosen === null) {
+      api.deselectAll('all', 'api');
+      return;
+    }
+    const node = api.getRowNode(chosen);
+    if (!node) return;
+    node.setSelected(true, true, 'api');
+    api.ensureNodeVisible(node);
+  }, [api, chosen, lines]);
+}
+
+function siteIdsIn(api: GridApi<GridLine>): string[] {
+  const ids: string[] = [];
+  api.forEachNodeAfterFilterAndSort(({ data }) => {
+    if (data?.kind === 'site') ids.push(data.id);
+  });
+  return ids;
+}

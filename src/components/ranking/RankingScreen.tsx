@@ -1,0 +1,124 @@
+import { useCallback, useRef } from 'react';
+import { useAddressParam } from '#components/live/address.ts';
+import { useFinding } from '#components/live/hooks.ts';
+import { Button } from '#components/ui/Button.tsx';
+import { ChartPatterns } from '#components/ui/chart.tsx';
+import { Finding } from '#components/ui/Finding.tsx';
+import { Segmented } from '#components/ui/Segmented.tsx';
+import { Stale } from '#components/ui/States.tsx';
+import { MOST_POINTS } from '#contract/points.ts';
+import { countsInWords, findingText, rankingFinding, rankingWhy } from '#contract/ranking-words.ts';
+import type { RankingStart } from '#contract/ranking.ts';
+import { exportLabel, rankingCsv, saveCsv } from './export.ts';
+import { BeforeRanks, ConnectionNote, EstimatesCaution, FiguresNotRead } from './Notices.tsx';
+import { RankingSheets, type RankingAddress } from './RankingSheets.tsx';
+import { useRanking, type LiveRanking } from './use-ranking.ts';
+import { PATTERNS } from './ValueBar.tsx';
+import { lockOf, type Viewer } from './viewer.ts';
+
+interface RankingScreenProps {
+  studyId: string;
+  title: string;
+  start: RankingStart;
+  viewer: Viewer;
+  address: RankingAddress;
+  nonce: string;
+}
+
+export function RankingScreen({ studyId, title, start, viewer, address, nonce }: RankingScreenProps) {
+  const [whoseParam, setWhose] = useAddressParam('weights', address.weights);
+  const whose = whoseParam === 'mine' ? 'mine' : 'study';
+  const live = useRanking(studyId, start, whose);
+  const shown = useRef<(() => string[]) | null>(null);
+  const onShown = useCallback((ask: (() => string[]) | null) => {
+    shown.current = ask;
+  }, []);
+  const { ranking, model, weights, staleRevision, error } = live;
+  const locked = lockOf(viewer, whose);
+  useFinding(findingText(ranking));
+  const exportFile = (): void => {
+    if (!model) return;
+    const all = model.rows.map(({ site }) => model.figures.sites[site]?.siteId ?? '');
+    saveCsv(
+      `${fileNameOf(title)} ranking r${ranking.revision}.csv`,
+      rankingCsv(model, shown.current?.() ?? all),
+    );
+  };
+  const even = (): void =>
+    weights.give(Object.fromEntries(ranking.criteria.map(({ id }) => [id, MOST_POINTS])));
+  const bar = (
+    <>
+      <Segmented
+        legend="Weights"
+        value={whose}
+        onChange={(value) => setWhose(value === 'mine' ? 'mine' : null)}
+        segments={[
+          { value: 'study', name: 'Study’s weights' },
+          {
+            value: 'mine',
+            name: 'Mine',
+            notYet: viewer.role === 'reader' ? 'A reader keeps no weights of their own.' : undefined,
+          },
+        ]}
+      />
+      {staleRevision !== null && <Stale revision={staleRevision} />}
+      <ConnectionNote />
+      <span className="rk-bar-rest">{ranking.state === 'ranked' && countsInWords(ranking.counts)}</span>
+    </>
+  );
+  return (
+    <>
+      <svg className="rk-patterns" width="0" height="0" aria-hidden="true">
+        <ChartPatterns id={PATTERNS} />
+      </svg>
+      <RankingHead live={live} onExport={model?.rows.length ? exportFile : undefined} />
+      {error && <FiguresNotRead error={error} onAgain={live.again} />}
+      {ranking.state !== 'ranked' && (
+        <BeforeRanks
+          state={ranking.state}
+          studyId={studyId}
+          onEven={locked === undefined ? even : undefined}
+        />
+      )}
+      {ranking.state !== 'no-sites' && ranking.criteria.length > 0 ? (
+        <RankingSheets {...{ studyId, live, address, nonce, locked, shown, onShown, whose, bar }} />
+      ) : (
+        <div className="rk-bar">{bar}</div>
+      )}
+      <div className="mt-9">
+        <EstimatesCaution />
+      </div>
+    </>
+  );
+}
+
+function RankingHead({ live, onExport }: { live: LiveRanking; onExport: (() => void) | undefined }) {
+  const { leads, rest } = rankingFinding(live.ranking);
+  const why = rankingWhy(live.ranking);
+  return (
+    <>
+      <Finding
+        why={why && <p>{why}</p>}
+        actions={
+          <Button
+            icon="export"
+            notYet={onExport ? undefined : 'There is nothing to export yet.'}
+            onClick={onExport}
+          >
+            {live.model ? exportLabel(live.model.rows.length) : 'Export as CSV'}
+          </Button>
+        }
+      >
+        {leads !== null && <em>{leads}</em>}
+        {rest}
+      </Finding>
+      <p className="sr-only" role="status">
+        {leads}
+        {rest}
+      </p>
+    </>
+  );
+}
+
+/** A title without what file systems refuse. */
+const fileNameOf = (title: string): string => title.replace(/[^\p{L}\p{N} _-]+/gu, ' ').trim() || 'study';

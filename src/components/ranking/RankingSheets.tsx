@@ -1,0 +1,166 @@
+import { lazy, Suspense, useDeferredValue, useMemo, useState, type ReactNode, type RefObject } from 'react';
+import { useAddressParam } from '#components/live/address.ts';
+import { useStep } from '#components/live/hooks.ts';
+import { Button } from '#components/ui/Button.tsx';
+import { Panel } from '#components/ui/Finding.tsx';
+import { formatNumber } from '#contract/format.ts';
+import { rowOf, rowsOf, type RankingRow } from '#contract/ranking-rows.ts';
+import { ColumnChooser } from './ColumnChooser.tsx';
+import { sheetOf } from './columns.ts';
+import { Contributions } from './Contributions.tsx';
+import { RankingList } from './RankingList.tsx';
+import { RankingTable } from './RankingTable.tsx';
+import { SaveNote } from './SaveNote.tsx';
+import type { LiveRanking } from './use-ranking.ts';
+import { useBarWidth, useGridFits } from './use-wide.ts';
+import { WeightSliders } from './WeightSliders.tsx';
+
+const RankingGrid = lazy(() => import('./RankingGrid.tsx'));
+
+/** What of the screen the address holds. */
+export interface RankingAddress {
+  weights: string | null;
+  site: string | null;
+  hide: string | null;
+  sort: string | null;
+  filter: string | null;
+}
+
+interface SheetsProps {
+  studyId: string;
+  live: LiveRanking;
+  address: RankingAddress;
+  nonce: string;
+  locked: string | undefined;
+  /** Asks the grid for the sites in sight; null without one. */
+  shown: RefObject<(() => string[]) | null>;
+  onShown: (ask: (() => string[]) | null) => void;
+  whose: 'study' | 'mine';
+  /** What stands at the left of the columns and filter buttons. */
+  bar: ReactNode;
+}
+
+const LIST_STEP = 50;
+
+/** The ranking itself, as grid, table or list, with the weights and the chosen site's terms under it. */
+export function RankingSheets(props: SheetsProps) {
+  const { studyId, live, address, nonce, locked, shown, onShown, whose, bar } = props;
+  const { ranking, weights } = live;
+  // The sliders must not wait for a long grid: it follows a moment later.
+  const model = useDeferredValue(live.model);
+  const sheet = useMemo(() => sheetOf(ranking, live.model), [ranking, live.model]);
+  const [code, setCode] = useAddressParam('site', address.site);
+  const [hide, setHide] = useAddressParam('hide', address.hide);
+  const [sort, setSort] = useAddressParam('sort', address.sort);
+  const [filter, setFilter] = useAddressParam('filter', address.filter);
+  const [filtersShown, setFiltersShown] = useState(address.filter !== null);
+  const [listed, setListed] = useState(LIST_STEP);
+  const hidden = useMemo(() => new Set(hide ? hide.split(',') : []), [hide]);
+  const gridFits = useGridFits();
+  const barWidth = useBarWidth();
+
+  const sites = model?.figures.sites ?? [];
+  const chosenId = sites.find((site) => site.code === code)?.siteId ?? null;
+  const choose = (siteId: string | null): void =>
+    setCode(sites.find((site) => site.siteId === siteId)?.code ?? null);
+  useStep((step) => {
+    const order = shown.current?.() ?? model?.rows.map(({ site }) => sites[site]?.siteId ?? '') ?? [];
+    if (order.length === 0) return;
+    const here = chosenId === null ? (step > 0 ? -1 : 0) : order.indexOf(chosenId);
+    choose(order[(here + step + order.length) % order.length] ?? null);
+  });
+
+  const plain = rowsOf(ranking);
+  const total = model?.rows.length ?? plain.length;
+  const listRows = model ? model.rows.slice(0, listed).map((row) => rowOf(model, row)) : plain;
+  const inView = detailRow(live, plain, code);
+  return (
+    <>
+      <div className="rk-bar">
+        {bar}
+        <div className="rk-tools">
+          <ColumnChooser
+            columns={sheet.columns}
+            hidden={hidden}
+            onHide={(next) => setHide(next.size > 0 ? [...next].join(',') : null)}
+          />
+          <Button
+            size="small"
+            icon="filter"
+            aria-pressed={filtersShown}
+            onClick={() => setFiltersShown(!filtersShown)}
+          >
+            {filter ? 'Filter, in use' : 'Filter'}
+          </Button>
+        </div>
+      </div>
+      <div className="rk-desk">
+        {gridFits && model && plain.length > 0 ? (
+          <Suspense fallback={<RankingTable sheet={sheet} chosen={code} />}>
+            <RankingGrid
+              model={model}
+              sheet={sheet}
+              nonce={nonce}
+              barWidth={barWidth}
+              hidden={hidden}
+              filtersShown={filtersShown}
+              view={{ sort, filter }}
+              onView={(view) => {
+                setSort(view.sort);
+                setFilter(view.filter);
+              }}
+              chosen={chosenId}
+              onChoose={choose}
+              onShown={onShown}
+            />
+          </Suspense>
+        ) : (
+          <RankingTable sheet={sheet} chosen={code} />
+        )}
+      </div>
+      <div className="rk-phone">
+        <RankingList sheet={sheet} rows={listRows} chosen={code} />
+        {listRows.length < total && (
+          <Button onClick={() => setListed(listed + LIST_STEP)}>
+            Show {formatNumber(Math.min(LIST_STEP, total - listRows.length))} more of {formatNumber(total)}{' '}
+            sites
+          </Button>
+        )}
+      </div>
+      <div className="rk-panels">
+        <Panel
+          title={whose === 'mine' ? 'Your weights' : 'The study’s weights'}
+          caption={
+            whose === 'mine'
+              ? 'They move this screen alone; nobody else’s ranking changes.'
+              : 'They move everyone’s ranking at once.'
+          }
+        >
+          <WeightSliders columns={sheet.columns} set={weights} locked={locked} />
+          {locked === undefined && (
+            <div className="mt-3">
+              <SaveNote
+                set={weights}
+                what={whose === 'mine' ? 'your weights' : 'the study’s weights'}
+                criteria={ranking.criteria}
+              />
+            </div>
+          )}
+        </Panel>
+        {inView && <Contributions row={inView} sheet={sheet} studyId={studyId} />}
+      </div>
+    </>
+  );
+}
+
+/** The site chosen, or the first one listed. */
+function detailRow(
+  { model }: LiveRanking,
+  plain: readonly RankingRow[],
+  code: string | null,
+): RankingRow | undefined {
+  const drawn = plain.find((row) => row.code === code);
+  if (drawn || code === null || !model) return drawn ?? plain[0];
+  const listed = model.rows.find(({ site }) => model.figures.sites[site]?.code === code);
+  return listed ? rowOf(model, listed) : plain[0];
+}

@@ -1,0 +1,112 @@
+import { useCallback, useEffect, useState } from 'react';
+import { ApiError, send } from '#components/live/api.ts';
+import { useApi } from '#components/live/hooks.ts';
+import { announceKept, announceSaved, announceSaving, type Saved } from '#components/live/saved.ts';
+import type { Weights } from '#contract/weights.ts';
+
+export type Points = Readonly<Record<string, number>>;
+
+/** `waiting`: typed and not yet sent. `failed`: kept here alone. `conflict`: someone saved this set meanwhile. */
+export type Saving =
+  | { kind: 'saved' }
+  | { kind: 'waiting' }
+  | { kind: 'saving' }
+  | { kind: 'failed'; error: ApiError }
+  | { kind: 'conflict'; theirs: Weights };
+
+export interface WeightSet {
+  points: Points;
+  saving: Saving;
+  /** Gives points to criteria by id; the others keep theirs. */
+  give: (points: Points) => void;
+  keepTheirs: () => void;
+  putMine: () => void;
+  retry: () => void;
+  /** Reads the set again, unless something of it waits to be saved. */
+  refresh: () => void;
+}
+
+/** What was typed, and the version of the set it was typed over: a newer one must not be written over unseen. */
+interface Draft {
+  points: Points;
+  base: number;
+}
+
+const PAUSE_MS = 600;
+
+/** A set of weights, edited at once on this screen and saved in the background after a pause. */
+export function useWeightSet(studyId: string, initial: Weights): WeightSet {
+  const address = `/api/v1/studies/${studyId}/weights?weights=${initial.weights}`;
+  const { data, mutate } = useApi<Weights>(address, { fallbackData: initial });
+  const held = data ?? initial;
+  const [draft, setDraft] = useState<Draft | null>(null);
+  const [saving, setSaving] = useState<Saving>({ kind: 'saved' });
+
+  const save = useCallback(
+    async (sent: Draft) => {
+      setSaving({ kind: 'saving' });
+      announceSaving();
+      try {
+        const body = { points: sent.points, version: sent.base };
+        const { revision, savedAt, ...answer } = await send<Weights & Saved>('PUT', address, body);
+        await mutate(answer, { revalidate: false });
+        setDraft((now) =>
+          now === sent || now === null ? null : { points: now.points, base: answer.version },
+        );
+        setSaving({ kind: 'saved' });
+        announceSaved({ revision, savedAt });
+      } catch (error) {
+        if (!(error instanceof ApiError)) throw error;
+        announceKept();
+        setSaving(
+          error.code === 'stale'
+            ? { kind: 'conflict', theirs: error.current as Weights }
+            : { kind: 'failed', error },
+        );
+      }
+    },
+    [address, mutate],
+  );
+
+  const idle = saving.kind === 'saved' || saving.kind === 'waiting';
+  useEffect(() => {
+    if (!draft || !idle) return;
+    const timer = setTimeout(() => void save(draft), PAUSE_MS);
+    return () => clearTimeout(timer);
+  }, [draft, idle, save]);
+  useLeaveGuard(draft !== null);
+  const refresh = useCallback(() => void mutate(), [mutate]);
+
+  return {
+    points: draft?.points ?? held.points,
+    saving: draft && saving.kind === 'saved' ? { kind: 'waiting' } : saving,
+    give: (points) =>
+      setDraft((now) => ({
+        points: { ...(now?.points ?? held.points), ...points },
+        base: now?.base ?? held.version,
+      })),
+    keepTheirs: () => {
+      if (saving.kind === 'conflict') void mutate(saving.theirs, { revalidate: false });
+      setDraft(null);
+      setSaving({ kind: 'saved' });
+    },
+    putMine: () => {
+      if (saving.kind !== 'conflict') return;
+      const { version } = saving.theirs;
+      setDraft((now) => now && { ...now, base: version });
+      setSaving({ kind: 'saved' });
+    },
+    retry: () => setSaving({ kind: 'saved' }),
+    refresh,
+  };
+}
+
+/** The browser asks before it leaves a page on which something is not saved yet. */
+function useLeaveGuard(unsaved: boolean): void {
+  useEffect(() => {
+    if (!unsaved) return;
+    const ask = (event: BeforeUnloadEvent) => event.preventDefault();
+    addEventListener('beforeunload', ask);
+    return () => removeEventListener('beforeunload', ask);
+  }, [unsaved]);
+}
