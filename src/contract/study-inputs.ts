@@ -1,4 +1,4 @@
-import { EvaluateOrbit, EvaluateSite, FlightSettings } from './evaluate.ts';
+import { EvaluateOrbit, EvaluateOutput, EvaluateSite, FlightSettings } from './evaluate.ts';
 import { VehicleInput } from './vehicle.ts';
 import { z } from './zod.ts';
 
@@ -17,3 +17,6 @@ export const StudyInputs = z
 export type StudyInputs = z.infer<typeof StudyInputs>;
 export type InputSite = StudyInputs['sites'][number];
 export type InputOrbit = StudyInputs['orbits'][number];
+
+/** The answer of an evaluation for a study, with the revision of its inputs. */
+export const StudyEvaluation = EvaluateOutput.extend({ revision: z.int() }).meta({ id: 'StudyEvaluation' });
