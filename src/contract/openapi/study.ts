@@ -1,7 +1,7 @@
 import { CriterionInput, Criterion, CriterionList, CriterionPatch } from '../criterion.ts';
 import { ListQuery } from '../list.ts';
 import { MemberInput, MemberList, MemberPatch, StudyMember } from '../member.ts';
-import { MemoQuery } from '../memo-query.ts';
+import { MemoQuery } from '../memo.ts';
 import { Ranking, RankingQuery } from '../ranking.ts';
 import {
   OrbitInput,
@@ -117,6 +117,12 @@ export const studyOperations: Operations = {
       summary: 'The draft trade memo',
       query: MemoQuery,
       answer: { type: 'application/pdf', description: 'The memo' },
+    },
+  },
+  [`${STUDY}/memo-inputs.json`]: {
+    get: {
+      summary: 'The inputs whose checksum a memo prints, as canonical JSON',
+      answer: { type: 'application/json', description: 'The very bytes that the SHA-256 is taken of' },
     },
   },
   [`${STUDY}/events`]: { get: { summary: 'Changes of this study, as they happen', answer: EVENTS } },
