@@ -106,6 +106,8 @@ export function sitesFinding(
 /** The finding in plain text as the page is first drawn: its title. */
 export function firstFinding({ items, total }: SiteList, inputs: StudyInputs | null): string {
   const results =
-    inputs && inputs.orbits.length > 0 && items.length > 0 ? flySites(inputs, items) : new Map<string, SiteResult>();
+    inputs && inputs.orbits.length > 0 && items.length > 0
+      ? flySites(inputs, items)
+      : new Map<string, SiteResult>();
   return textOf(sitesFinding(items, total, inputs?.orbits ?? null, results));
 }
