@@ -1,4 +1,4 @@
-import type { Budget, Flight, FlownWay as CoreWay, OutOfReach, Payload } from '#core/flight/types.ts';
+import type { Budget, Flight, FlownWay as CoreWay, Payload } from '#core/flight/types.ts';
 import { toDegrees } from '#core/units.ts';
 import type { Radians } from '#core/units.ts';
 import type { FlownWay, OrbitResult, OutOfReachOrbit } from './evaluate.ts';
@@ -21,7 +21,7 @@ function presentPayload(payload: Payload): Pick<FlownWay, 'payloadKg' | 'shortfa
   };
 }
 
-export function presentWay(way: CoreWay): FlownWay {
+function presentWay(way: CoreWay): FlownWay {
   return {
     way: way.kind,
     branch: way.branch,
@@ -72,7 +72,3 @@ export function presentFlight(code: string, inclinationDeg: number, flight: Flig
   if (flight.kind === 'out-of-reach') return presentOutOfReach(code, inclinationDeg);
   return { code, inclinationDeg, ...presentWay(flight), others: flight.others.map(presentWay) };
 }
-
-/** The nearest inclination to an orbit out of reach, for the screens that say so. */
-export const nearestInclinationDeg = ({ nearestInclination }: OutOfReach): number =>
-  toDegrees(nearestInclination);
