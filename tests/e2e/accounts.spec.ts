@@ -38,7 +38,7 @@ test('invited, signed in, with a key, deactivated: an account’s life', async (
   await admin.getByLabel('Find a person').fill(email);
   await admin.getByRole('button', { name: 'Deactivate Tove Marsh' }).click();
   await admin.getByRole('dialog').getByRole('button', { name: 'Deactivate Tove Marsh' }).click();
-  await expect(admin.getByRole('button', { name: 'Activate Tove Marsh' })).toBeVisible();
+  await expect(admin.getByRole('button', { name: 'Activate Tove Marsh', exact: true })).toBeVisible();
   expect((await script.request.get('/api/v1/account')).status()).toBe(401);
   await script.close();
   await guest.goto('/studies');
