@@ -1,3 +1,5 @@
+import { z } from './zod.ts';
+
 /**
  * The memo as a document: everything that is printed, already worded and rounded, so that the PDF and the reading
  * preview cannot differ. A plain, serialisable value: it crosses to the rendering thread, and the same model gives
@@ -24,8 +26,12 @@ export interface MemoModel {
   foot: string;
 }
 
-export const MEMO_PAPERS = ['a4', 'letter'] as const;
-export type MemoPaper = (typeof MEMO_PAPERS)[number];
+export const MemoPaper = z.enum(['a4', 'letter']);
+export type MemoPaper = z.infer<typeof MemoPaper>;
+
+export const MemoQuery = z.object({
+  paper: MemoPaper.default('a4').meta({ description: 'A4 210 × 297 mm, or US Letter' }),
+});
 
 export interface MemoTitleBlock {
   study: string;

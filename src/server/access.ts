@@ -82,6 +82,7 @@ export const ROUTES: Readonly<Record<string, RouteRules>> = {
   [`${STUDY}/weights`]: { GET: 'study:read', PUT: 'study:weigh' },
   [`${STUDY}/ranking`]: { GET: 'study:read' },
   [`${STUDY}/memo.pdf`]: { GET: 'study:read' },
+  [`${STUDY}/memo-inputs.json`]: { GET: 'study:read' },
   [`${STUDY}/events`]: { GET: 'study:read' },
 
   // Account and administration

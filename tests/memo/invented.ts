@@ -1,6 +1,6 @@
 /* Invented facts of any size for the memo's tests: figures are arbitrary, sums are true sums. */
 import type { Criterion } from '#contract/criterion.ts';
-import type { FlownOrbit, OrbitResult, OutOfReachOrbit } from '#contract/evaluate.ts';
+import type { FlownOrbit, OrbitResult, OutOfReachOrbit, SiteResult } from '#contract/evaluate.ts';
 import { prepareFigures, rankFigures } from '#contract/ranking-model.ts';
 import { presentRanking } from '#contract/ranking-rows.ts';
 import type { RankingCell, RankingFigures } from '#contract/ranking.ts';
@@ -207,27 +207,25 @@ export function inventedFacts(wanted: Invented): MemoFacts {
   const r = arbitrary();
   const inputs = inputsOf(wanted, r);
   const vehicle = inputs.vehicle !== null;
-  const evaluation = {
-    sites:
-      inputs.orbits.length === 0
-        ? []
-        : inputs.sites.map((site, index) => {
-            const orbits = inputs.orbits.map(({ code }, at): OrbitResult =>
-              index === 5 && at === 1 ? unreached(code) : flown(code, r, vehicle),
-            );
-            const payload = orbits.reduce(
-              (sum, { payloadKg }, at) => sum + (payloadKg ?? 0) * (inputs.orbits[at]?.flightsPerYear ?? 0),
-              0,
-            );
-            return {
-              code: site.code,
-              rotationSpeedMps: 465.1 * Math.cos((site.latitudeDeg * Math.PI) / 180),
-              geocentricLatitudeDeg: site.latitudeDeg * 0.997,
-              payloadPerYearKg: vehicle ? payload : null,
-              orbits,
-            };
-          }),
-  };
+  const results = new Map(
+    inputs.sites.map((site, index): [string, SiteResult] => {
+      const orbits = inputs.orbits.map(({ code }, at): OrbitResult =>
+        index === 5 && at === 1 ? unreached(code) : flown(code, r, vehicle),
+      );
+      const payload = orbits.reduce(
+        (sum, { payloadKg }, at) => sum + (payloadKg ?? 0) * (inputs.orbits[at]?.flightsPerYear ?? 0),
+        0,
+      );
+      const result = {
+        code: site.code,
+        rotationSpeedMps: 465.1 * Math.cos((site.latitudeDeg * Math.PI) / 180),
+        geocentricLatitudeDeg: site.latitudeDeg * 0.997,
+        payloadPerYearKg: vehicle ? payload : null,
+        orbits,
+      };
+      return [site.siteId, result];
+    }),
+  );
   const figures = figuresOf(wanted, inputs, r);
   const points = Object.fromEntries(
     figures.criteria.map(({ id }, at) => [id, wanted.weighed === false ? 0 : 30 - 2 * at]),
@@ -245,7 +243,7 @@ export function inventedFacts(wanted: Invented): MemoFacts {
       leads: ['Ingrid Marsh'],
     },
     inputs,
-    evaluation,
+    results,
     figures,
     ranking: presentRanking(rankFigures(prepareFigures(figures), points), 'study'),
     checksum: 'ab'.repeat(32),

@@ -1,10 +1,10 @@
 import { decimalsNeeded } from '#core/printed/figure.ts';
 import { formatCount, formatLatitude, formatLongitude, formatNumber } from '#contract/format.ts';
-import type { MemoBlock, MemoMap, MemoTable } from '#contract/memo.ts';
-import { cell, figure, figures, markOf, row, table, words } from './cells.ts';
+import type { MemoBlock, MemoMap, MemoPad, MemoTable } from '#contract/memo.ts';
+import { cell, figure, figures, markOf as rowMark, row, table, words } from './cells.ts';
 import type { MemoFacts } from './facts.ts';
-import { drawMap } from './map.ts';
-import { leftOut, type PrintedSites } from './printed-sites.ts';
+import { drawMap, type MapDrawing } from './map.ts';
+import { leftOut, type PrintedSite, type PrintedSites } from './printed-sites.ts';
 
 /** Width of an A4 page's text, points; on Letter the figure is drawn a little larger. */
 const MAP_WIDTH = 504;
@@ -20,25 +20,25 @@ export const sectorsInWords = (sectors: readonly (readonly [number, number])[]):
         )
         .join(', ');
 
-function mapFigure({ inputs }: MemoFacts, { sites }: PrintedSites): MemoMap {
+/** The candidates on a map of any width: the listed ones by name, the others as bare pads. */
+export function candidatesMap({ inputs }: MemoFacts, { sites }: PrintedSites, width: number): MapDrawing {
   const listed = new Set(sites.map(({ site }) => site.siteId));
   const rest = inputs.sites.filter(({ siteId }) => !listed.has(siteId));
-  const drawn = drawMap(
+  const markOf = ({ standing }: PrintedSite): MemoPad['mark'] =>
+    standing === 'leads' || standing === 'ranked' ? standing : 'other';
+  return drawMap(
     [
-      ...sites.map(({ site, standing }) => ({
-        ...site,
-        mark:
-          standing === 'leads'
-            ? ('leads' as const)
-            : standing === 'ranked'
-              ? ('ranked' as const)
-              : ('other' as const),
-        named: true,
-      })),
+      ...sites.map((one) => ({ ...one.site, mark: markOf(one), named: true })),
       ...rest.map((site) => ({ ...site, mark: 'other' as const, named: false })),
     ],
-    MAP_WIDTH,
+    width,
   );
+}
+
+function mapFigure(facts: MemoFacts, printed: PrintedSites): MemoMap {
+  const { inputs } = facts;
+  const { sites } = printed;
+  const drawn = candidatesMap(facts, printed, MAP_WIDTH);
   const unnamed = drawn.pads.slice(0, sites.length).filter(({ label }) => label === null).length;
   return {
     kind: 'map',
@@ -49,7 +49,7 @@ function mapFigure({ inputs }: MemoFacts, { sites }: PrintedSites): MemoMap {
     notes: [
       `Codes as in the table of candidates. ${sites.some(({ standing }) => standing === 'leads') ? 'Filled triangle: leads. ' : ''}Equidistant cylindrical projection; coast: Natural Earth.`,
       ...(unnamed > 0 ? [`${formatCount(unnamed, 'pad')} too close to others to be named here.`] : []),
-      ...(rest.length > 0 ? [`${formatCount(rest.length, 'further site')} drawn without a code.`] : []),
+      ...(printed.left > 0 ? [`${formatCount(printed.left, 'further site')} drawn without a code.`] : []),
     ],
   };
 }
@@ -88,7 +88,7 @@ function candidatesTable({ sites, left }: PrintedSites): MemoTable {
           cell(result ? formatNumber(result.rotationSpeedMps, 1) : '–'),
           cell(result ? formatNumber(result.geocentricLatitudeDeg, 3) : '–'),
         ],
-        markOf(printed),
+        rowMark(printed),
       );
     }),
     [

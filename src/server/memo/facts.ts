@@ -1,4 +1,4 @@
-import type { EvaluateOutput } from '#contract/evaluate.ts';
+import type { SiteResult } from '#contract/evaluate.ts';
 import type { MemoPaper } from '#contract/memo.ts';
 import type { Ranking, RankingFigures } from '#contract/ranking.ts';
 import type { StudyInputs } from '#contract/study-inputs.ts';
@@ -21,8 +21,8 @@ export interface MemoFacts {
     leads: string[];
   };
   inputs: StudyInputs;
-  /** Results in the order of the inputs' sites and orbits; no site or no orbit leaves them empty. */
-  evaluation: EvaluateOutput;
+  /** Flight of every listed site by its id, orbits in the order of the manifest. */
+  results: ReadonlyMap<string, SiteResult>;
   figures: RankingFigures;
   ranking: Ranking;
   /** SHA-256 of the canonical inputs, hexadecimal. */

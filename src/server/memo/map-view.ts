@@ -22,7 +22,9 @@ interface Place {
 
 const LEAST_SPAN_DEG = 3;
 const MARGIN = 1.25;
-const STEPS_DEG = [0.5, 1, 2, 5, 10, 15, 30];
+const STEPS_DEG = [0.5, 1, 2, 5, 10, 15, 30, 45, 60];
+/** Points from one printed meridian to the next, so that their degrees stand clear of each other. */
+const LEAST_STEP = 36;
 
 /** The shortest arc of longitude that holds every place: the circle without its widest gap. */
 export function longitudeArc(longitudesDeg: readonly number[]): { midDeg: number; spanDeg: number } {
@@ -55,7 +57,7 @@ function view({ width, ...frame }: Frame): MapView {
   const { midLonDeg, midLatDeg, trueLatDeg, pointsPerDeg, height } = frame;
   const lonSpanDeg = Math.min(360, width / (pointsPerDeg * Math.cos((trueLatDeg * Math.PI) / 180)));
   const half = height / pointsPerDeg / 2;
-  const stepDeg = STEPS_DEG.find((step) => lonSpanDeg / step <= 13) ?? 30;
+  const stepDeg = STEPS_DEG.find((step) => (width * step) / lonSpanDeg >= LEAST_STEP) ?? 90;
   return {
     ...frame,
     lonSpanDeg,

@@ -6,6 +6,8 @@ import type { MemoMap, MemoPad } from '#contract/memo.ts';
 import { placeLabels, type Box } from './labels.ts';
 import { mapView, type MapView } from './map-view.ts';
 
+export type MapDrawing = Pick<MemoMap, 'width' | 'height' | 'land' | 'graticule' | 'degrees' | 'pads'>;
+
 export interface MapSite {
   code: string;
   latitudeDeg: number;
@@ -14,7 +16,7 @@ export interface MapSite {
   named: boolean;
 }
 
-/** Room for the degrees at the left and under the frame, in points. */
+/** Room for the degrees at the left and under the frame, and sizes of letters and pads, in points. */
 const LEFT = 26;
 const UNDER = 11;
 const SIZES = { character: 4.2, ascent: 5.4, descent: 1.6, pad: 3.6 };
@@ -68,15 +70,12 @@ function degreesOf(view: MapView, frame: Box): MemoMap['degrees'] {
 }
 
 /**
- * Draws the candidates on the coast, cut to where they lie.
+ * Draws the candidates on the coast, cut to where they lie. Letters keep their size: for a narrow place draw a narrow map.
  * @param sites in the order in which labels are placed: the leader first.
  * @param width of the figure, points.
  * @returns everything a renderer needs but number, caption and notes.
  */
-export function drawMap(
-  sites: readonly MapSite[],
-  width: number,
-): Pick<MemoMap, 'width' | 'height' | 'land' | 'graticule' | 'degrees' | 'pads'> {
+export function drawMap(sites: readonly MapSite[], width: number): MapDrawing {
   const view = mapView(sites, width - LEFT);
   const frame: Box = { left: LEFT, top: 0, right: width, bottom: view.height };
   const projection = projectionOf(view, frame);
@@ -90,7 +89,7 @@ export function drawMap(
     ]);
   const at = sites.map((site) => {
     const [x = 0, y = 0] = projection([site.longitudeDeg, site.latitudeDeg]) ?? [];
-    return { x, y, text: site.code };
+    return { x: Math.round(x * 100) / 100, y: Math.round(y * 100) / 100, text: site.code };
   });
   const named = at.filter((_, index) => sites[index]?.named);
   const labels = placeLabels(named, at, frame, SIZES);

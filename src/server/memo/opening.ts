@@ -114,8 +114,7 @@ function whyNone({ counts }: Ranking): string {
 /** What flying from the leader means for the manifest. */
 function manifestReason(facts: MemoFacts): MemoText | null {
   const leader = facts.ranking.ranked[0];
-  const index = facts.inputs.sites.findIndex(({ siteId }) => siteId === leader?.siteId);
-  const orbits = facts.evaluation.sites[index]?.orbits ?? [];
+  const orbits = facts.results.get(leader?.siteId ?? '')?.orbits ?? [];
   if (!leader || orbits.length === 0) return null;
   const named = (failing: (orbit: (typeof orbits)[number]) => boolean): string[] =>
     orbits.flatMap((orbit, at) => (failing(orbit) ? [facts.inputs.orbits[at]?.name || orbit.code] : []));
@@ -136,12 +135,11 @@ function manifestReason(facts: MemoFacts): MemoText | null {
   ];
 }
 
-function headlineOf({ ranking, evaluation, inputs }: MemoFacts): MemoHeadline[] {
+function headlineOf({ ranking, results, inputs }: MemoFacts): MemoHeadline[] {
   const { counts, margin, ranked } = ranking;
   const leader = ranked[0];
   if (!leader) return [];
-  const index = inputs.sites.findIndex(({ siteId }) => siteId === leader.siteId);
-  const payload = evaluation.sites[index]?.payloadPerYearKg ?? null;
+  const payload = results.get(leader.siteId)?.payloadPerYearKg ?? null;
   const flights = inputs.orbits.reduce((sum, orbit) => sum + orbit.flightsPerYear, 0);
   const all = counts.ranked + counts.incomplete + counts.setAside;
   return [

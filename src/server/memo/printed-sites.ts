@@ -18,31 +18,34 @@ export interface PrintedSites {
   left: number;
 }
 
-function standings({ ranking, inputs }: MemoFacts): { siteId: string; standing: Standing }[] {
+type Source = Pick<MemoFacts, 'ranking' | 'inputs'>;
+
+function standings({ ranking, inputs }: Source): [siteId: string, standing: Standing][] {
   if (ranking.state !== 'ranked')
-    return inputs.sites.slice(0, MOST_RANKED).map(({ siteId }) => ({ siteId, standing: 'unranked' }));
+    return inputs.sites.slice(0, MOST_RANKED).map(({ siteId }) => [siteId, 'unranked']);
+  const others = (list: readonly { siteId: string }[], standing: Standing): [string, Standing][] =>
+    list.slice(0, MOST_OTHERS).map(({ siteId }) => [siteId, standing]);
   return [
-    ...ranking.ranked.slice(0, MOST_RANKED).map(({ siteId, rank }) => ({
-      siteId,
-      standing: rank === 1 ? ('leads' as const) : ('ranked' as const),
-    })),
-    ...ranking.incomplete
-      .slice(0, MOST_OTHERS)
-      .map(({ siteId }) => ({ siteId, standing: 'incomplete' as const })),
-    ...ranking.setAside
-      .slice(0, MOST_OTHERS)
-      .map(({ siteId }) => ({ siteId, standing: 'set-aside' as const })),
+    ...ranking.ranked
+      .slice(0, MOST_RANKED)
+      .map(({ siteId, rank }): [string, Standing] => [siteId, rank === 1 ? 'leads' : 'ranked']),
+    ...others(ranking.incomplete, 'incomplete'),
+    ...others(ranking.setAside, 'set-aside'),
   ];
 }
 
-/** The sites a memo lists: up to 40 ranked ones and 20 each of those incomplete and set aside. */
-export function printedSites(facts: MemoFacts): PrintedSites {
-  const at = new Map(facts.inputs.sites.map((site, index) => [site.siteId, index]));
-  const sites = standings(facts).flatMap(({ siteId, standing }) => {
-    const index = at.get(siteId);
-    const site = index === undefined ? undefined : facts.inputs.sites[index];
-    return site && index !== undefined ? [{ site, result: facts.evaluation.sites[index], standing }] : [];
+/** The sites a memo lists, in the order it does: up to 40 ranked ones and 20 each of those incomplete and set aside. */
+export function listedSites(source: Source): { site: InputSite; standing: Standing }[] {
+  const known = new Map(source.inputs.sites.map((site) => [site.siteId, site]));
+  return standings(source).flatMap(([siteId, standing]) => {
+    const site = known.get(siteId);
+    return site ? [{ site, standing }] : [];
   });
+}
+
+/** The listed sites with their flights, and how many are left out. */
+export function printedSites(facts: MemoFacts): PrintedSites {
+  const sites = listedSites(facts).map((one) => ({ ...one, result: facts.results.get(one.site.siteId) }));
   return { sites, left: facts.inputs.sites.length - sites.length };
 }
 

@@ -1,24 +1,15 @@
-import { sunSynchronousInclination } from '#core/flight/orbit.ts';
 import { decimalsNeeded } from '#core/printed/figure.ts';
-import { fromKilometres, toDegrees } from '#core/units.ts';
+import { toDegrees } from '#core/units.ts';
 import { formatCount, formatNumber } from '#contract/format.ts';
 import type { MemoBlock, MemoTable } from '#contract/memo.ts';
 import type { InputOrbit } from '#contract/study-inputs.ts';
+import { inclinationOf } from '#contract/to-core.ts';
 import type { VehicleInput } from '#contract/vehicle.ts';
 import { cell, figure, figures, row, table, words } from './cells.ts';
 import type { MemoFacts } from './facts.ts';
 
 const needed = (value: number, least = 0): string =>
   formatNumber(value, Math.max(least, decimalsNeeded([value])));
-
-/** An orbit's inclination, entered or following from sun-synchrony; degrees. */
-export function inclinationDeg(orbit: InputOrbit): number | null {
-  if (orbit.inclinationDeg !== undefined) return orbit.inclinationDeg;
-  const found = sunSynchronousInclination(fromKilometres(orbit.perigeeKm), fromKilometres(orbit.apogeeKm));
-  return found.kind === 'none' ? null : toDegrees(found.inclination);
-}
-
-const PROFILES = { auto: 'auto', direct: 'direct', parking: 'parking' } as const;
 
 function orbitsTable(orbits: readonly InputOrbit[]): MemoTable {
   const flights = decimalsNeeded(orbits.map(({ flightsPerYear }) => flightsPerYear));
@@ -35,15 +26,15 @@ function orbitsTable(orbits: readonly InputOrbit[]): MemoTable {
       figures('Flights', 'a year', 9, true),
     ],
     orbits.map((orbit) => {
-      const inclination = inclinationDeg(orbit);
+      const inclination = orbit.inclinationDeg ?? toDegrees(inclinationOf(orbit));
       const entered = orbit.inclinationDeg !== undefined;
       return row([
         cell(orbit.code),
         cell(orbit.name === '' ? '–' : orbit.name),
         cell(needed(orbit.perigeeKm)),
         cell(needed(orbit.apogeeKm)),
-        cell(inclination === null ? '–' : entered ? needed(inclination, 1) : formatNumber(inclination, 3)),
-        cell(`${PROFILES[orbit.profile]}${entered ? '' : ', sun-synchronous'}`),
+        cell(entered ? needed(inclination, 1) : formatNumber(inclination, 3)),
+        cell(`${orbit.profile}${entered ? '' : ', sun-synchronous'}`),
         cell(needed(orbit.parkingKm)),
         cell(figure(orbit.flightsPerYear, flights)),
       ]);

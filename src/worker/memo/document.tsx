@@ -65,9 +65,9 @@ function Blocks({ items, width }: { items: readonly Item[]; width: number }) {
   return items.map(({ heading, block }, at) => (
     <Fragment key={at}>
       {heading !== null && (
-        <Text style={s.heading} minPresenceAhead={110} bookmark={heading}>
-          {heading}
-        </Text>
+        <View minPresenceAhead={110} bookmark={heading}>
+          <Text style={s.heading}>{heading}</Text>
+        </View>
       )}
       <Block block={block} width={width} />
     </Fragment>

@@ -1,0 +1,51 @@
+import { createHash } from 'node:crypto';
+import canonicalize from 'canonicalize';
+import type { EvaluateInput } from '#contract/evaluate.ts';
+import type { RankingSnapshot } from '#server/ranking/read-snapshot.ts';
+
+/**
+ * Everything a memo's figures follow from, without the study's own ids and in an order of its own, so that the same
+ * inputs are the same text wherever they were entered. `evaluate` may be posted to the interface as it is.
+ */
+function inputsOf({ inputs, criteria, values, study }: RankingSnapshot) {
+  const orbitCode = new Map(inputs.orbits.map(({ orbitId, code }) => [orbitId, code]));
+  const nameOf = new Map(criteria.map(({ id, name }) => [id, name]));
+  const evaluate: Omit<EvaluateInput, 'vehicle'> & { vehicle?: EvaluateInput['vehicle'] } = {
+    sites: inputs.sites.map(({ siteId: _, ...site }) => site),
+    orbits: inputs.orbits.map(({ orbitId: _, ...orbit }) => orbit),
+    ...(inputs.vehicle ? { vehicle: inputs.vehicle } : {}),
+    settings: inputs.settings,
+    others: false,
+  };
+  return {
+    evaluate,
+    criteria: criteria.map(({ id, name, unit, direction, source, quantity, orbitId, levels, limit }) => ({
+      name,
+      unit,
+      direction,
+      source,
+      quantity,
+      orbit: orbitId === null ? null : (orbitCode.get(orbitId) ?? null),
+      levels,
+      limit,
+      points: study.points[id] ?? 0,
+    })),
+    figures: Object.fromEntries(
+      inputs.sites.map(({ siteId, code }) => [
+        code,
+        Object.fromEntries(
+          Object.entries(values.get(siteId) ?? {}).flatMap(([id, value]) => {
+            const name = nameOf.get(id);
+            return name === undefined ? [] : [[name, value]];
+          }),
+        ),
+      ]),
+    ),
+  };
+}
+
+/** The inputs as canonical JSON (RFC 8785) in UTF-8, and its SHA-256 in hexadecimal. */
+export function canonicalInputs(snapshot: RankingSnapshot): { text: string; checksum: string } {
+  const text = canonicalize(inputsOf(snapshot)) ?? '';
+  return { text, checksum: createHash('sha256').update(text, 'utf8').digest('hex') };
+}
