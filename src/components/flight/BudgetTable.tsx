@@ -21,8 +21,12 @@ function Figure({ value, decimals = 0 }: { value: number | null; decimals?: numb
 
 function Payload({ result }: { result: FlightRow['result'] }) {
   if (result.shortfallMps !== null)
-    return <span className="fails">falls short by {formatNumber(result.shortfallMps)} m/s</span>;
-  return result.way === 'out-of-reach' ? <>out of reach</> : <Figure value={result.payloadKg} />;
+    return <span className="fails font-sans">falls short by {formatNumber(result.shortfallMps)} m/s</span>;
+  return result.way === 'out-of-reach' ? (
+    <span className="font-sans">out of reach</span>
+  ) : (
+    <Figure value={result.payloadKg} />
+  );
 }
 
 function BarAxis({ scale }: { scale: BudgetScale }) {
@@ -66,7 +70,7 @@ function Head({ scale, hasVehicle }: { scale: BudgetScale; hasVehicle: boolean }
         <th scope="col" className="num max-tablet:hidden">
           Required speed<span className="unit">m/s</span>
         </th>
-        <th scope="col" className="num">
+        <th scope="col" className="num max-phone:hidden">
           Turn<span className="unit">m/s</span>
         </th>
         <th scope="col" className="max-sheet:hidden">
@@ -125,7 +129,7 @@ export function BudgetTable({ rows, losses, hasVehicle, chosenCode, onChoose }: 
               <td className="num max-tablet:hidden">
                 <Figure value={result.requiredSpeedMps} />
               </td>
-              <td className="num">
+              <td className="num max-phone:hidden">
                 <Figure value={turnCostMps(result)} />
               </td>
               <td className="max-sheet:hidden">

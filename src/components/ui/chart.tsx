@@ -114,16 +114,19 @@ interface ChartProps {
 export function Chart({ label, width, height, children, table }: ChartProps) {
   return (
     <>
-      <svg
-        className="chart"
-        role="img"
-        aria-label={label}
-        width={width}
-        height={height}
-        viewBox={`0 0 ${width} ${height}`}
-      >
-        {children}
-      </svg>
+      {/* On a narrow screen a chart keeps its size, so that its words stay readable, and scrolls in its place. */}
+      <div className="chart-scroll" role="region" aria-label="Chart, scrolls sideways" tabIndex={0}>
+        <svg
+          className="chart"
+          role="img"
+          aria-label={label}
+          width={width}
+          height={height}
+          viewBox={`0 0 ${width} ${height}`}
+        >
+          {children}
+        </svg>
+      </div>
       {table && (
         <details className="chart-as-table">
           <summary>As a table</summary>
