@@ -67,7 +67,7 @@ function ListHead({ row, sheet }: { row: RankingRow; sheet: Sheet }) {
   const figure = (value: number): string => formatNumber(value, sheet.decimals);
   return (
     <div className="rk-list-head">
-      <span className="rk-list-rank">
+      <span className="rk-list-rank" data-range={row.kind === 'incomplete' ? '' : undefined}>
         {row.kind === 'ranked' && formatNumber(row.rank)}
         {row.kind === 'incomplete' && rankRange(row).replace(' to ', '–')}
         {row.kind === 'set-aside' && <Icon name="set-aside" />}
