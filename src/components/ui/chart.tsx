@@ -115,7 +115,7 @@ export function Chart({ label, width, height, children, table }: ChartProps) {
   return (
     <>
       {/* On a narrow screen a chart keeps its size, so that its words stay readable, and scrolls in its place. */}
-      <div className="chart-scroll" role="region" aria-label="Chart, scrolls sideways" tabIndex={0}>
+      <div className="chart-scroll" role="region" aria-label={`Chart: ${label}`} tabIndex={0}>
         <svg
           className="chart"
           role="img"
