@@ -80,11 +80,11 @@ function constantsTable(): MemoTable {
   return table(
     'Constants',
     [
-      words('Symbol', 9, true),
-      words('Constant', 33, true),
-      figures('Value', '', 22, true),
-      words('Unit', 10, true),
-      words('Source', 40),
+      words('Symbol', 8, true),
+      words('Constant', 29, true),
+      figures('Value', '', 19, true),
+      words('Unit', 8, true),
+      words('Source', 50),
     ],
     Object.values(constants).map(({ symbol, name, value, unit, source }) =>
       row([cell(symbol), cell(name), cell(constantText(value)), cell(unit), cell(references[source])]),

@@ -66,9 +66,9 @@ function partings(ranking: Ranking, leader: RankedSite, second: RankedSite, valu
       .slice(0, 2)
       .map(say),
     behind: sorted
-      .reverse()
+      .toReversed()
       .filter(({ own, other }) => own < other)
-      .slice(0, 2)
+      .slice(0, 1)
       .map(say),
   };
 }

@@ -26,7 +26,7 @@ function heaviest(ranking: Ranking, most: number): Placed[] {
 
 /** Criteria whose figures stand beside the ranks on the first page. */
 const BESIDE_RANKS = 6;
-const WORST_NOTE = '“worst”: an orbit is out of reach or falls short, so it counts at the worst level.';
+const WORST_NOTE = '“worst”: an orbit is out of reach or falls short, which counts at the worst level.';
 
 function figureText(facts: MemoFacts, contribution: Contribution | undefined, place: number): string {
   if (!contribution) return '–';
@@ -74,9 +74,7 @@ function ranksTable(facts: MemoFacts): MemoTable {
       ...othersInWords(ranking),
       ...together([
         ...(unshown > 0
-          ? [
-              `${formatCount(unshown, 'lighter criterion', 'lighter criteria')} not shown here; every figure stands under Criteria.`,
-            ]
+          ? [`${formatCount(unshown, 'lighter criterion', 'lighter criteria')}: see Criteria and ranking.`]
           : []),
         ...worstNotes(ranked),
         ...leftOut(ranking.counts.ranked - ranked.length),

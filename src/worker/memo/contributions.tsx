@@ -5,14 +5,14 @@ import { INK, MONO, RULE, TYPE } from './theme.ts';
 
 const NAME = 130;
 const BAR = 296;
-const HEIGHT = 9;
-const ROW = 13;
+const HEIGHT = 8.5;
+const ROW = 12;
 /** Up to so many bars stay on one page. */
 const WHOLE = 24;
 const TICKS = [0, 0.25, 0.5, 0.75, 1];
 
 const s = StyleSheet.create({
-  figure: { marginBottom: 8 },
+  figure: { marginBottom: 2 },
   caption: { ...TYPE.caption, marginTop: 5, marginBottom: 2 },
   row: { flexDirection: 'row', alignItems: 'center', minHeight: ROW },
   name: { ...TYPE.table, width: NAME, paddingRight: 6 },

@@ -95,7 +95,7 @@ export function MemoDocument({ model }: { model: MemoModel }) {
       creationDate={day}
       modificationDate={day}
     >
-      <Page size={size} style={pageStyle(FIRST_FOOT + 4)}>
+      <Page size={size} style={pageStyle(FIRST_FOOT)}>
         <FirstFoot block={model.titleBlock} caution={caution} paperHeight={paper.height} />
         <Head status={model.status} />
         <Foot text={model.foot} paperHeight={paper.height} />

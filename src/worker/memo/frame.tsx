@@ -8,7 +8,7 @@ const FOOT_LINE = 5 * MM;
 const FOOT_HEIGHT = 12;
 const TITLE_BLOCK = 13 * MM;
 /** Title block and the caution over it. */
-export const FIRST_FOOT = TITLE_BLOCK + 32;
+export const FIRST_FOOT = TITLE_BLOCK + 30;
 
 const s = StyleSheet.create({
   head: {
