@@ -73,7 +73,7 @@ const settings = {
   limit: CriterionLimit.nullable().default(null),
 };
 
-const ComputedInput = z
+export const ComputedInput = z
   .strictObject({
     source: z.literal('computed'),
     quantity: z.enum(QUANTITY_KEYS),
@@ -93,7 +93,7 @@ const ComputedInput = z
   })
   .check(levelsFit);
 
-const EnteredInput = z
+export const EnteredInput = z
   .strictObject({ source: z.enum(['entered', 'text']), name, unit: unit.default(''), direction, ...settings })
   .check(levelsFit);
 

@@ -1,0 +1,206 @@
+import { useMemo, useState } from 'react';
+import { useAddressParam } from '#components/live/address.ts';
+import { useFinding } from '#components/live/hooks.ts';
+import { sheetOf } from '#components/ranking/columns.ts';
+import {
+  BeforeRanks,
+  ConnectionNote,
+  EstimatesCaution,
+  FiguresNotRead,
+} from '#components/ranking/Notices.tsx';
+import { SaveNote } from '#components/ranking/SaveNote.tsx';
+import { useRanking } from '#components/ranking/use-ranking.ts';
+import { PATTERNS } from '#components/ranking/ValueBar.tsx';
+import { inputLockOf, lockOf, type Viewer } from '#components/ranking/viewer.ts';
+import {
+  Button,
+  ChartPatterns,
+  EmptyState,
+  Finding,
+  Notice,
+  Segmented,
+  Stale,
+  toast,
+} from '#components/ui/index.ts';
+import type { Criterion } from '#contract/criterion.ts';
+import { MOST_POINTS } from '#contract/points.ts';
+import type { RankingStart } from '#contract/ranking.ts';
+import { AddCriterion, type OrbitChoice } from './AddCriterion.tsx';
+import { CriteriaTable } from './CriteriaTable.tsx';
+import { CriterionEditor } from './CriterionEditor.tsx';
+import { Effect } from './Effect.tsx';
+import { useCriteria } from './use-criteria.ts';
+import { criteriaFinding, criteriaWhy } from './words.ts';
+
+interface CriteriaScreenProps {
+  studyId: string;
+  start: RankingStart;
+  criteria: Criterion[];
+  orbits: OrbitChoice[];
+  viewer: Viewer;
+  address: { weights: string | null; criterion: string | null };
+}
+
+export function CriteriaScreen({ studyId, start, criteria, orbits, viewer, address }: CriteriaScreenProps) {
+  const [whoseParam, setWhose] = useAddressParam('weights', address.weights);
+  const [chosen, setChosen] = useAddressParam('criterion', address.criterion);
+  const [adding, setAdding] = useState(false);
+  const whose = whoseParam === 'mine' ? 'mine' : 'study';
+  const list = useCriteria(studyId, criteria);
+  const live = useRanking(studyId, start, whose);
+  const { ranking, model, weights } = live;
+  const sheet = useMemo(() => sheetOf(ranking, model), [ranking, model]);
+  const inputsLocked = inputLockOf(viewer);
+  const weightsLocked = lockOf(viewer, whose);
+  const finding = criteriaFinding(ranking);
+  useFinding(finding);
+  const open = list.items.find(({ id }) => id === chosen) ?? list.items[0];
+  const refresh = (): void => {
+    live.again();
+    weights.refresh();
+  };
+  const remove = async (criterion: Criterion): Promise<void> => {
+    if (!(await list.remove(criterion))) return;
+    setChosen(null);
+    refresh();
+    toast(`${criterion.name} removed.`);
+  };
+  return (
+    <>
+      <svg className="rk-patterns" width="0" height="0" aria-hidden="true">
+        <ChartPatterns id={PATTERNS} />
+      </svg>
+      <Finding
+        why={<p>{criteriaWhy(list.items)}</p>}
+        actions={
+          <Button kind="primary" icon="add" notYet={inputsLocked} onClick={() => setAdding(true)}>
+            Add criterion
+          </Button>
+        }
+      >
+        {finding}
+      </Finding>
+      {live.error && <FiguresNotRead error={live.error} onAgain={live.again} />}
+      {list.failure && (
+        <Notice
+          fact={list.failure.message}
+          requestId={list.failure.requestId}
+          actions={
+            <Button size="small" onClick={list.forget}>
+              Go on
+            </Button>
+          }
+        >
+          The criteria are shown as they now are.
+        </Notice>
+      )}
+      {list.items.length === 0 ? (
+        <EmptyState
+          fact="No criteria yet."
+          actions={
+            <Button icon="add" notYet={inputsLocked} onClick={() => setAdding(true)}>
+              Add criterion
+            </Button>
+          }
+        >
+          Add what sites are weighed by: computed from flight mechanics, such as payload a year, or entered
+          for each site, such as cost. Columns of an uploaded CSV become criteria by themselves.
+        </EmptyState>
+      ) : (
+        <>
+          <div className="rk-bar">
+            <Segmented
+              legend="Weights"
+              value={whose}
+              onChange={(value) => setWhose(value === 'mine' ? 'mine' : null)}
+              segments={[
+                { value: 'study', name: 'Study’s weights' },
+                {
+                  value: 'mine',
+                  name: 'Mine',
+                  notYet: viewer.role === 'reader' ? 'A reader keeps no weights of their own.' : undefined,
+                },
+              ]}
+            />
+            {live.staleRevision !== null && <Stale revision={live.staleRevision} />}
+            <ConnectionNote />
+          </div>
+          <div className="cr-columns">
+            <div>
+              <CriteriaTable
+                items={list.items}
+                columns={sheet.columns}
+                weights={weights}
+                weightsLocked={weightsLocked}
+                inputsLocked={inputsLocked}
+                chosen={open?.id ?? null}
+                onChoose={setChosen}
+                onMove={(criterion, position) => void list.move(criterion, position).then(refresh)}
+              />
+              {weightsLocked === undefined && (
+                <div className="mt-3">
+                  <SaveNote
+                    set={weights}
+                    what={whose === 'mine' ? 'your weights' : 'the study’s weights'}
+                    criteria={ranking.criteria}
+                  />
+                </div>
+              )}
+              {open && (
+                <div className="mt-9">
+                  <CriterionEditor
+                    key={open.id}
+                    studyId={studyId}
+                    criterion={open}
+                    column={sheet.columns.find(({ criterion }) => criterion.id === open.id)}
+                    figures={model?.figures ?? null}
+                    leader={ranking.ranked[0]?.siteId}
+                    locked={inputsLocked}
+                    onKept={(criterion) => {
+                      list.take(criterion);
+                      live.again();
+                    }}
+                    onRemove={() => void remove(open)}
+                  />
+                </div>
+              )}
+            </div>
+            <div className="cr-effect">
+              {ranking.state !== 'ranked' && ranking.state !== 'no-criteria' && (
+                <BeforeRanks
+                  state={ranking.state}
+                  studyId={studyId}
+                  onEven={
+                    weightsLocked === undefined
+                      ? () =>
+                          weights.give(
+                            Object.fromEntries(ranking.criteria.map(({ id }) => [id, MOST_POINTS])),
+                          )
+                      : undefined
+                  }
+                />
+              )}
+              <Effect studyId={studyId} sheet={sheet} before={start.ranking} />
+            </div>
+          </div>
+        </>
+      )}
+      <div className="mt-9">
+        <EstimatesCaution />
+      </div>
+      {adding && (
+        <AddCriterion
+          studyId={studyId}
+          orbits={orbits}
+          onClose={() => setAdding(false)}
+          onAdded={(criterion) => {
+            list.take(criterion);
+            setAdding(false);
+            setChosen(criterion.id);
+            refresh();
+          }}
+        />
+      )}
+    </>
+  );
+}
