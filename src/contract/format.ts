@@ -33,12 +33,13 @@ export function formatSigned(value: number, decimals = 0): string {
   return value > 0 && /[1-9]/.test(text) ? `+${text}` : text;
 }
 
+const fullFormat = new Intl.NumberFormat('en-US', {
+  maximumSignificantDigits: 15,
+  maximumFractionDigits: 15,
+});
+
 /** The full figure for hover, focus and exports: every digit that the number holds, up to 15 significant ones. */
-export function formatFull(value: number): string {
-  return withTrueMinus(
-    new Intl.NumberFormat('en-US', { maximumSignificantDigits: 15, maximumFractionDigits: 15 }).format(value),
-  );
-}
+export const formatFull = (value: number): string => withTrueMinus(fullFormat.format(value));
 
 /** A share of one to three places without the leading zero, as in the second line of a ranking's cell: .905, 1.000 */
 export function formatShare(value: number): string {

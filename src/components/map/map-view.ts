@@ -102,6 +102,7 @@ export class MapView {
   }
 
   setProjection(projection: Projection): void {
+    if (projection === this.#projection) return;
     this.#projection = projection;
     this.map.setProjection({ type: projection === 'globe' ? 'globe' : 'mercator' });
     this.redraw();

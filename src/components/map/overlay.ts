@@ -98,10 +98,12 @@ export function drawOverlay(canvas: HTMLCanvasElement, map: Map, state: OverlayS
   const pen = canvas.getContext('2d');
   if (!pen) return;
   const ratio = window.devicePixelRatio;
-  const [width, height] = [canvas.clientWidth, canvas.clientHeight];
-  canvas.width = Math.round(width * ratio);
-  canvas.height = Math.round(height * ratio);
+  const [width, height] = [canvas.clientWidth, canvas.clientHeight].map((px) => Math.round(px * ratio));
+  // Setting a size, even the same one, makes the canvas anew: only where it differs.
+  if (canvas.width !== width) canvas.width = width ?? 0;
+  if (canvas.height !== height) canvas.height = height ?? 0;
   pen.setTransform(ratio, 0, 0, ratio, 0, 0);
+  pen.clearRect(0, 0, canvas.clientWidth, canvas.clientHeight);
   const inner = innerOf(canvas);
   const globe = state.projection === 'globe';
   const { layers, flownAzimuthDeg, chosenId } = state.scene;

@@ -33,9 +33,10 @@ import { useEditing } from './use-editing.ts';
 import { useFlights } from './use-flights.ts';
 import { useSites } from './use-sites.ts';
 
-const SiteMap = lazy(() =>
-  import('#components/map/SiteMap.tsx').then((module) => ({ default: module.SiteMap })),
-);
+// Asked for as soon as this file runs in a browser, beside the first drawing, not after it.
+const readMap = () => import('#components/map/SiteMap.tsx');
+const map = typeof window === 'undefined' ? null : readMap();
+const SiteMap = lazy(() => (map ?? readMap()).then((module) => ({ default: module.SiteMap })));
 
 /** What the address asks for. */
 export interface SitesAddress {
@@ -190,7 +191,7 @@ export function SitesView({ studyId, list, inputs: initialInputs, address, locke
     addSite.current?.focus();
   };
 
-  const map = (
+  const mapPart = (
     <div className="sites-map">
       {inBrowser && (
         <Suspense fallback={<p role="status">Reading the map…</p>}>
@@ -253,7 +254,7 @@ export function SitesView({ studyId, list, inputs: initialInputs, address, locke
         </Notice>
       )}
       <div className="sites-split" data-view={view}>
-        {view !== 'table' && map}
+        {view !== 'table' && mapPart}
         <div className="sites-side">
           {view !== 'map' && (
             <>
