@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useRef, useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { ApiError, send } from '#components/live/api.ts';
 import { announceSaved, type Saved } from '#components/live/saved.ts';
@@ -32,10 +32,11 @@ const blank = (code: string): OrbitFields => ({
 /** A new orbit for the manifest: nothing is saved until it is added. */
 export function AddOrbit({ studyId, code, onAdded, onClose }: AddProps) {
   const form = useForm<OrbitFields>({ defaultValues: blank(code) });
+  const reached = useRef(new Set<keyof OrbitFields>());
   const [busy, setBusy] = useState(false);
   const [failure, setFailure] = useState<ApiError | null>(null);
   const add = async () => {
-    const input = checkForm(form, 'all');
+    const input = checkForm(form);
     if (!input) return;
     setBusy(true);
     setFailure(null);
@@ -58,7 +59,7 @@ export function AddOrbit({ studyId, code, onAdded, onClose }: AddProps) {
           void add();
         }}
       >
-        <OrbitFieldset form={form} onLeave={() => checkForm(form, 'touched')} />
+        <OrbitFieldset form={form} onLeave={(field) => checkForm(form, reached.current.add(field))} />
         {failure && (
           <div className="mt-4">
             <Notice fact={failure.message} requestId={failure.requestId}>

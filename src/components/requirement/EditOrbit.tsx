@@ -53,7 +53,7 @@ export function EditOrbit({ studyId, orbit, onKept, onClose }: EditProps) {
   });
   const basedOn = useKeptValues(form, fields, autosave.settled);
   const leave = () => {
-    const input = checkForm(form, 'all');
+    const input = checkForm(form);
     if (!input) return;
     const change = changesOf(orbit, input);
     if (Object.keys(change).length === 0) return;

@@ -14,7 +14,7 @@ const PROFILES = (Object.keys(PROFILE_NAMES) as StudyOrbit['profile'][]).map((va
 interface FieldsetProps {
   form: UseFormReturn<OrbitFields>;
   /** Called when a field is left. */
-  onLeave: () => void;
+  onLeave: (field: keyof OrbitFields) => void;
 }
 
 type NumberName = 'perigeeKm' | 'apogeeKm' | 'inclinationDeg' | 'parkingKm' | 'flightsPerYear';
@@ -29,13 +29,13 @@ export function OrbitFieldset({ form, onLeave }: FieldsetProps) {
   const text = (name: 'name' | 'code') => ({
     label: ORBIT_LABELS[name],
     error: errors[name],
-    ...form.register(name, { onBlur: onLeave }),
+    ...form.register(name, { onBlur: () => onLeave(name) }),
   });
   const figure = (name: NumberName, unit?: string) => ({
     label: ORBIT_LABELS[name],
     unit,
     error: errors[name],
-    ...form.register(name, { ...asTypedNumber, onBlur: onLeave }),
+    ...form.register(name, { ...asTypedNumber, onBlur: () => onLeave(name) }),
   });
   const found = sunSynchronousDeg(perigeeKm, apogeeKm);
   return (
@@ -59,7 +59,7 @@ export function OrbitFieldset({ form, onLeave }: FieldsetProps) {
             onChange={(event) => {
               field.onChange(event.target.checked);
               form.clearErrors(['inclinationDeg', 'sunSynchronous']);
-              onLeave();
+              onLeave('sunSynchronous');
             }}
           />
         )}
@@ -82,7 +82,7 @@ export function OrbitFieldset({ form, onLeave }: FieldsetProps) {
         choices={PROFILES}
         error={errors.profile}
         hint="Direct is allowed where the perigee is no higher than the parking altitude"
-        {...form.register('profile', { onChange: onLeave })}
+        {...form.register('profile', { onChange: () => onLeave('profile') })}
       />
       <div className="grid grid-cols-2 gap-4">
         <NumberField

@@ -5,8 +5,8 @@ import type { VehicleFields } from './fields.ts';
 export interface VehicleFormParts {
   form: UseFormReturn<VehicleFields>;
   locked: boolean;
-  /** Called when a field is left. */
-  onLeave: () => void;
+  /** Called when a field is left, or something without a field of its own has changed. */
+  onLeave: (field?: FieldPath<VehicleFields>) => void;
 }
 
 interface FigureProps extends VehicleFormParts {
@@ -26,7 +26,7 @@ export function Figure({ form, locked, onLeave, name, ...looks }: FigureProps) {
       {...looks}
       error={form.getFieldState(name, form.formState).error}
       readOnly={locked}
-      {...form.register(name, { ...asTypedNumber, onBlur: onLeave })}
+      {...form.register(name, { ...asTypedNumber, onBlur: () => onLeave(name) })}
     />
   );
 }

@@ -20,18 +20,16 @@ interface VehicleFormProps {
 
 const same = (a: unknown, b: unknown): boolean => JSON.stringify(a) === JSON.stringify(b);
 
-/** Puts what the schema refuses beside its fields: those reached so far, or all. */
+/** Puts what the schema refuses beside its fields: those left so far, or all. */
 function showErrors(
   form: UseFormReturn<VehicleFields>,
   issues: readonly { path: PropertyKey[]; message: string }[],
-  which: 'touched' | 'all',
+  reached: ReadonlySet<string> | null,
 ): void {
   form.clearErrors();
   for (const { path, message } of issues) {
     const field = path[0] === 'boosters' && path.length === 1 ? 'boosters.count' : path.join('.');
-    const name = field as FieldPath<VehicleFields>;
-    if (which === 'all' || form.getFieldState(name, form.formState).isTouched)
-      form.setError(name, { message });
+    if (!reached || reached.has(field)) form.setError(field as FieldPath<VehicleFields>, { message });
   }
 }
 
@@ -59,12 +57,15 @@ function useSavedVehicle(
 /** Stages, boosters, fairing, losses and reserve of a vehicle; checked on leaving a field, by the interface's schema. */
 export function VehicleForm({ vehicle, locked, onChange, onDraft }: VehicleFormProps) {
   const form = useForm<VehicleFields>({ defaultValues: fieldsOf(vehicle) });
+  const [reached, setReached] = useState<ReadonlySet<string>>(new Set());
   const [waits, setWaits] = useState(false);
   const basedOn = useSavedVehicle(form, vehicle);
-  const leave = () => {
+  const leave = (field?: FieldPath<VehicleFields>) => {
     if (locked) return;
+    const left = field ? new Set([...reached, field]) : reached;
+    setReached(left);
     const read = readVehicle(form.getValues(), vehicle);
-    showErrors(form, read.error?.issues ?? [], vehicle ? 'all' : 'touched');
+    showErrors(form, read.error?.issues ?? [], vehicle ? null : left);
     setWaits(!read.success);
     onDraft?.(read.success ? read.data : null);
     if (read.success && !same(read.data, vehicle)) onChange(read.data, basedOn());
@@ -83,7 +84,7 @@ export function VehicleForm({ vehicle, locked, onChange, onDraft }: VehicleFormP
           readOnly={locked}
           maxLength={120}
           error={form.formState.errors.name}
-          {...form.register('name', { onBlur: leave })}
+          {...form.register('name', { onBlur: () => leave('name') })}
         />
       </div>
       <div>
@@ -100,7 +101,7 @@ export function VehicleForm({ vehicle, locked, onChange, onDraft }: VehicleFormP
             name: `after the burn of stage ${i + 1}`,
           }))}
           error={form.formState.errors.fairingLeavesAfterStage}
-          {...form.register('fairingLeavesAfterStage', { setValueAs: Number, onChange: leave })}
+          {...form.register('fairingLeavesAfterStage', { setValueAs: Number, onChange: () => leave() })}
         />
         <Figure
           {...parts}
@@ -113,7 +114,7 @@ export function VehicleForm({ vehicle, locked, onChange, onDraft }: VehicleFormP
       <LossFields {...parts} />
       {waits && (
         <p className="text-sm text-ink-2" role="status">
-          Not saved yet: the vehicle is saved as soon as every field fits.
+          Not every field fits yet. Until it does, nothing of this is saved.
         </p>
       )}
     </form>
