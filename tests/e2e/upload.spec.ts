@@ -1,6 +1,7 @@
 import { readFile } from 'node:fs/promises';
 import { newStudy } from './support/studies.ts';
 import { expect, test } from './support/test.ts';
+import { expectSoon } from '#tests/support/soon.ts';
 
 test('a file with errors is read, put right, committed, undone, and had back', async ({ open, baseURL }) => {
   const page = await open({ person: 'engineer' });
@@ -79,12 +80,12 @@ test('10,000 rows are read and added while the page answers', async ({ open, bas
   const panel = page.locator('#upload');
   const started = Date.now();
   await panel.locator('input[type=file]').setInputFiles({ name: 'many.csv', mimeType: 'text/csv', buffer });
-  await expect(panel.getByText('10,000 rows read')).toBeVisible();
-  expect(Date.now() - started).toBeLessThan(3_000);
+  await expect(panel.getByText('10,000 rows read')).toBeVisible({ timeout: 15_000 });
+  expectSoon('preview of 10,000 rows', Date.now() - started, 3_000);
   // All of the page's work together stays under the half second after which progress would have to be shown.
-  expect((await mainThreadS()) - before).toBeLessThan(0.5);
+  expectSoon('the page’s own work', ((await mainThreadS()) - before) * 1_000, 500);
   const sent = Date.now();
   await panel.getByRole('button', { name: 'Add 10,000 good rows' }).click();
-  await expect(page.getByText('10,000 sites added from many.csv')).toBeVisible({ timeout: 10_000 });
-  expect(Date.now() - sent).toBeLessThan(8_000);
+  await expect(page.getByText('10,000 sites added from many.csv')).toBeVisible({ timeout: 30_000 });
+  expectSoon('commit of 10,000 rows', Date.now() - sent, 5_000);
 });
