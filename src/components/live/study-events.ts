@@ -32,15 +32,21 @@ const REOPEN_MS = 5_000;
 
 function open(tell: (message: Message) => void): void {
   const source = new EventSource('/api/v1/events');
-  source.onopen = () => tell({ kind: 'connection', connection: 'open' });
+  let numbered = false;
+  source.onopen = () => {
+    tell({ kind: 'connection', connection: 'open' });
+    // Before its first event a stream has no number to resume from: what it may have missed is read again.
+    if (!numbered) tell({ kind: 'gap' });
+  };
   source.onerror = () => {
     tell({ kind: 'connection', connection: 'lost' });
     // EventSource reconnects after a broken connection, but not after an answer that was an error.
     if (source.readyState === EventSource.CLOSED) setTimeout(() => open(tell), REOPEN_MS);
   };
-  source.addEventListener('change', (event) =>
-    tell({ kind: 'change', change: JSON.parse(event.data) as StudyChange }),
-  );
+  source.addEventListener('change', (event) => {
+    numbered = true;
+    tell({ kind: 'change', change: JSON.parse(event.data) as StudyChange });
+  });
   source.addEventListener('gap', () => tell({ kind: 'gap' }));
 }
 
@@ -58,10 +64,7 @@ function start(): void {
   started = true;
   const channel = new BroadcastChannel(NAME);
   channel.onmessage = (event: MessageEvent<Message>) => deliver(event.data);
-  void navigator.locks.request(NAME, () => {
-    deliver({ kind: 'gap' });
-    return lead(channel);
-  });
+  void navigator.locks.request(NAME, () => lead(channel));
 }
 
 function listen(listener: (message: Message) => void): () => void {
