@@ -46,12 +46,13 @@ function watch(page: Page, origin: string): Complaints {
     if (!patterns.some((pattern) => pattern.test(text))) list.push(text);
   };
   page.on('console', (message) => {
-    if (['error', 'warning'].includes(message.type())) complain(`${message.type()}: ${message.text()}`);
+    if (['error', 'warning'].includes(message.type()))
+      complain(`${message.type()}: ${message.text()} (${message.location().url})`);
   });
   page.on('pageerror', (error) => complain(`exception: ${error.message}`));
   page.on('request', (request) => {
     const url = request.url();
-    if (!url.startsWith(`${origin}/`) && !/^(data|blob):/.test(url)) complain(`left the origin: ${url}`);
+    if (/^(https?|wss?):/.test(url) && !url.startsWith(`${origin}/`)) complain(`left the origin: ${url}`);
   });
   return { list, expect: (pattern) => void patterns.push(pattern) };
 }
