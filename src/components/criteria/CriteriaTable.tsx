@@ -35,10 +35,12 @@ export function CriteriaTable(props: CriteriaTableProps) {
           <thead>
             <tr>
               <th scope="col">Criterion</th>
-              <th scope="col">
+              <th scope="col" className="cr-wide-only">
                 Levels<span className="unit">value 0 to 1</span>
               </th>
-              <th scope="col">Limit</th>
+              <th scope="col" className="cr-wide-only">
+                Limit
+              </th>
               <th scope="col">
                 Points<span className="unit">0 to {MOST_POINTS}</span>
               </th>
@@ -90,8 +92,8 @@ function CriterionRow({ criterion, column, ...props }: RowProps) {
           </span>
         </button>
       </th>
-      <td>{column ? levelsInWords(column.criterion) : '–'}</td>
-      <td>{criterion.source === 'text' ? '–' : limitInWords(criterion)}</td>
+      <td className="cr-wide-only">{column ? levelsInWords(column.criterion) : '–'}</td>
+      <td className="cr-wide-only">{criterion.source === 'text' ? '–' : limitInWords(criterion)}</td>
       <td>
         {criterion.source === 'text' ? (
           '–'

@@ -9,7 +9,7 @@ import { rowsOf, type RankingRow } from '#contract/ranking-rows.ts';
 import type { Ranking } from '#contract/ranking.ts';
 
 const SHOWN = 12;
-const BAR_WIDTH = 190;
+const BAR_WIDTH = 150;
 const BAR_HEIGHT = 30;
 
 interface EffectProps {
@@ -28,28 +28,30 @@ export function Effect({ studyId, sheet, before }: EffectProps) {
   return (
     <Panel title="Effect on the ranking" caption={<span role="status">{findingText(ranking)}</span>}>
       {ranking.state === 'ranked' && (
-        <table className="table" data-dense="">
-          <thead>
-            <tr>
-              <th scope="col">Rank</th>
-              <th scope="col">Candidate site</th>
-              <th scope="col">
-                Overall value<span className="unit">0 to 1</span>
-              </th>
-            </tr>
-          </thead>
-          <tbody>
-            {rows.map((row, index) => (
-              <EffectRow
-                key={row.siteId}
-                row={row}
-                sheet={sheet}
-                earlier={earlier.get(row.siteId)}
-                lettered={index === 0}
-              />
-            ))}
-          </tbody>
-        </table>
+        <div className="table-scroll" role="region" aria-label="Effect on the ranking" tabIndex={0}>
+          <table className="table" data-dense="">
+            <thead>
+              <tr>
+                <th scope="col">Rank</th>
+                <th scope="col">Candidate site</th>
+                <th scope="col">
+                  Overall value<span className="unit">0 to 1</span>
+                </th>
+              </tr>
+            </thead>
+            <tbody>
+              {rows.map((row, index) => (
+                <EffectRow
+                  key={row.siteId}
+                  row={row}
+                  sheet={sheet}
+                  earlier={earlier.get(row.siteId)}
+                  lettered={index === 0}
+                />
+              ))}
+            </tbody>
+          </table>
+        </div>
       )}
       <p className="caption pt-2">
         {countsInWords(ranking.counts)}

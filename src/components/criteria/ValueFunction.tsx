@@ -12,10 +12,11 @@ const HEIGHT = 250;
 const LEFT = 44;
 const RIGHT = 12;
 const TOP = 14;
-const FLOOR = 176;
+const FLOOR = 168;
 /** Codes stand in rows under the axis, so that neighbours do not run into each other. */
-const CODE_ROWS = 3;
+const CODE_ROWS = 4;
 const CODE_STEP = 13;
+const CODE_WIDTH = 24;
 const MOST_NAMED = 24;
 const HANDLE = 10;
 /** Room left and right of the outermost figure, as a share of the span. */
@@ -122,6 +123,7 @@ interface CandidatesProps {
 
 function Candidates({ candidates, leader, x, y }: CandidatesProps) {
   const named = candidates.length <= MOST_NAMED;
+  const rows = codeRows(candidates.map(({ figure }) => x(figure)));
   return (
     <g aria-hidden="true">
       {candidates.map(({ site, figure, value }, index) => {
@@ -137,7 +139,7 @@ function Candidates({ candidates, leader, x, y }: CandidatesProps) {
               <text
                 className={leads ? 'signal-text vf-code' : 'vf-code'}
                 x={at}
-                y={FLOOR + 17 + (index % CODE_ROWS) * CODE_STEP}
+                y={FLOOR + 17 + (rows[index] ?? 0) * CODE_STEP}
                 textAnchor="middle"
               >
                 {site.code}
@@ -148,6 +150,17 @@ function Candidates({ candidates, leader, x, y }: CandidatesProps) {
       })}
     </g>
   );
+}
+
+/** The first row in which a code does not touch the one before it; where all are taken, the one with most room. */
+function codeRows(places: readonly number[]): number[] {
+  const ends = Array.from({ length: CODE_ROWS }, () => -Infinity);
+  return places.map((place) => {
+    const free = ends.findIndex((end) => place - end >= CODE_WIDTH);
+    const row = free >= 0 ? free : ends.indexOf(Math.min(...ends));
+    ends[row] = place;
+    return row;
+  });
 }
 
 interface LeaderNoteProps {

@@ -10,7 +10,7 @@ export function ColumnHead({ column }: { column: CriterionColumn }) {
       <KeyLetter letter={letter} />
       <span className="rk-head-name">{criterion.name}</span>
       {criterion.unit && <span className="unit">{criterion.unit}</span>}
-      <span className="unit">
+      <span className="unit rk-head-weight">
         {criterion.direction === 'more' ? '↑ more' : '↓ less'}{' '}
         <b className="num">
           <span className="sr-only">weight </span>

@@ -7,7 +7,7 @@ import { KeyLetter } from '#components/ui/States.tsx';
 import { closedSums } from '#core/printed/closing.ts';
 import { Reasons } from './cells.tsx';
 import type { Sheet } from './columns.ts';
-import { FigureText } from './FigureCell.tsx';
+import { FigureText, saysInWords } from './FigureCell.tsx';
 
 interface ContributionsProps {
   row: RankingRow;
@@ -51,8 +51,10 @@ export function Contributions({ row, sheet, studyId }: ContributionsProps) {
                   <KeyLetter letter={letter} /> {criterion.name}
                 </th>
                 <td className="num">
-                  <FigureText contribution={contribution} decimals={column.decimals} />{' '}
-                  <span className="rk-unit">{criterion.unit}</span>
+                  <FigureText contribution={contribution} decimals={column.decimals} />
+                  {contribution.value !== null && !saysInWords(contribution) && (
+                    <span className="rk-unit"> {criterion.unit}</span>
+                  )}
                 </td>
                 <td className="num">{contribution.value === null ? '–' : formatShare(contribution.value)}</td>
                 <td className="num">{formatNumber(column.weight, column.weightDecimals)}</td>

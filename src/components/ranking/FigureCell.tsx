@@ -40,7 +40,7 @@ export function FigureCell({ contribution, decimals, fails = false }: FigureCell
 }
 
 /** Where nothing can be flown, words stand in place of figure and value: both count as the worst. */
-const saysInWords = ({ figure, note }: Contribution): boolean =>
+export const saysInWords = ({ figure, note }: Contribution): boolean =>
   figure === null || (figure === 0 && note !== null);
 
 /** The figure itself, or the words that stand where a number would mislead. */

@@ -1,5 +1,6 @@
 import {
   CellStyleModule,
+  ClientSideRowModelApiModule,
   ClientSideRowModelModule,
   ColumnApiModule,
   ModuleRegistry,
@@ -24,6 +25,7 @@ import { applyGridView, gridViewOf, type GridView } from './grid-view.ts';
 
 ModuleRegistry.registerModules([
   CellStyleModule,
+  ClientSideRowModelApiModule,
   ClientSideRowModelModule,
   ColumnApiModule,
   NumberFilterModule,
@@ -69,7 +71,9 @@ const rowClasses = {
 export default function RankingGrid(props: RankingGridProps) {
   const { model, sheet, barWidth, hidden, filtersShown, chosen, onChoose, onView, onShown } = props;
   const [api, setApi] = useState<GridApi<GridLine> | null>(null);
-  const lines = useMemo(() => gridLines(model), [model]);
+  const [asideShown, setAsideShown] = useState(true);
+  const lines = useMemo(() => gridLines(model, asideShown), [model, asideShown]);
+  const tall = lines.length > MOST_DRAWN;
   const drawing = useMemo(() => ({ sheet, barWidth }), [sheet, barWidth]);
   const { criteria } = model.figures;
   const columns = useMemo(
@@ -91,12 +95,14 @@ export default function RankingGrid(props: RankingGridProps) {
     applyGridView(ready, firstView.current);
     onShown(() => siteIdsIn(ready));
   };
-  const tellView = (): void => {
-    if (api) onView(gridViewOf(api));
+  const tellView = (ready: GridApi<GridLine>): void => onView(gridViewOf(ready));
+  const takeFilter = (ready: GridApi<GridLine>): void => {
+    setAsideShown(showsAside(ready));
+    tellView(ready);
   };
   return (
     <GridSheetContext value={drawing}>
-      <div className={lines.length > MOST_DRAWN ? 'rk-grid rk-grid-tall' : 'rk-grid'}>
+      <div className={tall ? 'rk-grid rk-grid-tall' : 'rk-grid'}>
         <AgGridReact<GridLine>
           theme={gridTheme}
           styleNonce={props.nonce}
@@ -105,7 +111,9 @@ export default function RankingGrid(props: RankingGridProps) {
           defaultColDef={defaults}
           getRowId={({ data }) => data.id}
           getRowHeight={({ data }) => (data?.kind === 'band' ? BAND_HEIGHT : ROW_HEIGHT)}
-          domLayout={lines.length > MOST_DRAWN ? 'normal' : 'autoHeight'}
+          domLayout={tall ? 'normal' : 'autoHeight'}
+          suppressRowVirtualisation={!tall}
+          suppressColumnVirtualisation={!tall}
           headerHeight={HEADER_HEIGHT}
           floatingFiltersHeight={FILTER_HEIGHT}
           isFullWidthRow={({ rowNode }) => isBand(rowNode as IRowNode<GridLine>)}
@@ -124,8 +132,8 @@ export default function RankingGrid(props: RankingGridProps) {
           suppressCellFocus={false}
           onGridReady={(event) => start(event.api)}
           onGridPreDestroyed={() => onShown(null)}
-          onFilterChanged={tellView}
-          onSortChanged={tellView}
+          onFilterChanged={(event) => takeFilter(event.api)}
+          onSortChanged={(event) => tellView(event.api)}
           onSelectionChanged={(event) => {
             if (event.source === 'rowClicked' || event.source === 'spaceKey')
               onChoose(event.api.getSelectedNodes()[0]?.id ?? null);
@@ -160,6 +168,15 @@ function useChosenRow(
     node.setSelected(true, true, 'api');
     api.ensureNodeVisible(node);
   }, [api, chosen, lines]);
+}
+
+/** Whether any set-aside site passes the filters: without one its band would stand over nothing. */
+function showsAside(api: GridApi<GridLine>): boolean {
+  let shows = false;
+  api.forEachNodeAfterFilter(({ data }) => {
+    shows ||= data?.kind === 'site' && data.listed.kind === 'set-aside';
+  });
+  return shows;
 }
 
 function siteIdsIn(api: GridApi<GridLine>): string[] {

@@ -39,10 +39,7 @@ export function RankingScreen({ studyId, title, start, viewer, address, nonce }:
   const exportFile = (): void => {
     if (!model) return;
     const all = model.rows.map(({ site }) => model.figures.sites[site]?.siteId ?? '');
-    saveCsv(
-      `${fileNameOf(title)} ranking r${ranking.revision}.csv`,
-      rankingCsv(model, shown.current?.() ?? all),
-    );
+    saveCsv(`${fileNameOf(title)} ranking.csv`, rankingCsv(model, shown.current?.() ?? all));
   };
   const even = (): void =>
     weights.give(Object.fromEntries(ranking.criteria.map(({ id }) => [id, MOST_POINTS])));
@@ -121,4 +118,4 @@ function RankingHead({ live, onExport }: { live: LiveRanking; onExport: (() => v
 }
 
 /** A title without what file systems refuse. */
-const fileNameOf = (title: string): string => title.replace(/[^\p{L}\p{N} _-]+/gu, ' ').trim() || 'study';
+const fileNameOf = (title: string): string => title.replace(/[^\p{L}\p{N}_-]+/gu, ' ').trim() || 'study';

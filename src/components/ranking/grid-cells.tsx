@@ -60,7 +60,7 @@ export function DrawnFigure({ data, column: gridColumn }: Cell) {
 }
 
 export const DrawnBand = () => (
-  <div className="rk-band">
+  <div className="rk-band" role="gridcell" tabIndex={-1}>
     <SetAsideBand />
   </div>
 );

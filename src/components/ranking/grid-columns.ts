@@ -27,6 +27,7 @@ export const defaultColumn: ColDef<GridLine> = {
   sortable: true,
   resizable: false,
   suppressMovable: true,
+  autoHeaderHeight: true,
   suppressHeaderMenuButton: true,
   suppressHeaderFilterButton: true,
   equals: () => false,

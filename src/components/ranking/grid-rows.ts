@@ -10,10 +10,12 @@ export type GridLine =
 
 const BAND: GridLine = { kind: 'band', id: 'band' };
 
-export function gridLines(model: RankingModel): GridLine[] {
+/** @param banded whether the set-aside sites get their band */
+export function gridLines(model: RankingModel, banded: boolean): GridLine[] {
   const lines: GridLine[] = [];
   model.rows.forEach((listed, place) => {
-    if (listed.kind === 'set-aside' && model.rows[place - 1]?.kind !== 'set-aside') lines.push(BAND);
+    const first = listed.kind === 'set-aside' && model.rows[place - 1]?.kind !== 'set-aside';
+    if (first && banded) lines.push(BAND);
     const id = model.figures.sites[listed.site]?.siteId ?? String(listed.site);
     lines.push({ kind: 'site', id, listed, place, model });
   });
