@@ -152,6 +152,8 @@ export interface MemoMap {
   graticule: string;
   degrees: { x: number; y: number; text: string; side: 'bottom' | 'left' }[];
   pads: MemoPad[];
+  /** Sites that are not listed, as one path of dots: there may be thousands. */
+  others: string;
   notes: string[];
 }
 
@@ -159,7 +161,7 @@ export interface MemoPad {
   x: number;
   y: number;
   mark: 'leads' | 'ranked' | 'other';
-  /** Baseline start of the label; none where the pad is one of too many to name. */
+  /** Baseline start of the label; none where no place was left for it. */
   label: { x: number; y: number; text: string } | null;
   /** From the pad to a label that had to move away. */
   leader: { x1: number; y1: number; x2: number; y2: number } | null;

@@ -2,6 +2,7 @@
 import type { Criterion } from '#contract/criterion.ts';
 import type { FlownOrbit, OrbitResult, OutOfReachOrbit, SiteResult } from '#contract/evaluate.ts';
 import { prepareFigures, rankFigures } from '#contract/ranking-model.ts';
+import { decimalsOf } from '#contract/ranking-words.ts';
 import { presentRanking } from '#contract/ranking-rows.ts';
 import type { RankingCell, RankingFigures } from '#contract/ranking.ts';
 import type { StudyInputs } from '#contract/study-inputs.ts';
@@ -244,7 +245,7 @@ export function inventedFacts(wanted: Invented): MemoFacts {
     },
     inputs,
     results,
-    figures,
+    decimals: figures.criteria.map((_, place) => decimalsOf(figures, place)),
     ranking: presentRanking(rankFigures(prepareFigures(figures), points), 'study'),
     checksum: 'ab'.repeat(32),
   };

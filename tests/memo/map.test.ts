@@ -9,7 +9,6 @@ const at = (latitudeDeg: number, longitudeDeg: number, index = 0): MapSite => ({
   latitudeDeg,
   longitudeDeg,
   mark: index === 0 ? 'leads' : 'ranked',
-  named: true,
 });
 const WIDTH = 504;
 
@@ -31,7 +30,7 @@ describe('the coast', () => {
     ['the Pacific across the date line', [at(52, 177), at(51, -176, 1), at(-17, 179, 2), at(65, -178, 3)]],
     ['islands at the date line', [at(-16.6, 179.9), at(-17.2, -179.7, 1)]],
   ])('has no line across the map: %s', (_, sites) => {
-    const map = drawMap(sites, WIDTH);
+    const map = drawMap(sites, [], WIDTH);
     const bottom = map.height - 11;
     for (const points of subpaths(map.land)) {
       points.slice(1).forEach(([x, y], index) => {
@@ -45,7 +44,7 @@ describe('the coast', () => {
   });
 
   test('puts no seam of the date line into the view: the 180° meridian is no coast', () => {
-    const map = drawMap([at(65, 178), at(66, -176, 1), at(62, 179, 2)], WIDTH);
+    const map = drawMap([at(65, 178), at(66, -176, 1), at(62, 179, 2)], [], WIDTH);
     const meridian = map.degrees.find(({ text }) => text === '180°')?.x ?? NaN;
     const along = subpaths(map.land).flatMap((points) =>
       points
@@ -114,14 +113,14 @@ describe('labels', () => {
 
   test('twelve sites over the Earth are all named', () => {
     const sites = Array.from({ length: 12 }, (_, index) => at(-55 + 11 * index, -170 + 29 * index, index));
-    expect(drawMap(sites, WIDTH).pads.every(({ label }) => label !== null)).toBe(true);
+    expect(drawMap(sites, [], WIDTH).pads.every(({ label }) => label !== null)).toBe(true);
   });
 
   test('neighbours that stand close get leaders', () => {
     const sites = Array.from({ length: 9 }, (_, index) =>
       at(10 + 0.12 * Math.floor(index / 3), 20 + 0.12 * (index % 3), index),
     );
-    const pads = drawMap(sites, WIDTH).pads;
+    const pads = drawMap(sites, [], WIDTH).pads;
     expect(pads.every(({ label }) => label !== null)).toBe(true);
     expect(pads.some(({ leader }) => leader !== null)).toBe(true);
   });

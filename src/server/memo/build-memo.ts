@@ -1,6 +1,7 @@
 import { formatDateUtc } from '#contract/format.ts';
 import type { MemoModel, MemoPaper } from '#contract/memo.ts';
 import { prepareFigures, rankFigures } from '#contract/ranking-model.ts';
+import { decimalsOf } from '#contract/ranking-words.ts';
 import { presentRanking } from '#contract/ranking-rows.ts';
 import type { PooledDb } from '#db/client.ts';
 import { findMemoHead } from '#db/queries/memo.ts';
@@ -39,7 +40,7 @@ export async function loadMemoFacts(
     study,
     inputs,
     results: new Map(sites.flatMap(({ siteId }, at) => (flights[at] ? [[siteId, flights[at]]] : []))),
-    figures,
+    decimals: figures.criteria.map((_, place) => decimalsOf(figures, place)),
     ranking,
     checksum: canonicalInputs(snapshot).checksum,
   };

@@ -20,17 +20,14 @@ export const sectorsInWords = (sectors: readonly (readonly [number, number])[]):
         )
         .join(', ');
 
-/** The candidates on a map of any width: the listed ones by name, the others as bare pads. */
+/** The candidates on a map of any width: the listed ones by name, the others as dots. */
 export function candidatesMap({ inputs }: MemoFacts, { sites }: PrintedSites, width: number): MapDrawing {
   const listed = new Set(sites.map(({ site }) => site.siteId));
-  const rest = inputs.sites.filter(({ siteId }) => !listed.has(siteId));
   const markOf = ({ standing }: PrintedSite): MemoPad['mark'] =>
     standing === 'leads' || standing === 'ranked' ? standing : 'other';
   return drawMap(
-    [
-      ...sites.map((one) => ({ ...one.site, mark: markOf(one), named: true })),
-      ...rest.map((site) => ({ ...site, mark: 'other' as const, named: false })),
-    ],
+    sites.map((one) => ({ ...one.site, mark: markOf(one) })),
+    inputs.sites.filter(({ siteId }) => !listed.has(siteId)),
     width,
   );
 }
@@ -39,7 +36,7 @@ function mapFigure(facts: MemoFacts, printed: PrintedSites): MemoMap {
   const { inputs } = facts;
   const { sites } = printed;
   const drawn = candidatesMap(facts, printed, MAP_WIDTH);
-  const unnamed = drawn.pads.slice(0, sites.length).filter(({ label }) => label === null).length;
+  const unnamed = drawn.pads.filter(({ label }) => label === null).length;
   return {
     kind: 'map',
     number: 0,
@@ -49,7 +46,7 @@ function mapFigure(facts: MemoFacts, printed: PrintedSites): MemoMap {
     notes: [
       `Codes as in the table of candidates. ${sites.some(({ standing }) => standing === 'leads') ? 'Filled triangle: leads. ' : ''}Equidistant cylindrical projection; coast: Natural Earth.`,
       ...(unnamed > 0 ? [`${formatCount(unnamed, 'pad')} too close to others to be named here.`] : []),
-      ...(printed.left > 0 ? [`${formatCount(printed.left, 'further site')} drawn without a code.`] : []),
+      ...(printed.left > 0 ? [`${formatCount(printed.left, 'further site')} as dots.`] : []),
     ],
   };
 }

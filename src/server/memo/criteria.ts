@@ -3,7 +3,7 @@ import { formatNumber } from '#contract/format.ts';
 import type { MemoBlock, MemoTable } from '#contract/memo.ts';
 import { QUANTITIES } from '#contract/quantity.ts';
 import type { WeighedCriterion } from '#contract/ranking.ts';
-import { decimalsOf, letterOf } from '#contract/ranking-words.ts';
+import { letterOf } from '#contract/ranking-words.ts';
 import { cell, figure, figures, row, table, words } from './cells.ts';
 import type { MemoFacts } from './facts.ts';
 
@@ -39,7 +39,7 @@ function criteriaTable(facts: MemoFacts): MemoTable {
       figures('Weight', 'sum 1', 8, true),
     ],
     facts.ranking.criteria.map((criterion, place) => {
-      const decimals = decimalsOf(facts.figures, place);
+      const decimals = facts.decimals[place] ?? 0;
       const [worst, best] = levels(criterion, decimals);
       const { limit } = criterion;
       return row([

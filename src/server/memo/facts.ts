@@ -1,6 +1,6 @@
 import type { SiteResult } from '#contract/evaluate.ts';
 import type { MemoPaper } from '#contract/memo.ts';
-import type { Ranking, RankingFigures } from '#contract/ranking.ts';
+import type { Ranking } from '#contract/ranking.ts';
 import type { StudyInputs } from '#contract/study-inputs.ts';
 
 /** What a memo is written from: the same inputs, results and ranking that the screens show, of one revision. */
@@ -23,7 +23,8 @@ export interface MemoFacts {
   inputs: StudyInputs;
   /** Flight of every listed site by its id, orbits in the order of the manifest. */
   results: ReadonlyMap<string, SiteResult>;
-  figures: RankingFigures;
+  /** Decimals of every criterion's figures, by its place. */
+  decimals: readonly number[];
   ranking: Ranking;
   /** SHA-256 of the canonical inputs, hexadecimal. */
   checksum: string;

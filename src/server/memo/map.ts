@@ -6,14 +6,19 @@ import type { MemoMap, MemoPad } from '#contract/memo.ts';
 import { placeLabels, type Box } from './labels.ts';
 import { mapView, type MapView } from './map-view.ts';
 
-export type MapDrawing = Pick<MemoMap, 'width' | 'height' | 'land' | 'graticule' | 'degrees' | 'pads'>;
+export type MapDrawing = Pick<
+  MemoMap,
+  'width' | 'height' | 'land' | 'graticule' | 'degrees' | 'pads' | 'others'
+>;
 
-export interface MapSite {
-  code: string;
+interface Place {
   latitudeDeg: number;
   longitudeDeg: number;
+}
+
+export interface MapSite extends Place {
+  code: string;
   mark: MemoPad['mark'];
-  named: boolean;
 }
 
 /** Room for the degrees at the left and under the frame, and sizes of letters and pads, in points. */
@@ -69,14 +74,17 @@ function degreesOf(view: MapView, frame: Box): MemoMap['degrees'] {
   return [...left, ...bottom.filter(({ x }) => x > frame.left + 8 && x < frame.right - 8)];
 }
 
+const dotAt = ({ x, y }: { x: number; y: number }): string => `M${x - 0.8} ${y - 0.8}h1.6v1.6h-1.6Z`;
+
 /**
  * Draws the candidates on the coast, cut to where they lie. Letters keep their size: for a narrow place draw a narrow map.
  * @param sites in the order in which labels are placed: the leader first.
+ * @param others drawn as dots, without a name.
  * @param width of the figure, points.
  * @returns everything a renderer needs but number, caption and notes.
  */
-export function drawMap(sites: readonly MapSite[], width: number): MapDrawing {
-  const view = mapView(sites, width - LEFT);
+export function drawMap(sites: readonly MapSite[], others: readonly Place[], width: number): MapDrawing {
+  const view = mapView([...sites, ...others], width - LEFT);
   const frame: Box = { left: LEFT, top: 0, right: width, bottom: view.height };
   const projection = projectionOf(view, frame);
   const path = geoPath(projection).digits(1);
@@ -87,28 +95,23 @@ export function drawMap(sites: readonly MapSite[], width: number): MapDrawing {
       [-180, -90],
       [180, 90.01],
     ]);
-  const at = sites.map((site) => {
-    const [x = 0, y = 0] = projection([site.longitudeDeg, site.latitudeDeg]) ?? [];
-    return { x: Math.round(x * 100) / 100, y: Math.round(y * 100) / 100, text: site.code };
-  });
-  const named = at.filter((_, index) => sites[index]?.named);
-  const labels = placeLabels(named, at, frame, SIZES);
-  const pads = at.map(({ x, y }, index): MemoPad => {
-    const placed = labels[named.indexOf(at[index] ?? { x, y, text: '' })] ?? null;
-    return {
-      x,
-      y,
-      mark: sites[index]?.mark ?? 'other',
-      label: placed && { x: placed.x, y: placed.y, text: placed.text },
-      leader: placed?.leader ?? null,
-    };
-  });
+  const at = ({ longitudeDeg, latitudeDeg }: Place) => {
+    const [x = 0, y = 0] = projection([longitudeDeg, latitudeDeg]) ?? [];
+    return { x: Math.round(x * 100) / 100, y: Math.round(y * 100) / 100 };
+  };
+  const places = sites.map((site) => ({ ...at(site), text: site.code, mark: site.mark }));
+  const labels = placeLabels(places, places, frame, SIZES);
   return {
     width,
     height: view.height + UNDER,
     land: path(land(view)) ?? '',
     graticule: path(graticule()) ?? '',
     degrees: degreesOf(view, frame),
-    pads,
+    pads: places.map(({ x, y, mark }, index): MemoPad => {
+      const placed = labels[index];
+      const label = placed ? { x: placed.x, y: placed.y, text: placed.text } : null;
+      return { x, y, mark, label, leader: placed?.leader ?? null };
+    }),
+    others: others.map((place) => dotAt(at(place))).join(''),
   };
 }

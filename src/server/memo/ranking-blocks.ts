@@ -2,7 +2,7 @@ import { closedSums } from '#core/printed/closing.ts';
 import { formatCount, formatNumber, listInWords } from '#contract/format.ts';
 import type { MemoBlock, MemoContributions, MemoPart, MemoTable } from '#contract/memo.ts';
 import type { Contribution, RankedSite, Ranking, WeighedCriterion } from '#contract/ranking.ts';
-import { decimalsOf, letterOf, missingInWords, rankRange, valueDecimals } from '#contract/ranking-words.ts';
+import { letterOf, missingInWords, rankRange, valueDecimals } from '#contract/ranking-words.ts';
 import { cell, figure, figures, row, runsOf, table, words } from './cells.ts';
 import { MOST_OTHERS, MOST_RANKED, type MemoFacts } from './facts.ts';
 import { leftOut } from './printed-sites.ts';
@@ -30,7 +30,7 @@ const WORST_NOTE = '“worst”: an orbit is out of reach or falls short, which 
 
 function figureText(facts: MemoFacts, contribution: Contribution | undefined, place: number): string {
   if (!contribution) return '–';
-  if (contribution.figure !== null) return figure(contribution.figure, decimalsOf(facts.figures, place));
+  if (contribution.figure !== null) return figure(contribution.figure, facts.decimals[place] ?? 0);
   return contribution.value === null ? 'no figure' : 'worst';
 }
 

@@ -63,6 +63,7 @@ export function MapFigure({ map, width }: { map: MemoMap; width: number }) {
             {degree.text}
           </Text>
         ))}
+        {map.others !== '' && <Path d={map.others} fill={INK.ink3} />}
         {map.pads.map((pad, at) =>
           pad.leader ? (
             <Path
