@@ -1,7 +1,9 @@
 import { recognise } from './headings.ts';
 import { DELIMITERS, tokenise, type CsvRecord, type Delimiter } from './tokenise.ts';
 
-const SAMPLE = 30;
+const SAMPLE_RECORDS = 30;
+/** Enough for the records of any likely file: 2,000 characters each. */
+const SAMPLE_CHARACTERS = 60_000;
 
 /** True for a record in which nothing is written: an empty line, or a spreadsheet's row of bare separators. */
 export function isBlank(record: CsvRecord): boolean {
@@ -21,17 +23,18 @@ export function detectDelimiter(text: string): Delimiter {
   const named = /^sep=([,;\t])\r?[\r\n]/i.exec(text)?.[1];
   const told = DELIMITERS.find((delimiter) => delimiter === named);
   if (told !== undefined) return told;
+  const sample = text.slice(0, SAMPLE_CHARACTERS);
   let best: Delimiter = ',';
   let most = 0;
   for (const delimiter of DELIMITERS) {
-    const score = scoreOf(text, delimiter);
+    const score = scoreOf(sample, delimiter);
     if (score > most) [best, most] = [delimiter, score];
   }
   return best;
 }
 
-function scoreOf(text: string, delimiter: Delimiter): number {
-  const [heading, ...rows] = tokenise(text, delimiter, SAMPLE).filter((record) => !isBlank(record));
+function scoreOf(sample: string, delimiter: Delimiter): number {
+  const [heading, ...rows] = tokenise(sample, delimiter, SAMPLE_RECORDS).filter((record) => !isBlank(record));
   if (heading === undefined || heading.cells.length < 2) return 0;
   const known = new Set(
     heading.cells.map((cell) => recognise(cell)?.field).filter((field) => field !== undefined),

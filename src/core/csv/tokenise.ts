@@ -1,3 +1,5 @@
+import Papa from 'papaparse';
+
 export const DELIMITERS = [',', ';', '\t'] as const;
 export type Delimiter = (typeof DELIMITERS)[number];
 
@@ -9,98 +11,61 @@ export interface CsvRecord {
   readonly unclosed: boolean;
 }
 
-const QUOTE = 34;
-const SPACE = 32;
-const CR = 13;
-const LF = 10;
-
 /**
  * Splits CSV text into records by RFC 4180, more forgiving: lines may end in CRLF, LF or CR, mixed; a quote inside
  * an unquoted cell is a plain character (seconds of arc); spaces before an opening quote are dropped; what follows
- * a closing quote is kept.
+ * a closing quote is kept. A CR alone inside quotes is read as LF.
  *
  * @param text the decoded file
  * @param delimiter what parts the cells
  * @param limit stop after this many records
- * @see RFC 4180; tests/core/csv/tokenise.test.ts compares with a general-purpose library
+ * @see RFC 4180
  */
-export function tokenise(text: string, delimiter: Delimiter, limit = Number.POSITIVE_INFINITY): CsvRecord[] {
-  const records: CsvRecord[] = [];
-  const split = delimiter.charCodeAt(0);
-  let at = 0;
+export function tokenise(text: string, delimiter: Delimiter, limit?: number): CsvRecord[] {
+  const lines = text.replace(/\r(?!\n)/g, '\n');
+  const { data, errors, meta } = parse(lines, delimiter, limit);
+  const unclosed = errors.find(({ code }) => code === 'MissingQuotes')?.row;
+  // What ends the last line begins an empty record for the parser.
+  if (!meta.truncated && unclosed === undefined && lines.endsWith('\n')) data.pop();
   let line = 1;
-  while (at < text.length && records.length < limit) {
-    const cells: string[] = [];
-    const first = line;
-    let unclosed = false;
-    for (;;) {
-      const cell = isQuotedFrom(text, at) ? readQuoted(text, at, split) : readPlain(text, at, split);
-      cells.push(cell.value);
-      line += cell.newlines;
-      unclosed ||= cell.unclosed;
-      at = cell.end;
-      if (at >= text.length || text.charCodeAt(at) !== split) break;
-      at += 1;
-    }
-    at = skipLineEnd(text, at);
+  return data.map((cells, row) => {
+    dropReturn(cells);
+    const record = { line, cells, unclosed: row === unclosed };
     line += 1;
-    records.push({ line: first, cells, unclosed });
-  }
-  return records;
+    for (const cell of cells) line += countNewlines(cell);
+    return record;
+  });
 }
 
-interface Cell {
-  readonly value: string;
-  readonly end: number;
-  readonly newlines: number;
-  readonly unclosed: boolean;
+/** Rewrites the text only where it departs from RFC 4180, because rewriting takes longer than parsing. */
+function parse(text: string, delimiter: Delimiter, limit: number | undefined): Papa.ParseResult<string[]> {
+  const options = { delimiter, newline: '\n', ...(limit !== undefined && { preview: limit }) } as const;
+  const isSpaced = new RegExp(`(?:^|[${delimiter}\n]) +"`).test(text);
+  const result = isSpaced ? undefined : Papa.parse<string[]>(text, options);
+  if (result && !result.errors.some(({ code }) => code === 'InvalidQuotes')) return result;
+  return Papa.parse<string[]>(toStrict(text, delimiter), options);
 }
 
-function isQuotedFrom(text: string, start: number): boolean {
-  let at = start;
-  while (text.charCodeAt(at) === SPACE) at += 1;
-  return text.charCodeAt(at) === QUOTE;
+/** Drops spaces before an opening quote and moves what follows a closing one inside. */
+function toStrict(text: string, delimiter: Delimiter): string {
+  const quotedCell = new RegExp(
+    `(^|[${delimiter}\n]) *"([^"]*(?:""[^"]*)*)(?:"([^${delimiter}\r\n]*)|$)`,
+    'g',
+  );
+  return text.replace(quotedCell, (_cell, before: string, quoted: string, after?: string) => {
+    const opened = `${before}"${quoted}`;
+    return after === undefined ? opened : `${opened}${after.trimEnd().replaceAll('"', '""')}"`;
+  });
 }
 
-function readPlain(text: string, start: number, split: number): Cell {
-  const end = endOfPlain(text, start, split);
-  return { value: text.slice(start, end), end, newlines: 0, unclosed: false };
+/** Takes the CR of a CRLF off the last cell. Inside quotes a CR stands before an LF, never last. */
+function dropReturn(cells: string[]): void {
+  const last = cells.at(-1);
+  if (last?.endsWith('\r')) cells[cells.length - 1] = last.slice(0, -1);
 }
 
-function readQuoted(text: string, start: number, split: number): Cell {
-  let at = text.indexOf('"', start) + 1;
-  let value = '';
-  for (;;) {
-    const close = text.indexOf('"', at);
-    if (close === -1) {
-      value += text.slice(at);
-      return { value, end: text.length, newlines: countLineEnds(value), unclosed: true };
-    }
-    value += text.slice(at, close);
-    at = close + 1;
-    if (text.charCodeAt(at) !== QUOTE) break;
-    value += '"';
-    at += 1;
-  }
-  const newlines = countLineEnds(value);
-  const end = endOfPlain(text, at, split);
-  return { value: value + text.slice(at, end).trimEnd(), end, newlines, unclosed: false };
-}
-
-function endOfPlain(text: string, start: number, split: number): number {
-  let at = start;
-  while (at < text.length) {
-    const code = text.charCodeAt(at);
-    if (code === split || code === LF || code === CR) break;
-    at += 1;
-  }
-  return at;
-}
-
-function skipLineEnd(text: string, at: number): number {
-  return text.charCodeAt(at) === CR && text.charCodeAt(at + 1) === LF ? at + 2 : at + 1;
-}
-
-function countLineEnds(text: string): number {
-  return text.match(/\r\n|\r|\n/g)?.length ?? 0;
+function countNewlines(cell: string): number {
+  let count = 0;
+  for (let at = cell.indexOf('\n'); at !== -1; at = cell.indexOf('\n', at + 1)) count += 1;
+  return count;
 }
