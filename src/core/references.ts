@@ -20,4 +20,18 @@ export const references = {
     'Goodwin and Wright, Decision Analysis for Management Judgment, chapter 3: points made into weights that sum to 1',
 } as const;
 
+/** Sources of the further weighing methods, which the interface computes and the memo does not use. */
+export const weighingReferences = {
+  saaty: 'Saaty, The Analytic Hierarchy Process (1980): pairwise comparison, random indices',
+  hwangYoon: 'Hwang and Yoon, Multiple Attribute Decision Making (1981): closeness to the ideal (TOPSIS)',
+  lahdelmaSalminen:
+    'Lahdelma and Salminen, SMAA-2: stochastic multicriteria acceptability analysis for group decision making (2001)',
+  tervonenLahdelma:
+    'Tervonen and Lahdelma, Implementing stochastic multicriteria acceptability analysis (2007): weights uniform on the simplex and its parts',
+  steinKeblis: 'Stein and Keblis, A new method to simulate the triangular distribution (2009)',
+  blackmanVigna:
+    'Blackman and Vigna, Scrambled linear pseudorandom number generators (2021): xoshiro128** 1.1, seeded by SplitMix64',
+  kendall: 'Kendall, Rank Correlation Methods (1948): coefficient of concordance with ties corrected',
+} as const;
+
 export type ReferenceKey = keyof typeof references;

@@ -13,6 +13,12 @@ const columns = {
   'decision-weights': ['points', 'place'],
   'decision-office': ['points', 'values'],
   'decision-additive': ['figures', 'rank'],
+  'decision-shapes': ['function', 'figure'],
+  'decision-pairwise': ['judgements', 'quantity', 'place'],
+  'decision-topsis': ['rows', 'weights', 'place'],
+  'decision-acceptability': ['rows', 'model', 'quantity', 'site', 'place'],
+  'decision-concordance': ['rankings'],
+  'random-streams': ['generator', 'place'],
 } as const satisfies Record<string, readonly string[]>;
 
 export type Topic = keyof typeof columns;

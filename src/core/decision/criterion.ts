@@ -1,3 +1,5 @@
+import { assertShape, type Shape } from './shape.ts';
+
 /** Which way a criterion pulls: more of it is better, or less of it is. */
 export type Direction = 'more' | 'less';
 
@@ -19,14 +21,18 @@ export interface Criterion {
   direction: Direction;
   levels: Levels;
   limit: Limit | null;
+  /** How value grows between the levels; straight where none is said. */
+  shape?: Shape;
 }
 
 /**
  * Refuses a criterion that cannot be weighed.
- * @throws RangeError when fixed levels are equal, run against the direction or are not finite, or a limit is not finite.
+ * @throws RangeError when fixed levels are equal, run against the direction or are not finite, a limit is not finite, or
+ * the shape is no value function.
  */
 export function assertCriterion(criterion: Criterion): void {
-  const { direction, levels, limit } = criterion;
+  const { direction, levels, limit, shape } = criterion;
+  if (shape) assertShape(shape);
   if (limit !== null && !Number.isFinite(limit.figure)) {
     throw new RangeError(`limit: ${limit.figure} is not a finite figure`);
   }

@@ -1,6 +1,7 @@
 import { meetsLimit, type Criterion } from './criterion.ts';
 import { CELL, type FigureTable } from './figures.ts';
-import { spanOf, straightValue, type Span } from './value.ts';
+import { STRAIGHT, type Shape } from './shape.ts';
+import { spanOf, valueOf, type Span } from './value.ts';
 
 /** A must-meet limit that a site fails: both are places in the table. */
 export interface Failure {
@@ -12,6 +13,8 @@ export interface Failure {
 export interface Prepared {
   table: FigureTable;
   spans: Span[];
+  /** How value grows between the levels, one a criterion. */
+  shapes: Shape[];
   /** 1 where the criterion carries a must-meet limit. */
   limited: Uint8Array;
   /** 0…1, laid out as the table; 0 where the figure is missing. */
@@ -39,6 +42,7 @@ export function prepare(criteria: readonly Criterion[], table: FigureTable): Pre
   const prepared: Prepared = {
     table,
     spans: criteria.map((criterion, column) => spanOf(criterion, table, column)),
+    shapes: criteria.map(({ shape }) => shape ?? STRAIGHT),
     limited: Uint8Array.from(criteria, ({ limit }) => (limit === null ? 0 : 1)),
     values: new Float64Array(table.figures.length),
     setAside: new Uint8Array(siteCount),
@@ -60,7 +64,8 @@ function prepareCell(prepared: Prepared, criterion: Criterion, site: number, col
     return;
   }
   const figure = table.figures[at] ?? 0;
-  if (state === CELL.figure) values[at] = straightValue(figure, spans[column] ?? { kind: 'empty' });
+  if (state === CELL.figure)
+    values[at] = valueOf(figure, spans[column] ?? { kind: 'empty' }, criterion.shape);
   if (criterion.limit !== null && (state === CELL.worst || !meetsLimit(figure, criterion.limit))) {
     setAside[site] = 1;
     failures.push({ site, criterion: column });

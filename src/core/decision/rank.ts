@@ -1,8 +1,7 @@
 import { CELL } from './figures.ts';
+import { overallValue } from './overall.ts';
 import type { Prepared } from './prepare.ts';
-
-/** Overall values this close share a rank. */
-export const TIE = 1e-12;
+import { endOfTie, TIE } from './ties.ts';
 
 /** A site that misses a figure which matters: its rank lies in a range, counted against the ranked sites alone. */
 export interface Incomplete {
@@ -82,13 +81,13 @@ function addUp({ table, values, gaps, limited }: Prepared, weights: Float64Array
   const totals = new Float64Array(siteCount);
   const ceilings = new Float64Array(siteCount);
   const open = new Uint8Array(siteCount);
-  for (let site = 0, at = 0; site < siteCount; site++) {
-    let total = 0;
+  for (let site = 0; site < siteCount; site++) {
+    const from = site * criterionCount;
+    const total = overallValue(weights, values, from);
     let missing = 0;
-    for (let j = 0; j < criterionCount; j++, at++) {
+    for (let j = 0; gaps[site] === 1 && j < criterionCount; j++) {
       const w = weights[j] ?? 0;
-      total += w * (values[at] ?? 0);
-      if (gaps[site] === 1 && states[at] === CELL.missing && (w > 0 || limited[j] === 1)) {
+      if (states[from + j] === CELL.missing && (w > 0 || limited[j] === 1)) {
         missing += w;
         open[site] = 1;
       }
@@ -99,13 +98,12 @@ function addUp({ table, values, gaps, limited }: Prepared, weights: Float64Array
   return { totals, ceilings, open };
 }
 
-/** Ties are measured from the first of a tied run, so that a long run of near-ties cannot creep. */
 function sharedRanks(ranked: Uint32Array, totals: Float64Array): Uint32Array {
+  const sorted = Float64Array.from(ranked, (site) => valueOf(totals, site));
   const ranks = new Uint32Array(ranked.length);
-  let first = 0;
-  for (let place = 0; place < ranked.length; place++) {
-    if (valueOf(totals, ranked[first]) - valueOf(totals, ranked[place]) > TIE) first = place;
-    ranks[place] = first + 1;
+  for (let first = 0, end = 0; first < sorted.length; first = end) {
+    end = endOfTie(sorted, first);
+    ranks.fill(first + 1, first, end);
   }
   return ranks;
 }

@@ -1,5 +1,6 @@
 import { assertCriterion, type Criterion } from './criterion.ts';
 import { CELL, type FigureTable } from './figures.ts';
+import { shapedValue, STRAIGHT, type Shape } from './shape.ts';
 
 /**
  * The span a criterion's value runs over, in its own unit.
@@ -48,4 +49,15 @@ export function straightValue(figure: number, span: Span): number {
   // Halved so that the difference of two figures near the greatest double cannot overflow.
   const value = (figure / 2 - span.worst / 2) / (span.best / 2 - span.worst / 2);
   return value <= 0 ? 0 : value >= 1 ? 1 : value;
+}
+
+/**
+ * The value of a figure: how far it lies from the worst level to the best, shaped.
+ * @param figure x, in the criterion's own unit.
+ * @param span the levels; a flat or empty span gives 0.
+ * @param shape straight where none is said.
+ * @returns 0…1.
+ */
+export function valueOf(figure: number, span: Span, shape: Shape = STRAIGHT): number {
+  return shapedValue(straightValue(figure, span), shape);
 }

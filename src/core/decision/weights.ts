@@ -10,15 +10,16 @@ export type Weights = { kind: 'set'; weights: Float64Array } | { kind: 'unset' }
  */
 export function weightsFromPoints(points: ArrayLike<number>): Weights {
   let largest = 0;
+  let sum = 0;
   for (let j = 0; j < points.length; j++) {
     const p = points[j] ?? 0;
     if (!Number.isFinite(p) || p < 0)
       throw new RangeError(`points: ${p} is not a non-negative finite number`);
     if (p > largest) largest = p;
+    sum += p;
   }
   if (largest === 0) return { kind: 'unset' };
-  // By the largest first: a sum of points near the greatest double would overflow, and tiny ones would lose digits.
-  const weights = Float64Array.from({ length: points.length }, (_, j) => (points[j] ?? 0) / largest);
-  const sum = weights.reduce((total, w) => total + w, 0);
-  return { kind: 'set', weights: weights.map((w) => w / sum) };
+  // Points near the greatest double overflow in a sum; over the largest of them they do not.
+  if (!Number.isFinite(sum)) return weightsFromPoints(Float64Array.from(points, (p) => p / largest));
+  return { kind: 'set', weights: Float64Array.from(points, (p) => p / sum) };
 }

@@ -135,6 +135,11 @@ describe('weights and terms', () => {
     expect(termOf(prepared, weigh(3, 1), 0, 1)).toBeCloseTo(0.075, 15);
   });
 
+  test('points whose sum overflows still make weights that sum to 1', () => {
+    expect([...weigh(1e308, 1e308, 0)]).toEqual([0.5, 0.5, 0]);
+    expect([...weigh(60, 40)]).toEqual([0.6, 0.4]);
+  });
+
   test('no points at all set no weights', () => {
     expect(weightsFromPoints([0, 0])).toEqual({ kind: 'unset' });
     expect(weightsFromPoints([])).toEqual({ kind: 'unset' });
