@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useEffect, useEffectEvent, useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { ApiError } from '#components/live/api.ts';
 import { useApi } from '#components/live/hooks.ts';
@@ -58,31 +58,45 @@ function patchOf(typed: Typed, before: Typed, criteria: readonly Criterion[]): S
 export function SiteDetails(props: DetailsProps) {
   const { data, error } = useApi<List<Criterion>>(`/api/v1/studies/${props.studyId}/criteria?pageSize=500`);
   const entered = data?.items.filter(({ source }) => source !== 'computed');
+  // What is typed rests on the site as it was opened, whatever arrives meanwhile: a save then meets the conflict.
+  const [base, setBase] = useState(props.site);
   return (
     <SideSheet open onClose={props.onClose} title={props.site.name}>
       {error && <Notice fact="The criteria could not be read.">{error.message}</Notice>}
       {entered && (
-        <DetailsForm key={`${props.site.id}/${props.site.version}`} {...props} criteria={entered} />
+        <DetailsForm
+          key={`${base.id}/${base.version}`}
+          {...props}
+          site={base}
+          latest={props.site}
+          onLatest={() => setBase(props.site)}
+          criteria={entered}
+        />
       )}
     </SideSheet>
   );
 }
 
-function DetailsForm({
-  site,
-  criteria,
-  locked,
-  onSave,
-  onKeep,
-  onClose,
-}: DetailsProps & { criteria: readonly Criterion[] }) {
+interface FormProps extends DetailsProps {
+  criteria: readonly Criterion[];
+  /** The site as it is now; taken over while nothing is typed. */
+  latest: Site;
+  onLatest: () => void;
+}
+
+function DetailsForm({ site, criteria, locked, onSave, onKeep, onClose, latest, onLatest }: FormProps) {
   const before = typedOf(site, criteria);
   const { register, formState, handleSubmit, setError } = useForm<Typed>({
     defaultValues: before,
     mode: 'onBlur',
     reValidateMode: 'onBlur',
   });
-  const { errors, isSubmitting } = formState;
+  const { errors, isSubmitting, isDirty } = formState;
+  const takeLatest = useEffectEvent(onLatest);
+  const moved = latest.id !== site.id || (latest.version !== site.version && !isDirty && !isSubmitting);
+  useEffect(() => {
+    if (moved) takeLatest();
+  }, [moved]);
   const [conflict, setConflict] = useState<{ patch: SitePatch; current: ChangedSite } | null>(null);
   const save = async (onto: Site, patch: SitePatch) => {
     setConflict(null);

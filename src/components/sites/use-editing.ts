@@ -11,6 +11,8 @@ export interface CellAt {
 
 /** The cell being edited: its text, and what was wrong with it. */
 export interface Edit extends CellAt {
+  /** The site as it was when the cell was opened. */
+  readonly base: Site;
   readonly text: string;
   readonly message: string | null;
   readonly meant?: string | undefined;
@@ -36,6 +38,13 @@ export interface Editing {
   write: (site: Site, key: CellKey, patch: SitePatch) => Promise<void>;
 }
 
+/**
+ * What an edit is based on. Someone's change that arrives while the cell is open is a conflict where it touches that
+ * cell; where it touches another, the edit stands on the site as it is now.
+ */
+const baseOf = ({ base, key }: Edit, now: Site): Site =>
+  cellText(now, key) === cellText(base, key) ? now : base;
+
 const isStale = (error: unknown): error is ApiError => error instanceof ApiError && error.code === 'stale';
 
 /** Editing one cell at a time, with the conflict that a change of someone else's can bring. */
@@ -49,14 +58,17 @@ export function useEditing(store: SiteStore): Editing {
     try {
       await store.change(site, patch);
     } catch (error) {
-      store.show(site);
-      if (isStale(error)) setConflict({ siteId: site.id, key, patch, current: error.current as ChangedSite });
-      else {
-        const text = cellText(changed, key);
+      if (isStale(error)) {
+        const current = error.current as ChangedSite;
+        store.show(current);
+        setConflict({ siteId: site.id, key, patch, current });
+      } else {
+        store.show(site);
         setEdit({
           siteId: site.id,
           key,
-          text,
+          base: site,
+          text: cellText(changed, key),
           message: error instanceof Error ? error.message : String(error),
         });
       }
@@ -66,12 +78,13 @@ export function useEditing(store: SiteStore): Editing {
   return {
     edit,
     conflict,
-    begin: (site, key) => setEdit({ siteId: site.id, key, text: cellText(site, key), message: null }),
+    begin: (site, key) =>
+      setEdit({ siteId: site.id, key, base: site, text: cellText(site, key), message: null }),
     type: (text) => setEdit((now) => now && { ...now, text, message: null, meant: undefined }),
     cancel: () => setEdit(null),
     commit: async (site, text) => {
       if (!edit) return;
-      if (text === cellText(site, edit.key)) {
+      if (text === cellText(edit.base, edit.key)) {
         setEdit(null);
         return;
       }
@@ -81,7 +94,7 @@ export function useEditing(store: SiteStore): Editing {
         return;
       }
       setEdit(null);
-      await write(site, edit.key, reading.value);
+      await write(baseOf(edit, site), edit.key, reading.value);
     },
     keepTheirs: () => {
       if (conflict) store.show(conflict.current);
