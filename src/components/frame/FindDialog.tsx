@@ -42,7 +42,11 @@ function useFound(query: string, { studyId, sections }: FindProps): { found: Fou
   const listed = items.map((item) =>
     'title' in item
       ? { href: `/studies/${item.id}`, name: item.title, kind: 'study' }
-      : { href: `/studies/${studyId}/sites?site=${item.id}`, name: item.name, kind: `site ${item.code}` },
+      : {
+          href: `/studies/${studyId}/sites?site=${encodeURIComponent(item.code)}`,
+          name: item.name,
+          kind: `site ${item.code}`,
+        },
   );
   return { found: [...named, ...listed], waiting: isLoading };
 }

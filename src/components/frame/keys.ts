@@ -23,8 +23,7 @@ function keepChoice(on: boolean) {
 function isTyping(target: EventTarget | null): boolean {
   return (
     target instanceof HTMLElement &&
-    (target.isContentEditable ||
-      target.closest('input, textarea, select, [role="grid"] [role="gridcell"]') !== null)
+    (target.isContentEditable || target.closest('input, textarea, select') !== null)
   );
 }
 
