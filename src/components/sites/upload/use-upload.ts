@@ -57,6 +57,8 @@ export function useUpload(studyId: string) {
     } catch (caught) {
       if (!(caught instanceof ApiError)) throw caught;
       setError(caught);
+      // Nothing was read: the panel offers to pick a file again.
+      setState((now) => (now.kind === 'reading' ? { kind: 'idle' } : now));
     }
   }, []);
 
