@@ -28,22 +28,31 @@ function range(values: readonly number[]): string {
   return low === high ? `${low} m/s` : `${low} to ${high} m/s`;
 }
 
-function headingOf(direct: readonly Flown[], all: number, inclination: string): string {
+const gainsOf = (rows: readonly Flown[]): number[] => rows.map(({ result }) => result.rotationGainMps);
+const aboutTheSame = (gains: readonly number[]): boolean =>
+  Math.max(...gains) - Math.min(...gains) < ABOUT_THE_SAME_MPS;
+
+function headingOf(
+  flown: readonly Flown[],
+  direct: readonly Flown[],
+  all: number,
+  inclination: string,
+): string {
   const turned = direct.length < all;
   if (direct.length === 0) return `No site flies ${inclination} without a turn.`;
   if (direct.length === 1) return `${direct[0]?.site.name ?? ''} alone flies ${inclination} without a turn.`;
-  const gains = direct.map(({ result }) => result.rotationGainMps);
-  const same = Math.max(...gains) - Math.min(...gains) < ABOUT_THE_SAME_MPS;
-  const first = same
-    ? `To ${inclination} every site gains about the same.`
+  const gains = gainsOf(direct);
+  const who = aboutTheSame(gainsOf(flown)) ? 'every site' : 'every direct flight';
+  const first = aboutTheSame(gains)
+    ? `To ${inclination} ${who} gains about the same.`
     : `To ${inclination} the turning Earth gives ${range(gains)}.`;
-  return turned ? `${first} Turns set them apart.` : first;
+  return turned ? `${first} Turns set ${who === 'every site' ? 'them' : 'sites'} apart.` : first;
 }
 
 function gainClause(direct: readonly Flown[], inclination: string): string {
   if (direct.length < 2) return '';
   const latitudes = direct.map(({ site }) => Math.abs(site.latitudeDeg)).sort((a, b) => a - b);
-  const gains = direct.map(({ result }) => result.rotationGainMps);
+  const gains = gainsOf(direct);
   const verb = Math.max(...gains) < 0 ? 'costs' : 'gives';
   const shown = verb === 'costs' ? gains.map((gain) => -gain) : gains;
   return (
@@ -83,7 +92,7 @@ export function orbitFinding(rows: readonly FlightRow[], inclinationDeg: number)
   const flown = flownOf(rows);
   const direct = flown.filter(({ result }) => result.way === 'direct');
   return {
-    heading: headingOf(direct, rows.length, inclination),
+    heading: headingOf(flown, direct, rows.length, inclination),
     why: gainClause(direct, inclination),
     decides: (costliest(flown, direct) + outOfReach(rows)).trim(),
   };

@@ -99,6 +99,15 @@ describe('the finding of an orbit', () => {
     expect(why).toContain('gives 280 to 288 m/s, at 2° of latitude as at 48°');
   });
 
+  test('claims no like gain for a site whose turn makes it fly elsewhere', () => {
+    const turned = flown({ way: 'plane-change', planeChangeDeg: 25, rotationGainMps: 190 });
+    const { heading } = orbitFinding(
+      [row('AA', 2, flown()), row('BB', 5, flown()), row('CC', 65, turned)],
+      51.6,
+    );
+    expect(heading).toBe('To 51.6° every direct flight gains about the same. Turns set sites apart.');
+  });
+
   test('names the largest turn with what it costs, and what is out of reach', () => {
     const dogleg = flown({ way: 'dogleg', turnDeg: 8, payloadKg: 6778 });
     dogleg.deltaVMps = { ...dogleg.deltaVMps, dogleg: 654 };
