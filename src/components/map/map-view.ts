@@ -149,8 +149,10 @@ export class MapView {
       [box.west, Math.max(-80, box.south)],
       [box.east, Math.min(80, box.north)],
     ];
-    const { clientWidth } = this.map.getContainer();
-    const padding = Math.min(70, clientWidth / 8);
+    const { clientWidth, clientHeight } = this.map.getContainer();
+    const side = Math.min(70, clientWidth / 8);
+    // The scale and the locator stand at the foot.
+    const padding = { top: side, left: side, right: side, bottom: Math.min(120, clientHeight / 4) };
     this.map.fitBounds(corners, { padding, maxZoom: 5, animate, duration: moveTime() });
   }
 
