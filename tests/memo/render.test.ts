@@ -39,6 +39,7 @@ describe('the file', () => {
     expect(info['Title']).toBe('Second launch site, 2031 manifest: draft memo, revision 14');
     expect(info['Author']).toBe('Quillon Launch');
     expect(rawPdf(bytes)).toMatch(/\/Lang \(en\)/);
+    expect(rawPdf(bytes)).toMatch(/\/Outlines \d+ 0 R/);
     expect(rawPdf(bytes)).toMatch(/\(D:20261201000000Z\)/);
     expect(fonts.length).toBeGreaterThan(0);
     for (const { name, embedded } of fonts) {
@@ -144,7 +145,7 @@ describe('the pages', () => {
     const model = composeMemo(inventedFacts({ sites: 40, orbits: 6, criteria: 7 }));
     // The processor's time and the least of three: other tests share the machine.
     let least = Infinity;
-    let bytes = new Uint8Array();
+    let bytes: Uint8Array = new Uint8Array();
     for (let round = 0; round < 3 && least >= 5; round++) {
       const before = process.cpuUsage();
       bytes = await renderMemo(model);

@@ -61,14 +61,20 @@ function Opening({ model }: { model: MemoModel }) {
   );
 }
 
+function SectionHeading({ heading }: { heading: string }) {
+  // The file's outline; the renderer's types know the property of pages alone.
+  const outline = { bookmark: heading };
+  return (
+    <View minPresenceAhead={110} {...outline}>
+      <Text style={s.heading}>{heading}</Text>
+    </View>
+  );
+}
+
 function Blocks({ items, width }: { items: readonly Item[]; width: number }) {
   return items.map(({ heading, block }, at) => (
     <Fragment key={at}>
-      {heading !== null && (
-        <View minPresenceAhead={110} bookmark={heading}>
-          <Text style={s.heading}>{heading}</Text>
-        </View>
-      )}
+      {heading !== null && <SectionHeading heading={heading} />}
       <Block block={block} width={width} />
     </Fragment>
   ));
