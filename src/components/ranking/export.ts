@@ -5,6 +5,10 @@ import { writeCsv } from '#core/csv/export.ts';
 
 type CsvCell = string | number;
 
+/** Every digit a double holds for certain: 0.1 + 0.2 is written 0.3. */
+const full = (value: number): number => Number(value.toPrecision(15));
+const fullOrNone = (value: number | null): CsvCell => (value === null ? '' : full(value));
+
 /** The sites asked for as CSV, in that order: ranks, values, and for every criterion figure, value, weight and term. */
 export function rankingCsv(model: RankingModel, siteIds: readonly string[]): string {
   const { criteria, sites } = model.figures;
@@ -47,14 +51,14 @@ function csvRow(row: RankingRow): CsvCell[] {
     name,
     latitudeDeg,
     longitudeDeg,
-    kind === 'set-aside' ? '' : row.value,
-    kind === 'incomplete' ? row.bestValue : '',
+    kind === 'set-aside' ? '' : full(row.value),
+    kind === 'incomplete' ? full(row.bestValue) : '',
     kind === 'set-aside' ? row.reasons.map(({ message }) => message).join('; ') : '',
     ...row.contributions.flatMap(({ figure, value, weight, term, note }) => [
-      figure ?? '',
-      value ?? '',
-      weight,
-      term ?? '',
+      fullOrNone(figure),
+      fullOrNone(value),
+      full(weight),
+      fullOrNone(term),
       note ?? '',
     ]),
   ];

@@ -4,7 +4,7 @@ import type { Prepared } from './prepare.ts';
 import { streamFrom } from './random.ts';
 import { fallingOrder } from './falling-order.ts';
 import { endOfTie } from './ties.ts';
-import { valueSampler, type UncertainFigure } from './uncertain.ts';
+import { highestValues, valueSampler, type UncertainFigure } from './uncertain.ts';
 import { criterionCountOf, weightSampler, type WeightModel } from './weight-model.ts';
 
 export interface AcceptabilityQuestion {
@@ -59,8 +59,9 @@ export function acceptability(question: AcceptabilityQuestion): Acceptability {
   }
   const shares = tally.ranks.map((times) => times / samples);
   const centralWeights = centralWeightsOf(tally, siteCount, criterionCount);
-  const draws = { drawValues, random, values, samples: uncertain.length > 0 ? samples : 1 };
-  return { shares, centralWeights, confidence: confidenceFactors(centralWeights, shares, draws) };
+  const draws = { drawValues, random, samples: uncertain.length > 0 ? samples : 1 };
+  const highest = highestValues(prepared, uncertain);
+  return { shares, centralWeights, confidence: confidenceFactors(table, highest, centralWeights, draws) };
 }
 
 interface Tally {

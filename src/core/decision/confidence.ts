@@ -1,4 +1,5 @@
-import { overallValue } from './overall.ts';
+import { fallingOrder } from './falling-order.ts';
+import { overallValue, overallValues, type ValueTable } from './overall.ts';
 import type { RandomStream } from './random.ts';
 import { TIE } from './ties.ts';
 import type { DrawValues } from './uncertain.ts';
@@ -6,48 +7,66 @@ import type { DrawValues } from './uncertain.ts';
 interface Draws {
   drawValues: DrawValues;
   random: RandomStream;
-  /** Values of all sites, row by row, drawn anew each time. */
-  values: Float64Array;
   samples: number;
+}
+
+/** A site that can lead, at its central weights. */
+interface Contender {
+  site: number;
+  weights: Float64Array;
+  /** The other sites, those that can reach highest first. */
+  rivals: Uint32Array;
+  /** The greatest overall value each of `rivals` can reach, falling: what lies below the contender need not be looked at. */
+  reach: Float64Array;
 }
 
 /**
  * Confidence factor of every site that can lead: the share of draws of the figures in which it leads while the weights
  * stay at its central ones; where it ties for the lead it counts as its share of the tie.
+ * @param table values of the likely figures.
+ * @param highest the greatest value each figure can take, laid out as the table.
  * @param centralWeights by site; null where it never leads, which gives null.
- * @param shares rank acceptabilities, site by site; they say which rivals to try first.
  * @see references.ts `lahdelmaSalminen`
  */
 export function confidenceFactors(
+  table: ValueTable,
+  highest: Float64Array,
   centralWeights: readonly (Float64Array | null)[],
-  shares: Float64Array,
-  { drawValues, random, values, samples }: Draws,
+  { drawValues, random, samples }: Draws,
 ): (number | null)[] {
-  const siteCount = centralWeights.length;
-  const firstShare = (site: number): number => shares[site * siteCount] ?? 0;
-  // The likeliest leader first: a site that does not lead is mostly found out by its first rival.
-  const rivals = Uint32Array.from({ length: siteCount }, (_, site) => site).sort(
-    (a, b) => firstShare(b) - firstShare(a),
+  const contenders = centralWeights.flatMap((weights, site) =>
+    weights ? { site, weights, ...rivalsOf({ ...table, values: highest }, weights, site) } : [],
   );
-  const led = new Float64Array(siteCount);
+  const led = new Float64Array(table.siteCount);
+  const values = table.values.slice();
   for (let sample = 0; sample < samples; sample++) {
     drawValues(values, random);
-    for (let site = 0; site < siteCount; site++) {
-      const weights = centralWeights[site];
-      if (weights) led[site] = (led[site] ?? 0) + shareOfLead(site, weights, values, rivals);
+    for (const contender of contenders) {
+      led[contender.site] = (led[contender.site] ?? 0) + shareOfLead(contender, values);
     }
   }
   return centralWeights.map((weights, site) => (weights ? (led[site] ?? 0) / samples : null));
 }
 
+function rivalsOf(highest: ValueTable, weights: Float64Array, site: number) {
+  const sites = Uint32Array.from({ length: highest.siteCount }, (_, other) => other);
+  const reach = overallValues(highest, weights);
+  fallingOrder(reach, sites);
+  return {
+    rivals: sites.filter((other) => other !== site),
+    reach: reach.filter((_, place) => sites[place] !== site),
+  };
+}
+
 /** 1 where a site leads alone, its share of a tie, 0 where another stands above it. */
-function shareOfLead(site: number, weights: Float64Array, values: Float64Array, rivals: Uint32Array): number {
+function shareOfLead({ site, weights, rivals, reach }: Contender, values: Float64Array): number {
   const own = overallValue(weights, values, site * weights.length);
-  let tied = 0;
-  for (let k = 0; k < rivals.length; k++) {
-    const above = overallValue(weights, values, (rivals[k] ?? 0) * weights.length) - own;
-    if (above > TIE) return 0;
-    if (above >= -TIE) tied++;
+  let level = 1;
+  // Twice a tie leaves room for rounding in what a rival can reach.
+  for (let k = 0; k < rivals.length && (reach[k] ?? 0) >= own - 2 * TIE; k++) {
+    const ahead = overallValue(weights, values, (rivals[k] ?? 0) * weights.length) - own;
+    if (ahead > TIE) return 0;
+    if (ahead >= -TIE) level++;
   }
-  return 1 / tied;
+  return 1 / level;
 }

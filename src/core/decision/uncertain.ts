@@ -51,6 +51,16 @@ export function valueSampler(prepared: Prepared, figures: readonly UncertainFigu
   };
 }
 
+/** The values of a table with every uncertain figure at whichever end is worth more. */
+export function highestValues(prepared: Prepared, figures: readonly UncertainFigure[]): Float64Array {
+  const highest = prepared.values.slice();
+  for (const figure of figures) {
+    const { at, low, high, span, shape } = cellOf(prepared, figure);
+    highest[at] = Math.max(valueOf(low, span, shape), valueOf(high, span, shape));
+  }
+  return highest;
+}
+
 function cellOf({ table, spans, shapes }: Prepared, figure: UncertainFigure): Cell {
   const { site, criterion, low, likely, high } = figure;
   const [span, shape] = [spans[criterion], shapes[criterion]];
