@@ -93,7 +93,8 @@ test('two people at one field: the second sees both versions and chooses', async
   await lead.getByRole('button', { name: 'Put yours in its place' }).click();
   await expect(engineer.getByLabel('Flights a year')).toHaveValue('7');
 
-  // Different fields go together without a question.
+  // Different fields go together without a question; the browser itself notes the stale write.
+  lead.complaints.expect(/status of 409/);
   await lead.getByLabel('Parking altitude').fill('190');
   await engineer.getByLabel('Flights a year').fill('2');
   await engineer.getByLabel('Flights a year').blur();

@@ -26,16 +26,22 @@ export function OrbitFieldset({ form, onLeave }: FieldsetProps) {
     control: form.control,
     name: ['perigeeKm', 'apogeeKm', 'sunSynchronous'],
   });
+  // A complaint is withdrawn at the first change, so that nothing moves under the pointer when the field is left.
+  const withdraw = (name: keyof OrbitFields) => form.clearErrors(name);
   const text = (name: 'name' | 'code') => ({
     label: ORBIT_LABELS[name],
     error: errors[name],
-    ...form.register(name, { onBlur: () => onLeave(name) }),
+    ...form.register(name, { onBlur: () => onLeave(name), onChange: () => withdraw(name) }),
   });
   const figure = (name: NumberName, unit?: string) => ({
     label: ORBIT_LABELS[name],
     unit,
     error: errors[name],
-    ...form.register(name, { ...asTypedNumber, onBlur: () => onLeave(name) }),
+    ...form.register(name, {
+      ...asTypedNumber,
+      onBlur: () => onLeave(name),
+      onChange: () => withdraw(name),
+    }),
   });
   const found = sunSynchronousDeg(perigeeKm, apogeeKm);
   return (

@@ -1,4 +1,4 @@
-import { useEffect, useRef, useState } from 'react';
+import { useEffect, useRef } from 'react';
 import { Segmented, Select, TextField } from '#components/ui/index.ts';
 import { STATE_NAMES } from '#contract/frame.ts';
 import { STUDY_STATES, type StudyListQuery } from '#contract/study.ts';
@@ -20,18 +20,42 @@ const ARCHIVE = [
 
 const PAUSE_MS = 250;
 
-/** Search while typing, by state, archived or not. Everything goes into the address. */
-export function StudyFilters({ query, onChange }: FiltersProps) {
-  const [text, setText] = useState(query.query);
+/**
+ * A search field that speaks after a pause in typing. What was typed before the page came to life counts too, and
+ * the query of the address is shown where it changes by other ways than typing.
+ */
+function useSearchField({ query, onChange }: FiltersProps) {
+  const field = useRef<HTMLInputElement>(null);
+  const timer = useRef<ReturnType<typeof setTimeout>>(undefined);
+  const asked = useRef(query.query);
   const latest = useRef(onChange);
   useEffect(() => {
     latest.current = onChange;
   });
+  const ask = () => {
+    clearTimeout(timer.current);
+    timer.current = setTimeout(() => {
+      const text = field.current?.value.trim() ?? '';
+      if (text === asked.current) return;
+      asked.current = text;
+      latest.current({ query: text });
+    }, PAUSE_MS);
+  };
   useEffect(() => {
-    if (text.trim() === query.query) return;
-    const timer = setTimeout(() => latest.current({ query: text.trim() }), PAUSE_MS);
-    return () => clearTimeout(timer);
-  }, [text, query.query]);
+    ask();
+    return () => clearTimeout(timer.current);
+  }, []);
+  useEffect(() => {
+    if (query.query === asked.current) return;
+    asked.current = query.query;
+    if (field.current) field.current.value = query.query;
+  }, [query.query]);
+  return { ref: field, defaultValue: query.query, onInput: ask };
+}
+
+/** Search while typing, by state, archived or not. Everything goes into the address. */
+export function StudyFilters({ query, onChange }: FiltersProps) {
+  const search = useSearchField({ query, onChange });
   return (
     <div className="mb-4 flex flex-wrap items-end gap-4" role="search" aria-label="Studies">
       <div className="w-full phone:w-80">
@@ -40,8 +64,7 @@ export function StudyFilters({ query, onChange }: FiltersProps) {
           hint="In title, organisation and question"
           type="search"
           maxLength={200}
-          value={text}
-          onChange={(event) => setText(event.target.value)}
+          {...search}
         />
       </div>
       <div className="w-44 phone:pb-5">

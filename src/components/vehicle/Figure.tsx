@@ -26,7 +26,11 @@ export function Figure({ form, locked, onLeave, name, ...looks }: FigureProps) {
       {...looks}
       error={form.getFieldState(name, form.formState).error}
       readOnly={locked}
-      {...form.register(name, { ...asTypedNumber, onBlur: () => onLeave(name) })}
+      {...form.register(name, {
+        ...asTypedNumber,
+        onBlur: () => onLeave(name),
+        onChange: () => form.clearErrors(name),
+      })}
     />
   );
 }
