@@ -1,22 +1,11 @@
 import { eq, sql } from 'drizzle-orm';
 import type { Db, PooledDb } from '#db/client.ts';
-import { record } from '#db/schema/record.ts';
+import { insertEntries, type RecordEntry } from '#db/queries/record.ts';
 import { study } from '#db/schema/study.ts';
 import { AppError, notFound } from '#server/errors.ts';
 import type { Member } from '#server/member.ts';
 
-/** One line of the record. `from` is null for what was made, `to` for what was removed. */
-export interface RecordEntry {
-  object: string;
-  objectId: string;
-  action: string;
-  from?: unknown;
-  to?: unknown;
-}
-
-/** Taken before numbering record lines, so that their numbers appear in the order of commits. */
-const RECORD_LOCK = 20_310_401;
-const ENTRIES_A_STATEMENT = 2_000;
+export type { RecordEntry };
 
 /** Writes lines of the record within the change's transaction. */
 export async function writeRecord(
@@ -24,19 +13,7 @@ export async function writeRecord(
   by: { studyId: string | null; userId: string | null; revision: number | null },
   entries: readonly RecordEntry[],
 ): Promise<void> {
-  if (entries.length === 0) return;
-  await tx.execute(sql`select pg_advisory_xact_lock(${RECORD_LOCK})`);
-  for (let i = 0; i < entries.length; i += ENTRIES_A_STATEMENT)
-    await tx.insert(record).values(
-      entries.slice(i, i + ENTRIES_A_STATEMENT).map((e) => ({
-        ...by,
-        object: e.object,
-        objectId: e.objectId,
-        action: e.action,
-        from: e.from ?? null,
-        to: e.to ?? null,
-      })),
-    );
+  if (entries.length > 0) await insertEntries(tx, { ...by, entries });
 }
 
 export type StudyRow = typeof study.$inferSelect;

@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm';
+import { asc, eq } from 'drizzle-orm';
 import pg from 'pg';
 import { expect, test } from 'vitest';
 import { record } from '#db/schema/record.ts';
@@ -82,6 +82,30 @@ test('changes at the same time take turns: no revision is skipped or given twice
   const member = await studyWith(db, 'engineer');
   const made = await Promise.all(['a', 'b', 'c', 'd'].map((title) => retitle(member, 'inputs', title)));
   expect(made.map(({ revision }) => revision).sort()).toEqual([2, 3, 4, 5]);
+});
+
+test('many lines are numbered in their order, and keep what they say', async () => {
+  const member = await studyWith(db, 'engineer');
+  const says = [undefined, null, 'Trial', '', 1.5, false, [], { a: null, b: ['"', 'Gråskjær'] }];
+  const entries = Array.from({ length: 2_500 }, (_, i) => ({
+    object: 'site',
+    objectId: String(i),
+    action: 'change',
+    from: says[i % says.length],
+    to: says[(i + 1) % says.length],
+  }));
+  await changeStudy(db, { member, kind: 'inputs' }, async () => ({ result: {}, entries }));
+  const { studyId, userId } = member;
+  const lines = await db.select().from(record).where(eq(record.studyId, studyId)).orderBy(asc(record.id));
+  expect(lines).toMatchObject(
+    entries.map(({ from, to, ...line }) => ({
+      ...line,
+      userId,
+      revision: 2,
+      from: from ?? null,
+      to: to ?? null,
+    })),
+  );
 });
 
 test('not even the owner changes the record', async () => {
