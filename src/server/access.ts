@@ -53,6 +53,9 @@ export const ROUTES: Readonly<Record<string, RouteRules>> = {
   '/api/auth/[...all]': { GET: 'public', POST: 'public' },
   '/api/v1/openapi.json': { GET: 'public' },
   '/api/v1/evaluate': { POST: 'signed-in' },
+  '/api/v1/decide': { POST: 'signed-in' },
+  '/api/v1/pairwise': { POST: 'signed-in' },
+  '/api/v1/concordance': { POST: 'signed-in' },
   '/api/v1/events': { GET: 'signed-in' },
   '/api/v1/studies': { GET: 'signed-in', POST: 'signed-in' },
   '/api/v1/vehicles': { GET: 'signed-in' },
@@ -83,6 +86,7 @@ export const ROUTES: Readonly<Record<string, RouteRules>> = {
   [`${STUDY}/ranking`]: { GET: 'study:read' },
   [`${STUDY}/memo.pdf`]: { GET: 'study:read' },
   [`${STUDY}/memo-inputs.json`]: { GET: 'study:read' },
+  [`${STUDY}/sections`]: { GET: 'study:read' },
   [`${STUDY}/events`]: { GET: 'study:read' },
 
   // Account and administration

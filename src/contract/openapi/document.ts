@@ -4,6 +4,7 @@ import { describeOperation, type Operations, type Verb } from './operation.ts';
 import { peopleOperations } from './people.ts';
 import { siteOperations } from './sites.ts';
 import { studyOperations } from './study.ts';
+import { weighingOperations } from './weighing.ts';
 
 /** Every address of the interface, described by the schemas that check its requests. */
 export const operations: Operations = {
@@ -15,6 +16,7 @@ export const operations: Operations = {
       answer: EvaluateOutput,
     },
   },
+  ...weighingOperations,
   ...studyOperations,
   ...siteOperations,
   ...peopleOperations,

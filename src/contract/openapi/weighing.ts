@@ -1,0 +1,34 @@
+import { references, weighingReferences } from '#core/references.ts';
+import { ConcordanceInput, ConcordanceOutput, PairwiseInput, PairwiseOutput } from '../compare.ts';
+import { DecideInput, DecideOutput } from '../decide.ts';
+import type { Operations } from './operation.ts';
+
+const { saaty, kendall, ...ofDecide } = weighingReferences;
+const stateless = (...sources: string[]): string => `Stateless. Sources: ${sources.join('; ')}.`;
+
+export const weighingOperations: Operations = {
+  '/api/v1/decide': {
+    post: {
+      summary: 'Criteria, weights and alternatives in; ranking, and whether it holds, out',
+      description: stateless(references.keeneyRaiffa, ...Object.values(ofDecide)),
+      body: DecideInput,
+      answer: DecideOutput,
+    },
+  },
+  '/api/v1/pairwise': {
+    post: {
+      summary: 'Pairwise judgements in, weights and their consistency out',
+      description: stateless(saaty),
+      body: PairwiseInput,
+      answer: PairwiseOutput,
+    },
+  },
+  '/api/v1/concordance': {
+    post: {
+      summary: 'Rankings in, Kendall’s W out',
+      description: stateless(kendall),
+      body: ConcordanceInput,
+      answer: ConcordanceOutput,
+    },
+  },
+};
