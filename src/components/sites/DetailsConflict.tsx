@@ -1,7 +1,7 @@
 import { Conflict } from '#components/ui/Conflict.tsx';
 import type { Criterion } from '#contract/criterion.ts';
 import type { ChangedSite, SitePatch } from '#contract/site.ts';
-import { CELL_NAMES, CELLS, cellWords } from './read-site.ts';
+import { CELL_NAMES, CELLS, cellText } from './read-site.ts';
 
 interface DetailsConflictProps {
   patch: SitePatch;
@@ -14,7 +14,7 @@ interface DetailsConflictProps {
 /** The fields of the patch, as they are in one version of the site: "Latitude −4.7218; Notes by the river". */
 function inWords(site: ChangedSite, patch: SitePatch, criteria: readonly Criterion[]): string {
   const cells = CELLS.filter((key) => patch[key] !== undefined).map(
-    (key) => `${CELL_NAMES[key]} ${cellWords(site, key)}`,
+    (key) => `${CELL_NAMES[key]} ${cellText(site, key) || 'all round'}`,
   );
   const notes = patch.notes === undefined ? [] : [`Notes ${site.notes || 'empty'}`];
   const figures = criteria

@@ -2,7 +2,7 @@ import { Conflict } from '#components/ui/Conflict.tsx';
 import type { Site } from '#contract/site.ts';
 import { EditCell } from './EditCell.tsx';
 import { COLUMNS } from './grid-keys.ts';
-import { azimuthWords, CELL_NAMES, cellWords, type CellKey } from './read-site.ts';
+import { azimuthWords, CELL_NAMES, cellText, cellWords, type CellKey } from './read-site.ts';
 import type { CellConflict, Edit, Editing } from './use-editing.ts';
 
 interface RowProps {
@@ -82,8 +82,10 @@ export function SiteRow(props: RowProps) {
 /** Someone changed the site while this person was typing: both figures, under the row, and the person chooses. */
 export function ConflictRow({ conflict, editing }: { conflict: CellConflict; editing: Editing }) {
   const { current, key, patch } = conflict;
-  const theirs = cellWords(current, key);
-  const yours = cellWords({ ...current, ...patch, values: current.values, version: current.version }, key);
+  // Every digit: two figures that differ must not print alike.
+  const words = (site: Site) => cellText(site, key) || 'all round';
+  const theirs = words(current);
+  const yours = words({ ...current, ...patch, values: current.values, version: current.version });
   return (
     <tr>
       <td colSpan={COLUMNS.length} className="conflict-cell">

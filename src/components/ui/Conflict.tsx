@@ -1,4 +1,4 @@
-import type { ReactNode } from 'react';
+import { useEffect, useRef, type ReactNode } from 'react';
 import { formatTimeUtc } from '#contract/format.ts';
 import { Button } from './Button.tsx';
 
@@ -20,8 +20,11 @@ interface ConflictProps {
 
 /** A stale write: both versions side by side, and the person chooses. Nothing is overwritten silently. */
 export function Conflict(props: ConflictProps) {
+  const box = useRef<HTMLDivElement>(null);
+  // It may come up past the end of what is in view, as under a long form.
+  useEffect(() => box.current?.scrollIntoView({ block: 'nearest' }), []);
   return (
-    <div className="box" role="alert">
+    <div className="box" role="alert" ref={box}>
       <p className="box-fact">
         {props.by ?? 'Someone'} changed {props.what} while you were typing
       </p>
