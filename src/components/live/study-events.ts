@@ -73,16 +73,16 @@ function listen(listener: (message: Message) => void): () => void {
   return () => listeners.delete(listener);
 }
 
-/** Calls back for every change of one study made anywhere, and for gaps. `handle` should be stable. */
+/** Calls back for every change of one study made anywhere, and for gaps. @returns how to stop */
+export const onStudyEvents = (studyId: string, handle: (event: LiveEvent) => void): (() => void) =>
+  listen((message) => {
+    if (message.kind === 'connection') return;
+    if (message.kind === 'gap' || message.change.studyId === studyId) handle(message);
+  });
+
+/** The same for an island. `handle` should be stable. */
 export function useStudyEvents(studyId: string, handle: (event: LiveEvent) => void): void {
-  useEffect(
-    () =>
-      listen((message) => {
-        if (message.kind === 'connection') return;
-        if (message.kind === 'gap' || message.change.studyId === studyId) handle(message);
-      }),
-    [studyId, handle],
-  );
+  useEffect(() => onStudyEvents(studyId, handle), [studyId, handle]);
 }
 
 /** Whether changes of others arrive right now; 'lost' is worth saying on the screen. */

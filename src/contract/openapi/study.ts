@@ -14,6 +14,7 @@ import {
   StudyVehicleInput,
 } from '../requirement.ts';
 import { StudyEvaluation, StudyInputs } from '../study-inputs.ts';
+import { StudySections } from '../sections.ts';
 import { Study, StudyInput, StudyList, StudyListQuery, StudyPatch } from '../study.ts';
 import { Weights, WeightsInput, WeightsQuery } from '../weights.ts';
 import { z } from '../zod.ts';
@@ -124,6 +125,9 @@ export const studyOperations: Operations = {
       summary: 'The inputs whose checksum a memo prints, as canonical JSON',
       answer: { type: 'application/json', description: 'The very bytes that the SHA-256 is taken of' },
     },
+  },
+  [`${STUDY}/sections`]: {
+    get: { summary: 'The sections, each with its line of fact', answer: StudySections },
   },
   [`${STUDY}/events`]: { get: { summary: 'Changes of this study, as they happen', answer: EVENTS } },
   '/api/v1/events': { get: { summary: 'Changes of all your studies, as they happen', answer: EVENTS } },
