@@ -1,7 +1,7 @@
 import type { Page } from '@playwright/test';
 import { DEMO_DOMAIN } from '#scripts/demo.ts';
 import { fromApp, newStudy } from './support/studies.ts';
-import { expect, test } from './support/test.ts';
+import { expect, test, type Open } from './support/test.ts';
 
 const CRITERION = 'Cost to first launch';
 const WITHIN_MS = 2_000;
@@ -14,10 +14,7 @@ async function give(page: Page, value: string): Promise<void> {
 }
 
 /** A lead and a reader before the same ranking. */
-async function together(
-  open: Parameters<Parameters<typeof test>[1]>[0]['open'],
-  baseURL: string | undefined,
-) {
+async function together(open: Open, baseURL: string | undefined) {
   const lead = await open({ person: 'lead' });
   const study = await newStudy(lead.request, baseURL, 'Seen by two');
   const member = { email: `reader@${DEMO_DOMAIN}`, role: 'reader' };

@@ -16,9 +16,11 @@ interface Options extends BrowserContextOptions {
   person: Person | null;
 }
 
+/** A page of a context of its own, signed in as one of the demo's people; its complaints fail the test. */
+export type Open = (options: Options) => Promise<Page & { complaints: Complaints }>;
+
 interface Fixtures {
-  /** A page of a context of its own, signed in as one of the demo's people; its complaints fail the test. */
-  open: (options: Options) => Promise<Page & { complaints: Complaints }>;
+  open: Open;
 }
 
 const states = new Map<Person, State>();
