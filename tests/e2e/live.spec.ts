@@ -1,4 +1,4 @@
-import type { Page } from '@playwright/test';
+import type { Page, Request } from '@playwright/test';
 import { DEMO_DOMAIN } from '#scripts/demo.ts';
 import { fromApp, newStudy } from './support/studies.ts';
 import { expect, test, type Open } from './support/test.ts';
@@ -63,11 +63,16 @@ test('however many tabs a browser has open, it holds one stream', async ({ open,
   const { lead, study } = await together(open, baseURL);
   const reader = await open({ person: 'reader' });
   let streams = 0;
-  const isStream = (url: string): boolean => url.endsWith('/events');
-  reader.context().on('request', (request) => (streams += isStream(request.url()) ? 1 : 0));
-  for (const type of ['requestfinished', 'requestfailed'] as const)
-    reader.context().on(type, (request) => (streams -= isStream(request.url()) ? 1 : 0));
-  const tabs = [reader, await reader.context().newPage(), await reader.context().newPage()];
+  const counted =
+    (step: 1 | -1) =>
+    (request: Request): void => {
+      if (request.url().endsWith('/events')) streams += step;
+    };
+  const context = reader.context();
+  context.on('request', counted(1));
+  context.on('requestfinished', counted(-1));
+  context.on('requestfailed', counted(-1));
+  const tabs = [reader, await context.newPage(), await context.newPage()];
   for (const tab of tabs) {
     await tab.goto(`/studies/${study}/ranking`);
     await expect(points(tab)).toBeVisible();
