@@ -6,12 +6,15 @@ import { prepare, type Prepared } from '#core/decision/prepare.ts';
 import { rank, type Ranking as RankedTable } from '#core/decision/rank.ts';
 import { weightsFromPoints } from '#core/decision/weights.ts';
 import type { Criterion } from './criterion.ts';
+import { decimalsOf } from './ranking-words.ts';
 import type { RankingFigures, RankingState } from './ranking.ts';
 
 /** Figures made ready for weighing; made once, ranked as often as the weights move. */
 export interface PreparedFigures {
   figures: RankingFigures;
   prepared: Prepared;
+  /** One count of decimals a criterion, for its figures. */
+  decimals: readonly number[];
   /** Words of a cell by its place in the table. */
   notes: ReadonlyMap<number, string>;
 }
@@ -42,6 +45,7 @@ export function prepareFigures(figures: RankingFigures): PreparedFigures {
   return {
     figures,
     prepared: prepare(criteria.map(toWeighing), figureTable(cells)),
+    decimals: criteria.map((_, place) => decimalsOf(figures, place)),
     notes: new Map(notes.map(([site, criterion, words]) => [site * criteria.length + criterion, words])),
   };
 }

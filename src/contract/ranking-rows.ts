@@ -2,7 +2,6 @@ import { failuresOf, type Listed } from '#core/decision/listing.ts';
 import { CELL } from '#core/decision/figures.ts';
 import { decimalsNeeded } from '#core/printed/figure.ts';
 import { formatNumber } from './format.ts';
-import { decimalsOf } from './ranking-words.ts';
 import type { RankingModel } from './ranking-model.ts';
 import type {
   Contribution,
@@ -49,7 +48,7 @@ function reasonsOf(model: RankingModel, site: number): SetAsideSite['reasons'] {
     if (!criterion?.limit) return [];
     const { id, name, unit, limit } = criterion;
     const at = site * prepared.table.criterionCount + j;
-    const decimals = decimalsOf(figures, j);
+    const decimals = model.decimals[j] ?? 0;
     const figure =
       prepared.table.states[at] === CELL.figure
         ? [formatNumber(prepared.table.figures[at] ?? 0, decimals), unit].filter(Boolean).join(' ')

@@ -1,5 +1,5 @@
 import { QUANTITIES } from '#contract/quantity.ts';
-import { decimalsOf, letterOf, valueDecimals } from '#contract/ranking-words.ts';
+import { letterOf, valueDecimals } from '#contract/ranking-words.ts';
 import type { RankingModel } from '#contract/ranking-model.ts';
 import type { Ranking, WeighedCriterion } from '#contract/ranking.ts';
 import { closedSums } from '#core/printed/closing.ts';
@@ -27,7 +27,7 @@ function printedWeights(criteria: readonly WeighedCriterion[]): { weights: numbe
 
 /** Decimals of a column: of all its figures where they are known, of the drawn rows before. */
 function columnDecimals(model: RankingModel | null, ranking: Ranking, place: number): number {
-  if (model) return decimalsOf(model.figures, place);
+  if (model) return model.decimals[place] ?? 0;
   const quantity = ranking.criteria[place]?.quantity;
   if (quantity) return QUANTITIES[quantity].decimals;
   const rows = [...ranking.ranked, ...ranking.incomplete, ...ranking.setAside];

@@ -16,7 +16,15 @@ export function listing({ ranked, ranks, incomplete, setAside }: Ranking): Liste
   ];
 }
 
-/** The limits a site fails, as places of their criteria. */
+/** The limits a site fails, as places of their criteria. `failures` stand in the order of the sites. */
 export function failuresOf({ failures }: Prepared, site: number): number[] {
-  return failures.filter((failure) => failure.site === site).map(({ criterion }) => criterion);
+  let low = 0;
+  for (let high = failures.length; low < high;) {
+    const middle = (low + high) >> 1;
+    if ((failures[middle]?.site ?? 0) < site) low = middle + 1;
+    else high = middle;
+  }
+  const failed: number[] = [];
+  for (; failures[low]?.site === site; low++) failed.push(failures[low]?.criterion ?? 0);
+  return failed;
 }

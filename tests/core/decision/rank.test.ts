@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import type { Criterion, Limit } from '#core/decision/criterion.ts';
 import { figureTable, type Cell } from '#core/decision/figures.ts';
+import { failuresOf } from '#core/decision/listing.ts';
 import { prepare } from '#core/decision/prepare.ts';
 import { rank, termOf } from '#core/decision/rank.ts';
 import { weightsFromPoints } from '#core/decision/weights.ts';
@@ -55,6 +56,7 @@ describe('must-meet limits', () => {
       { site: 1, criterion: 1 },
       { site: 2, criterion: 1 },
     ]);
+    expect([0, 1, 2, 3].map((site) => failuresOf(prepared, site))).toEqual([[], [0, 1], [1], []]);
     const { ranked, setAside } = rank(prepared, weigh(1, 1));
     expect([...ranked]).toEqual([0]);
     expect(setAside).toEqual([1, 2]);
