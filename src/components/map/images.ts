@@ -3,8 +3,10 @@ import type { Palette } from './palette.ts';
 const scale = 2;
 
 function drawn(side: number, paint: (pen: CanvasRenderingContext2D) => void): ImageData {
-  const canvas = new OffscreenCanvas(side * scale, side * scale);
-  const pen = canvas.getContext('2d') as unknown as CanvasRenderingContext2D | null;
+  const canvas = document.createElement('canvas');
+  canvas.width = canvas.height = side * scale;
+  // Read back at once: kept in memory, so that it waits for no graphics process.
+  const pen = canvas.getContext('2d', { willReadFrequently: true });
   if (!pen) throw new Error('a canvas gave no pen');
   pen.scale(scale, scale);
   pen.translate(side / 2, side / 2);

@@ -1,36 +1,27 @@
 import './sites.css';
-import {
-  lazy,
-  Suspense,
-  useCallback,
-  useDeferredValue,
-  useMemo,
-  useRef,
-  useState,
-  useSyncExternalStore,
-} from 'react';
+import { lazy, Suspense, useDeferredValue, useMemo, useRef, useState, useSyncExternalStore } from 'react';
 import { nameOf } from '#components/flight/words.ts';
-import { ApiError } from '#components/live/api.ts';
 import { useAddressParam } from '#components/live/address.ts';
-import { useApi, useFinding, useStep } from '#components/live/hooks.ts';
-import { useStudyEvents, type LiveEvent } from '#components/live/study-events.ts';
+import { useStep } from '#components/live/hooks.ts';
 import type { MapLayers, Projection } from '#components/map/types.ts';
-import { Button, ButtonLink } from '#components/ui/Button.tsx';
-import { Finding } from '#components/ui/Finding.tsx';
-import { EmptyState, Notice } from '#components/ui/States.tsx';
-import { toast } from '#components/ui/Toast.tsx';
-import type { Site, SiteList } from '#contract/site.ts';
+import { Button } from '#components/ui/Button.tsx';
+import { Notice } from '#components/ui/States.tsx';
+import type { SiteList } from '#contract/site.ts';
 import type { StudyInputs } from '#contract/study-inputs.ts';
 import { AddSite, type AddSiteHandle } from './AddSite.tsx';
 import { ChosenSite } from './ChosenSite.tsx';
-import { sitesFinding, textOf, type SitesFinding } from './finding.ts';
-import { RemoveSites, sitesInWords } from './RemoveSites.tsx';
+import { sitesFinding } from './finding.ts';
+import { RemoveSites } from './RemoveSites.tsx';
 import { nextSort, shownSites, sortOf } from './rows.ts';
 import { SiteDetails } from './SiteDetails.tsx';
+import { SitesHead } from './SitesHead.tsx';
 import { SitesTable } from './SitesTable.tsx';
 import { SitesToolbar, VIEWS, type View } from './SitesToolbar.tsx';
+import { TableFoot } from './TableFoot.tsx';
 import { useEditing } from './use-editing.ts';
 import { useFlights } from './use-flights.ts';
+import { useInputs } from './use-inputs.ts';
+import { useRemoval } from './use-removal.ts';
 import { useSites } from './use-sites.ts';
 
 // Asked for as soon as this file runs in a browser, beside the first drawing, not after it.
@@ -68,58 +59,6 @@ const useInBrowser = (): boolean =>
     () => false,
   );
 
-function useInputs(studyId: string, initial: StudyInputs | null): StudyInputs | null {
-  const { data, mutate } = useApi<StudyInputs>(`/api/v1/studies/${studyId}/evaluation/inputs`, {
-    ...(initial ? { fallbackData: initial, revalidateOnMount: false } : {}),
-    revalidateOnFocus: false,
-  });
-  useStudyEvents(
-    studyId,
-    useCallback(
-      (event: LiveEvent) => {
-        if (
-          event.kind === 'gap' ||
-          event.change.objects.some((object) => /orbit|vehicle|settings/.test(object))
-        )
-          void mutate();
-      },
-      [mutate],
-    ),
-  );
-  return data ?? initial;
-}
-
-function Head({
-  finding,
-  locked,
-  onAdd,
-}: {
-  finding: SitesFinding;
-  locked: string | null;
-  onAdd: () => void;
-}) {
-  useFinding(textOf(finding));
-  return (
-    <Finding
-      why={(finding.why || locked) && <p>{[finding.why, locked].filter(Boolean).join(' ')}</p>}
-      actions={
-        <>
-          <ButtonLink icon="upload" href="#upload">
-            Upload CSV
-          </ButtonLink>
-          <Button kind="primary" icon="add" notYet={locked ?? undefined} onClick={onAdd}>
-            Add a site
-          </Button>
-        </>
-      }
-    >
-      {finding.before}
-      {finding.leader && <em>{finding.leader}</em>}
-      {finding.after}
-    </Finding>
-  );
-}
-
 /** The Sites section: every candidate on the map and in the table, each saying what the other says. */
 export function SitesView({ studyId, list, inputs: initialInputs, address, locked }: SitesViewProps) {
   const store = useSites(studyId, list);
@@ -138,8 +77,7 @@ export function SitesView({ studyId, list, inputs: initialInputs, address, locke
 
   const [layers, setLayers] = useState<MapLayers>({ sectors: true, track: true, otherTracks: false });
   const [ticked, setTicked] = useState<ReadonlySet<string>>(new Set());
-  const [removing, setRemoving] = useState<readonly Site[] | null>(null);
-  const [fault, setFault] = useState<string | null>(null);
+  const removal = useRemoval(store, () => setTicked(new Set()));
   const [placing, setPlacing] = useState(false);
   const [detailsOpen, setDetailsOpen] = useState(false);
   const addSite = useRef<AddSiteHandle>(null);
@@ -163,24 +101,6 @@ export function SitesView({ studyId, list, inputs: initialInputs, address, locke
     const next = shown[(here + step + shown.length) % shown.length] ?? shown[0];
     if (next) setSiteCode(next.code);
   });
-  const restore = (removed: readonly Site[]) =>
-    store.restore(removed.map(({ id }) => id)).then(
-      () => setFault(null),
-      (error: unknown) => setFault(error instanceof ApiError ? error.message : String(error)),
-    );
-  const remove = async (gone: readonly Site[]) => {
-    try {
-      await store.remove(gone);
-      setTicked(new Set());
-      setFault(null);
-      toast(`${sitesInWords(gone)} removed`, () => void restore(gone));
-    } catch (error) {
-      if (!(error instanceof ApiError)) throw error;
-      setFault(error.message);
-      store.reload();
-    }
-    setRemoving(null);
-  };
   const add = async (draft: Parameters<typeof store.add>[0]) => {
     const made = await store.add(draft);
     setSiteCode(made.code);
@@ -226,7 +146,7 @@ export function SitesView({ studyId, list, inputs: initialInputs, address, locke
 
   return (
     <>
-      <Head finding={finding} locked={locked} onAdd={startAdding} />
+      <SitesHead finding={finding} locked={locked} onAdd={startAdding} />
       <SitesToolbar
         studyId={studyId}
         view={view}
@@ -242,11 +162,11 @@ export function SitesView({ studyId, list, inputs: initialInputs, address, locke
         onLayers={setLayers}
         ticked={tickedSites.length}
         locked={locked}
-        onRemove={() => setRemoving(tickedSites)}
+        onRemove={() => removal.ask(tickedSites)}
       />
-      {(fault ?? store.error) && (
+      {(removal.fault ?? store.error) && (
         <Notice
-          fact={fault ?? 'The sites could not be read again.'}
+          fact={removal.fault ?? 'The sites could not be read again.'}
           requestId={store.error?.requestId}
           actions={<Button onClick={() => store.reload()}>Read the sites again</Button>}
         >
@@ -294,7 +214,7 @@ export function SitesView({ studyId, list, inputs: initialInputs, address, locke
           />
         </div>
       </div>
-      <RemoveSites sites={removing} onClose={() => setRemoving(null)} onRemove={remove} />
+      <RemoveSites sites={removal.asked} onClose={removal.leave} onRemove={removal.remove} />
       {detailsOpen && chosen && (
         <SiteDetails
           studyId={studyId}
@@ -309,26 +229,5 @@ export function SitesView({ studyId, list, inputs: initialInputs, address, locke
         />
       )}
     </>
-  );
-}
-
-function TableFoot({ total, shown, onShowAll }: { total: number; shown: number; onShowAll: () => void }) {
-  if (total === 0)
-    return (
-      <EmptyState fact="No sites yet.">
-        Add one by typing its coordinates, click a place on the map, or upload a CSV.
-      </EmptyState>
-    );
-  if (shown === 0)
-    return (
-      <EmptyState fact="No site matches." actions={<Button onClick={onShowAll}>Show all sites</Button>}>
-        The text is looked for in code, name and notes.
-      </EmptyState>
-    );
-  return (
-    <p className="caption sites-hint">
-      Drag a round handle on the map, or type in the Azimuths column, to change a sector. Azimuths run
-      clockwise from north. Enter edits a cell.
-    </p>
   );
 }

@@ -38,7 +38,8 @@ export function trackOf(site: Site, orbit: InputOrbit, result: OrbitResult): Map
   if (result.way === 'out-of-reach') return null;
   const parked = result.profile === 'parking';
   const radius = (km: number) => metres(radiusOf(fromKilometres(km)));
-  return mapTrack(site.id, orbitTitle(orbit, result), {
+  const title = orbitTitle(orbit, result);
+  return mapTrack(site.id, result.way === 'direct' ? title : `${title}: first leg`, {
     latitude: fromDegrees(site.latitudeDeg),
     longitude: fromDegrees(site.longitudeDeg),
     inertialAzimuth: fromDegrees(result.inertialAzimuthDeg),
