@@ -11,9 +11,12 @@ import type { MemoFacts } from './facts.ts';
 const bound = (value: number, decimals: number): string =>
   figure(value, Math.max(decimals, decimalsNeeded([value])));
 
-function levels({ span }: WeighedCriterion, decimals: number): [string, string] {
-  if (span.kind === 'span') return [bound(span.worst, decimals), bound(span.best, decimals)];
-  return span.kind === 'flat' ? [bound(span.figure, decimals), 'all equal'] : ['–', '–'];
+/** Entered levels in full; those of the candidates as their figures are printed. */
+function levels({ span, levels: { mode } }: WeighedCriterion, decimals: number): [string, string] {
+  const text = (value: number): string =>
+    mode === 'fixed' ? bound(value, decimals) : figure(value, decimals);
+  if (span.kind === 'span') return [text(span.worst), text(span.best)];
+  return span.kind === 'flat' ? [text(span.figure), 'all equal'] : ['–', '–'];
 }
 
 function sourceOf(facts: MemoFacts, { source, quantity, orbitId }: WeighedCriterion): string {
