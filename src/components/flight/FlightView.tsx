@@ -17,12 +17,11 @@ import type { SiteResult } from '#contract/evaluate.ts';
 import type { StudyInputs } from '#contract/study-inputs.ts';
 import { computeFlights } from './compute.ts';
 import { manifestFinding, orbitFinding, type FlightFinding } from './finding.ts';
+import { MANIFEST } from './heading.ts';
 import { ManifestTable } from './ManifestTable.tsx';
 import { OrbitSheet } from './OrbitSheet.tsx';
 import { byTotal, manifestRows, rowsOf } from './rows.ts';
 import { manifestFact, nameOf, orbitFact } from './words.ts';
-
-const MANIFEST = '*';
 
 interface FlightViewProps {
   studyId: string;
