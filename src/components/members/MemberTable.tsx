@@ -8,13 +8,15 @@ import { nameOf, STANDING_NAMES } from './words.ts';
 interface MemberActions {
   /** Whether the person looking is a lead of a study that takes changes; otherwise why not. */
   locked: string | undefined;
+  /** Why they can't leave; undefined where they can. */
+  stay: string | undefined;
   onRole: (member: StudyMember, role: StudyRole) => void;
   onRemove: (member: StudyMember) => void;
 }
 
 const CHOICES = STUDY_ROLES.map((value) => ({ value, name: ROLE_NAMES[value] }));
 
-function MemberRow({ member, locked, onRole, onRemove }: { member: StudyMember } & MemberActions) {
+function MemberRow({ member, locked, stay, onRole, onRemove }: { member: StudyMember } & MemberActions) {
   const name = nameOf(member);
   return (
     <tr>
@@ -50,7 +52,7 @@ function MemberRow({ member, locked, onRole, onRemove }: { member: StudyMember }
             size="small"
             icon="remove"
             aria-label={member.you ? 'Leave the study' : `Remove ${name}`}
-            notYet={member.you ? undefined : locked}
+            notYet={member.you ? stay : locked}
             onClick={() => onRemove(member)}
           >
             {member.you ? 'Leave' : 'Remove'}

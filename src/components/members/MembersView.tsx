@@ -10,7 +10,7 @@ import { STUDY_ROLES, type StudyRole } from '#contract/study.ts';
 import { AddMember } from './AddMember.tsx';
 import { MemberTable } from './MemberTable.tsx';
 import { RemoveDialog } from './RemoveDialog.tsx';
-import { membersFinding, nameOf, ROLE_MEANINGS } from './words.ts';
+import { mayNotLeave, membersFinding, nameOf, ROLE_MEANINGS } from './words.ts';
 
 interface MembersProps {
   studyId: string;
@@ -82,6 +82,7 @@ export function MembersView({ studyId, list, locked }: MembersProps) {
       <MemberTable
         members={data.items}
         locked={locked}
+        stay={mayNotLeave(data)}
         onRole={(member, role) => void changeRole(member, role)}
         onRemove={setRemoving}
       />

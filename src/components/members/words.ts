@@ -24,3 +24,10 @@ export function membersFinding({ items, total }: MemberList): string {
   const all = formatCount(total, 'member');
   return waiting === 0 ? `${all} in this study.` : `${all} in this study, ${waiting} waiting for an account.`;
 }
+
+/** Why the person looking can't leave: the study keeps a lead. Undefined where they can, or where not all are listed. */
+export function mayNotLeave({ items, total }: MemberList): string | undefined {
+  const leads = items.filter(({ role, standing }) => role === 'lead' && standing === 'active');
+  const last = items.length === total && leads.length === 1 && leads[0]?.you === true;
+  return last ? 'A study keeps a lead, and you are the last one. Make someone else lead first.' : undefined;
+}

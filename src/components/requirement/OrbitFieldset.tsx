@@ -73,7 +73,7 @@ export function OrbitFieldset({ form, onLeave }: FieldsetProps) {
       {sunSynchronous ? (
         <p className="fld-reading" role="status">
           {found === null
-            ? 'Give both altitudes, and the inclination stands here. Where no inclination serves, this says so.'
+            ? 'Give both altitudes: the inclination that follows stands here, or that there is none.'
             : `Inclination ${formatNumber(found, 2)}°, so that the orbit’s plane turns once a year with the Sun.`}
           {errors.sunSynchronous?.message && ` ${errors.sunSynchronous.message}`}
         </p>
