@@ -22,7 +22,10 @@ interface ConflictProps {
 export function Conflict(props: ConflictProps) {
   const box = useRef<HTMLDivElement>(null);
   // It may come up past the end of what is in view, as under a long form.
-  useEffect(() => box.current?.scrollIntoView({ block: 'nearest' }), []);
+  useEffect(() => {
+    // Not returned: newer browsers answer with a promise, which React would take for a clean-up.
+    box.current?.scrollIntoView({ block: 'nearest' });
+  }, []);
   return (
     <div className="box" role="alert" ref={box}>
       <p className="box-fact">
