@@ -2,7 +2,7 @@
  * One stream of server-sent events a browser, however many tabs: HTTP/1.1 allows six connections a host. The tab
  * that holds the lock reads the stream and passes every event on; when it closes, the next tab takes over.
  */
-import { useEffect, useState } from 'react';
+import { useEffect, useSyncExternalStore } from 'react';
 
 export interface StudyChange {
   id: number;
@@ -85,15 +85,19 @@ export function useStudyEvents(studyId: string, handle: (event: LiveEvent) => vo
   useEffect(() => onStudyEvents(studyId, handle), [studyId, handle]);
 }
 
-/** Whether changes of others arrive right now; 'lost' is worth saying on the screen. */
+const onConnection = (changed: () => void): (() => void) =>
+  listen((message) => {
+    if (message.kind === 'connection') changed();
+  });
+
+/**
+ * Whether changes of others arrive right now; 'lost' is worth saying on the screen. The stream may have spoken before
+ * an island wakes, so waking starts from what the server drew.
+ */
 export function useConnection(): Connection {
-  const [state, setState] = useState<Connection>(connection);
-  useEffect(
-    () =>
-      listen((message) => {
-        if (message.kind === 'connection') setState(message.connection);
-      }),
-    [],
+  return useSyncExternalStore(
+    onConnection,
+    () => connection,
+    () => 'connecting',
   );
-  return state;
 }
