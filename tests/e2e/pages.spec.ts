@@ -61,6 +61,8 @@ for (const { name, address, person, status = 200 } of PAGES)
     test(`${name} by ${theme}: no violation, no complaint, nothing wider than the screen`, async ({
       open,
     }) => {
+      // The memo is a long document, and axe reads all of it.
+      test.slow();
       for (const viewport of WIDTHS) {
         const page = await open({ person, colorScheme, viewport, reducedMotion: 'reduce' });
         if (status !== 200) page.complaints.expect(new RegExp(`status of ${status}`));
