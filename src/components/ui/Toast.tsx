@@ -8,7 +8,9 @@ interface Toast {
 }
 
 const STAYS_MS = 8_000;
-let shown: readonly Toast[] = [];
+/** What the server drew: the region may wake after the first toast has been announced. */
+const NONE: readonly Toast[] = [];
+let shown = NONE;
 let lastId = 0;
 const listeners = new Set<() => void>();
 
@@ -38,7 +40,7 @@ export function ToastRegion() {
       return () => listeners.delete(listener);
     },
     () => shown,
-    () => shown,
+    () => NONE,
   );
   return (
     <div className="toasts" role="status" aria-live="polite">
