@@ -1,6 +1,7 @@
 import type { APIContext } from 'astro';
 import { z } from 'zod';
 import { AppError, type FieldError } from '#server/errors.ts';
+import { logError } from '#server/log.ts';
 
 /** An answer as RFC 9457 problem details. */
 export function problem(error: AppError, requestId?: string): Response {
@@ -30,7 +31,7 @@ function toAppError(error: unknown, requestId: string): AppError {
     return new AppError('invalid', 'Some of the input does not fit. Nothing was saved.', {
       errors: fieldErrors(error),
     });
-  console.error(JSON.stringify({ requestId, error: String(error), stack: (error as Error)?.stack }));
+  logError({ requestId, error: String(error), stack: (error as Error)?.stack ?? '' });
   return databaseAway(error)
     ? new AppError('unavailable', 'The database does not answer. Nothing was saved; try again in a moment.')
     : new AppError('internal', 'Something failed on the server. Nothing was saved.');

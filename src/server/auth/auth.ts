@@ -9,6 +9,7 @@ import { allowedOrigins, env, publicOrigin } from '#server/env.ts';
 import { addressLetter, resetLetter, type Letter } from '#server/mail/letters.ts';
 import { queueMail } from '#server/mail/queue-mail.ts';
 import { bindPendingMemberships } from '#server/members/pending.ts';
+import { logError } from '#server/log.ts';
 import { windowedLimit } from './rate-limit.ts';
 
 const SESSION_S = 60 * 60 * 24 * 7;
@@ -81,7 +82,14 @@ function make() {
     advanced: { cookiePrefix: 'spinward', ipAddress: { ipAddressHeaders: ['x-client-ip'] } },
     telemetry: { enabled: false },
     // A wrong password is a person's everyday business and no matter for the log.
-    logger: { level: 'error' },
+    logger: {
+      level: 'error',
+      log: (_level, message, ...rest) =>
+        logError({
+          auth: message,
+          cause: rest.map((one) => (one instanceof Error ? one.message : '')).join(' '),
+        }),
+    },
   });
 }
 
