@@ -34,4 +34,12 @@ export const weighingReferences = {
   kendall: 'Kendall, Rank Correlation Methods (1948): coefficient of concordance with ties corrected',
 } as const;
 
+/** Sources of the ways in which a member states weights, beside points and pairwise comparison. */
+export const statementReferences = {
+  edwardsBarron:
+    'Edwards and Barron, SMARTS and SMARTER: improved simple methods for multiattribute utility measurement (1994): swing weights',
+  barronBarrett:
+    'Barron and Barrett, Decision quality using ranked attribute weights (1996): rank-order centroid weights',
+} as const;
+
 export type ReferenceKey = keyof typeof references;

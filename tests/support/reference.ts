@@ -11,6 +11,8 @@ const columns = {
   'sun-synchronous': ['quantity', 'perigee_km', 'inclination_deg'],
   rocket: ['quantity', 'payload_kg', 'delta_v_mps'],
   'decision-weights': ['points', 'place'],
+  'decision-swing': ['points', 'place'],
+  'decision-centroid': ['count', 'place'],
   'decision-office': ['points', 'values'],
   'decision-additive': ['figures', 'rank'],
   'decision-shapes': ['function', 'figure'],
