@@ -1,5 +1,6 @@
 import { listOf } from './list.ts';
 import { z } from './zod.ts';
+import { areKnots, MOST_KNOTS } from '#core/decision/shape.ts';
 import { QUANTITIES, QUANTITY_KEYS } from './quantity.ts';
 
 const finite = z.number('Enter a number.');
@@ -19,6 +20,42 @@ export const CriterionLimit = z
   .meta({ id: 'CriterionLimit' });
 export type CriterionLimit = z.infer<typeof CriterionLimit>;
 
+export const MOST_CURVATURE = 20;
+const CURVATURE = `A curvature lies between −${MOST_CURVATURE} and ${MOST_CURVATURE}.`;
+
+/** How value grows from the worst level to the best; a knot is [position from worst 0 to best 1, value 0 to 1]. */
+export const CriterionShape = z
+  .discriminatedUnion('kind', [
+    z.strictObject({ kind: z.literal('straight') }),
+    z.strictObject({
+      kind: z.literal('exponential'),
+      curvature: finite.min(-MOST_CURVATURE, CURVATURE).max(MOST_CURVATURE, CURVATURE),
+    }),
+    z.strictObject({
+      kind: z.literal('piecewise'),
+      knots: z
+        .array(z.tuple([finite, finite]))
+        .max(MOST_KNOTS, `A value function has up to ${MOST_KNOTS} points.`)
+        .refine(
+          (knots) => areKnots(knots),
+          'Points run from (0, 0) to (1, 1), each beyond the one before and none falling.',
+        ),
+    }),
+  ])
+  .meta({ id: 'CriterionShape' });
+export type CriterionShape = z.infer<typeof CriterionShape>;
+
+/** A rating has five named steps, 0 to 4. */
+export const RATING_STEPS = 5;
+export const DEFAULT_STEPS = ['Very poor', 'Poor', 'Fair', 'Good', 'Very good'];
+const steps = z
+  .array(z.string().trim().min(1, 'Name every step.').max(60, 'A step’s name has up to 60 characters.'))
+  .length(RATING_STEPS, 'A rating has five steps.')
+  .refine(
+    (names) => new Set(names.map((one) => one.toLowerCase())).size === names.length,
+    'Steps differ in name.',
+  );
+
 const name = z
   .string()
   .trim()
@@ -36,11 +73,16 @@ export const Criterion = z
     unit: z.string(),
     direction,
     /** A text criterion is shown with the sites and never weighed. */
-    source: z.enum(['computed', 'entered', 'text']),
+    source: z.enum(['computed', 'entered', 'rating', 'text']),
     quantity: z.enum(QUANTITY_KEYS).nullable(),
     /** The orbit a computed criterion is for; null for the whole manifest. */
     orbitId: z.uuid().nullable(),
     levels: CriterionLevels,
+    shape: CriterionShape,
+    /** The group it is weighed in; null where it stands by itself. */
+    groupId: z.uuid().nullable(),
+    /** Names of a rating's steps 0 to 4; null where it is no rating. */
+    steps: z.array(z.string()).nullable(),
     limit: CriterionLimit.nullable(),
     version: z.int(),
   })
@@ -70,6 +112,8 @@ const levelsFit = (ctx: z.core.ParsePayload<Levelled>): void => {
 
 const settings = {
   levels: CriterionLevels.default({ mode: 'candidates' }),
+  shape: CriterionShape.default({ kind: 'straight' }),
+  groupId: z.uuid().nullable().default(null),
   limit: CriterionLimit.nullable().default(null),
 };
 
@@ -97,8 +141,19 @@ export const EnteredInput = z
   .strictObject({ source: z.enum(['entered', 'text']), name, unit: unit.default(''), direction, ...settings })
   .check(levelsFit);
 
+export const RatingInput = z
+  .strictObject({
+    source: z.literal('rating'),
+    name,
+    direction: direction.default('more'),
+    steps: steps.default(DEFAULT_STEPS),
+    ...settings,
+    levels: CriterionLevels.default({ mode: 'fixed', worst: 0, best: RATING_STEPS - 1 }),
+  })
+  .check(levelsFit);
+
 export const CriterionInput = z
-  .discriminatedUnion('source', [ComputedInput, EnteredInput])
+  .discriminatedUnion('source', [ComputedInput, EnteredInput, RatingInput])
   .meta({ id: 'CriterionInput' });
 export type CriterionInput = z.output<typeof CriterionInput>;
 export type CriterionDraft = z.input<typeof CriterionInput>;
@@ -111,6 +166,9 @@ export const CriterionPatch = z
     direction: direction.optional(),
     source: z.enum(['entered', 'text']).optional(),
     levels: CriterionLevels.optional(),
+    shape: CriterionShape.optional(),
+    groupId: z.uuid().nullable().optional(),
+    steps: steps.optional(),
     limit: CriterionLimit.nullable().optional(),
     position: z.int().min(0).optional(),
     version: z.int().optional(),
@@ -121,3 +179,15 @@ export type CriterionPatch = z.infer<typeof CriterionPatch>;
 
 export const CriterionList = listOf(Criterion);
 export type CriterionList = z.infer<typeof CriterionList>;
+
+export const CriterionGroup = z
+  .object({ id: z.uuid(), name: z.string(), version: z.int() })
+  .meta({ id: 'CriterionGroup' });
+export type CriterionGroup = z.infer<typeof CriterionGroup>;
+
+export const CriterionGroupInput = z.strictObject({ name }).meta({ id: 'CriterionGroupInput' });
+export const CriterionGroupPatch = z
+  .strictObject({ name, version: z.int().optional() })
+  .meta({ id: 'CriterionGroupPatch' });
+export const CriterionGroupList = listOf(CriterionGroup);
+export type CriterionGroupList = z.infer<typeof CriterionGroupList>;

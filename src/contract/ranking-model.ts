@@ -8,6 +8,7 @@ import { weightsFromPoints } from '#core/decision/weights.ts';
 import type { Criterion } from './criterion.ts';
 import { decimalsOf } from './ranking-words.ts';
 import type { RankingFigures, RankingState } from './ranking.ts';
+import type { WeightStatement } from './weights.ts';
 
 /** Figures made ready for weighing; made once, ranked as often as the weights move. */
 export interface PreparedFigures {
@@ -19,17 +20,17 @@ export interface PreparedFigures {
   notes: ReadonlyMap<number, string>;
 }
 
-/** A ranking under one set of points. */
+/** A ranking under one statement of weights. */
 export interface RankingModel extends PreparedFigures {
   state: RankingState;
-  /** One a criterion; all 0 where no points are given. */
+  /** One a criterion; all 0 where nothing is said of them. */
   weights: Float64Array;
   table: RankedTable;
   /** Every site once where there are ranks; else only those set aside. */
   rows: Listed[];
 }
 
-function toWeighing({ direction, levels, limit }: Criterion): WeighingCriterion {
+function toWeighing({ direction, levels, shape, limit }: Criterion): WeighingCriterion {
   return {
     direction,
     levels:
@@ -37,6 +38,7 @@ function toWeighing({ direction, levels, limit }: Criterion): WeighingCriterion 
         ? { kind: 'fixed', worst: levels.worst, best: levels.best }
         : { kind: 'candidates' },
     limit: limit && { kind: limit.kind, figure: limit.value },
+    shape,
   };
 }
 
@@ -50,9 +52,9 @@ export function prepareFigures(figures: RankingFigures): PreparedFigures {
   };
 }
 
-export function rankFigures(ready: PreparedFigures, points: Readonly<Record<string, number>>): RankingModel {
+export function rankFigures(ready: PreparedFigures, statement: WeightStatement): RankingModel {
   const { figures, prepared } = ready;
-  const given = weightsFromPoints(figures.criteria.map(({ id }) => points[id] ?? 0));
+  const given = weightsFromPoints(figures.criteria.map(({ id }) => statement.points[id] ?? 0));
   const weights = given.kind === 'set' ? given.weights : new Float64Array(figures.criteria.length);
   const table = rank(prepared, weights);
   const state = stateOf(figures, given.kind === 'set');

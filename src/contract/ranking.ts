@@ -1,4 +1,5 @@
 import { Criterion } from './criterion.ts';
+import { FigureParticulars } from './site.ts';
 import { WeightsOf, type Weights } from './weights.ts';
 import { z } from './zod.ts';
 
@@ -27,6 +28,10 @@ export const RankingFigures = z
     cells: z.array(z.array(RankingCell)),
     /** Words for cells that need them: site's place, criterion's place, words. */
     notes: z.array(z.tuple([z.int(), z.int(), z.string()])),
+    /** What is known of entered figures: site's place, criterion's place, low, high, source, date, confidence. */
+    particulars: z.array(z.tuple([z.int(), z.int(), FigureParticulars])),
+    /** Figures with evidence files: site's place, criterion's place, how many. */
+    evidence: z.array(z.tuple([z.int(), z.int(), z.int()])),
   })
   .meta({ id: 'RankingFigures' });
 export type RankingFigures = z.infer<typeof RankingFigures>;

@@ -36,6 +36,26 @@ const Values = z
   .record(z.uuid(), EnteredValue)
   .meta({ description: 'Entered figures by criterion id; a number, or text for a text criterion' });
 
+const FIGURE_FINITE = z.number('Enter a number.');
+const provenanceText = z.string().trim().max(500, 'A source has up to 500 characters.');
+
+/** What is known of an entered figure beside its likely value; what is not known is left out. */
+export const FigureParticulars = z
+  .strictObject({
+    low: FIGURE_FINITE.optional(),
+    high: FIGURE_FINITE.optional(),
+    source: provenanceText.optional(),
+    date: z.iso.date('A day, such as 2026-11-30.').optional(),
+    confidence: z.enum(['low', 'medium', 'high']).optional(),
+  })
+  .meta({ id: 'FigureParticulars' });
+export type FigureParticulars = z.infer<typeof FigureParticulars>;
+
+const Particulars = z.record(z.uuid(), FigureParticulars).meta({
+  description:
+    'Low, high, source, date and confidence of entered figures, by criterion id; low ≤ figure ≤ high',
+});
+
 export const Site = z
   .object({
     id: z.uuid(),
@@ -47,6 +67,7 @@ export const Site = z
     permittedAzimuthsDeg: PermittedAzimuthsDeg,
     notes: z.string(),
     values: Values,
+    particulars: Particulars,
     version: z.int(),
   })
   .meta({ id: 'Site' });
@@ -69,6 +90,7 @@ export const SiteInput = z
     permittedAzimuthsDeg: PermittedAzimuthsDeg.default([]),
     notes: SiteNotes.default(''),
     values: Values.default({}),
+    particulars: Particulars.default({}),
   })
   .meta({ id: 'SiteInput' });
 export type SiteInput = z.output<typeof SiteInput>;
@@ -85,6 +107,8 @@ export const SitePatch = z
     permittedAzimuthsDeg: PermittedAzimuthsDeg.optional(),
     notes: SiteNotes.optional(),
     values: z.record(z.uuid(), EnteredValue.nullable()).optional(),
+    /** Each entry replaces what was known of its figure; null takes it away. */
+    particulars: z.record(z.uuid(), FigureParticulars.nullable()).optional(),
     version: z.int().optional(),
   })
   .meta({ id: 'SitePatch' });

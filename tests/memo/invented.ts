@@ -1,4 +1,5 @@
 /* Invented facts of any size for the memo's tests: figures are arbitrary, sums are true sums. */
+import { pointsStatement } from '#contract/weights.ts';
 import type { Criterion } from '#contract/criterion.ts';
 import type { FlownOrbit, OrbitResult, OutOfReachOrbit, SiteResult } from '#contract/evaluate.ts';
 import { prepareFigures, rankFigures } from '#contract/ranking-model.ts';
@@ -179,6 +180,9 @@ function criterion(index: number, limited: boolean): Criterion {
     quantity: null,
     orbitId: null,
     levels: index === 3 ? { mode: 'fixed', worst: 1200, best: 0 } : { mode: 'candidates' },
+    shape: { kind: 'straight' },
+    groupId: null,
+    steps: null,
     limit: limited && index === 0 ? { kind: 'at-least', value: 0 } : null,
     version: 1,
   };
@@ -201,6 +205,8 @@ function figuresOf(wanted: Invented, inputs: StudyInputs, r: Random): RankingFig
       }),
     ),
     notes: wanted.sites > 3 && count > 1 ? [[3, 1, 'O2 out of reach']] : [],
+    particulars: [],
+    evidence: [],
   };
 }
 
@@ -246,7 +252,7 @@ export function inventedFacts(wanted: Invented): MemoFacts {
     inputs,
     results,
     decimals: figures.criteria.map((_, place) => decimalsOf(figures, place)),
-    ranking: presentRanking(rankFigures(prepareFigures(figures), points), 'study'),
+    ranking: presentRanking(rankFigures(prepareFigures(figures), pointsStatement(points)), 'study'),
     checksum: 'ab'.repeat(32),
   };
 }

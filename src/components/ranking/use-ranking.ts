@@ -49,7 +49,8 @@ export function useRanking(studyId: string, start: RankingStart, whose: WeightsO
   useStudyEvents(studyId, hear);
 
   const ready = useMemo(() => (data ? prepareFigures(data) : null), [data]);
-  const model = useMemo(() => (ready ? rankFigures(ready, weights.points) : null), [ready, weights.points]);
+  const { statement } = weights;
+  const model = useMemo(() => (ready ? rankFigures(ready, statement) : null), [ready, statement]);
   const ranking = useMemo(
     () => (model ? presentRanking(model, whose, DRAWN_ROWS) : start.ranking),
     [model, whose, start.ranking],

@@ -1,8 +1,8 @@
-import { useCallback, useEffect, useState } from 'react';
+import { useCallback, useEffect, useMemo, useState } from 'react';
 import { ApiError, send } from '#components/live/api.ts';
 import { useApi } from '#components/live/hooks.ts';
 import { announceKept, announceSaved, announceSaving, type Saved } from '#components/live/saved.ts';
-import type { Weights } from '#contract/weights.ts';
+import type { Weights, WeightStatement } from '#contract/weights.ts';
 
 export type Points = Readonly<Record<string, number>>;
 
@@ -15,10 +15,16 @@ export type Saving =
   | { kind: 'conflict'; theirs: Weights };
 
 export interface WeightSet {
+  /** The set as the server keeps it. */
+  kept: Weights;
+  /** What is said on this screen, saved or not. */
+  statement: WeightStatement;
   points: Points;
   saving: Saving;
-  /** Gives points to criteria by id; the others keep theirs. */
+  /** Gives points to criteria or groups by id, the others keeping theirs. */
   give: (points: Points) => void;
+  /** Says the whole set anew, by any method. */
+  state: (statement: WeightStatement) => void;
   keepTheirs: () => void;
   putMine: () => void;
   retry: () => void;
@@ -28,7 +34,7 @@ export interface WeightSet {
 
 /** What was typed, and the version of the set it was typed over: a newer one must not be written over unseen. */
 interface Draft {
-  points: Points;
+  statement: WeightStatement;
   base: number;
 }
 
@@ -47,11 +53,11 @@ export function useWeightSet(studyId: string, initial: Weights): WeightSet {
       setSaving({ kind: 'saving' });
       announceSaving();
       try {
-        const body = { points: sent.points, version: sent.base };
+        const body = { ...sent.statement, version: sent.base };
         const { revision, savedAt, ...answer } = await send<Weights & Saved>('PUT', address, body);
         await mutate(answer, { revalidate: false });
         setDraft((now) =>
-          now === sent || now === null ? null : { points: now.points, base: answer.version },
+          now === sent || now === null ? null : { statement: now.statement, base: answer.version },
         );
         setSaving({ kind: 'saved' });
         announceSaved({ revision, savedAt });
@@ -77,14 +83,17 @@ export function useWeightSet(studyId: string, initial: Weights): WeightSet {
   useLeaveGuard(draft !== null);
   const refresh = useCallback(() => void mutate(), [mutate]);
 
+  const heldStatement = useMemo(() => statementOf(held), [held]);
+  const statement = draft?.statement ?? heldStatement;
+  const state = (next: WeightStatement): void =>
+    setDraft((now) => ({ statement: next, base: now?.base ?? held.version }));
   return {
-    points: draft?.points ?? held.points,
+    kept: held,
+    statement,
+    points: statement.points,
     saving: draft && saving.kind === 'saved' ? { kind: 'waiting' } : saving,
-    give: (points) =>
-      setDraft((now) => ({
-        points: { ...(now?.points ?? held.points), ...points },
-        base: now?.base ?? held.version,
-      })),
+    give: (points) => state({ ...statement, points: { ...statement.points, ...points } }),
+    state,
     keepTheirs: () => {
       if (saving.kind === 'conflict') void mutate(saving.theirs, { revalidate: false });
       setDraft(null);
@@ -100,6 +109,13 @@ export function useWeightSet(studyId: string, initial: Weights): WeightSet {
     refresh,
   };
 }
+
+const statementOf = ({ method, points, order, judgements }: Weights): WeightStatement => ({
+  method,
+  points,
+  order,
+  judgements,
+});
 
 /** The browser asks before it leaves a page on which something is not saved yet. */
 function useLeaveGuard(unsaved: boolean): void {

@@ -30,6 +30,7 @@ export function DetailsConflict({ patch, current, criteria, ...choose }: Details
     ...current,
     ...patch,
     version: current.version,
+    particulars: current.particulars,
     values: Object.fromEntries(
       values.filter((entry): entry is [string, string | number] => entry[1] !== null),
     ),

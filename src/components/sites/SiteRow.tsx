@@ -85,7 +85,13 @@ export function ConflictRow({ conflict, editing }: { conflict: CellConflict; edi
   // Every digit: two figures that differ must not print alike.
   const words = (site: Site) => cellText(site, key) || 'all round';
   const theirs = words(current);
-  const yours = words({ ...current, ...patch, values: current.values, version: current.version });
+  const yours = words({
+    ...current,
+    ...patch,
+    values: current.values,
+    particulars: current.particulars,
+    version: current.version,
+  });
   return (
     <tr>
       <td colSpan={COLUMNS.length} className="conflict-cell">

@@ -53,7 +53,13 @@ export function useEditing(store: SiteStore): Editing {
   const [conflict, setConflict] = useState<CellConflict | null>(null);
 
   const write = async (site: Site, key: CellKey, patch: SitePatch): Promise<void> => {
-    const changed = { ...site, ...patch, values: site.values, version: site.version };
+    const changed = {
+      ...site,
+      ...patch,
+      values: site.values,
+      particulars: site.particulars,
+      version: site.version,
+    };
     store.show(changed);
     try {
       await store.change(site, patch);

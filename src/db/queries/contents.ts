@@ -95,6 +95,8 @@ function readCriteria(tx: Db, studyId: string): Promise<StudyContents['criteria'
       levelMode: criterion.levelMode,
       worst: criterion.worst,
       best: criterion.best,
+      shape: criterion.shape,
+      ratingSteps: criterion.ratingSteps,
       limitKind: criterion.limitKind,
       limitValue: criterion.limitValue,
     })
@@ -115,6 +117,7 @@ function readSites(tx: Db, studyId: string): Promise<StudyContents['sites']> {
       permittedAzimuthsDeg: site.permittedAzimuthsDeg,
       notes: site.notes,
       values: site.values,
+      particulars: site.particulars,
     })
     .from(site)
     .where(and(eq(site.studyId, studyId), isNull(site.deletedAt)))
@@ -181,6 +184,7 @@ export async function writeContents(
       contents.sites.slice(i, i + ROWS_A_STATEMENT).map((row) => ({
         ...row,
         values: criteria.record(row.values),
+        particulars: criteria.record(row.particulars ?? {}),
         studyId,
       })),
     );

@@ -21,6 +21,9 @@ const columns = {
   levelMode: criterion.levelMode,
   worst: criterion.worst,
   best: criterion.best,
+  shape: criterion.shape,
+  groupId: criterion.groupId,
+  ratingSteps: criterion.ratingSteps,
   limitKind: criterion.limitKind,
   limitValue: criterion.limitValue,
   version: criterion.version,
@@ -98,7 +101,7 @@ export async function deleteCriterion(
 /** What was entered for each present site of the study, by criterion id. */
 export function listEnteredValues(db: Db, { studyId }: InStudy) {
   return db
-    .select({ siteId: site.id, values: site.values })
+    .select({ siteId: site.id, values: site.values, particulars: site.particulars })
     .from(site)
     .where(and(eq(site.studyId, studyId), isNull(site.deletedAt)));
 }
@@ -115,7 +118,10 @@ export async function takeFigures(
     .where(held);
   await db
     .update(site)
-    .set({ values: sql`${site.values} - ${criterionId}::text` })
+    .set({
+      values: sql`${site.values} - ${criterionId}::text`,
+      particulars: sql`${site.particulars} - ${criterionId}::text`,
+    })
     .where(held);
   return Object.fromEntries(rows.map(({ id, figure }) => [id, figure]));
 }

@@ -24,6 +24,7 @@ const columns = {
   permittedAzimuthsDeg: site.permittedAzimuthsDeg,
   notes: site.notes,
   values: site.values,
+  particulars: site.particulars,
   version: site.version,
 };
 

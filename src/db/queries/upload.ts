@@ -32,6 +32,7 @@ const siteColumns = {
   permittedAzimuthsDeg: site.permittedAzimuthsDeg,
   notes: site.notes,
   values: site.values,
+  particulars: site.particulars,
   version: site.version,
 };
 
@@ -140,9 +141,9 @@ export async function insertSites(
   for (let i = 0; i < rows.length; i += ROWS_A_STATEMENT) {
     await db.execute(sql`
       insert into site (id, study_id, upload_id, code, name, name_key, latitude_deg, longitude_deg, elevation_m,
-        permitted_azimuths_deg, notes, "values")
+        permitted_azimuths_deg, notes, "values", particulars)
       select id, ${studyId}, ${uploadId}, code, name, "nameKey", "latitudeDeg", "longitudeDeg", "elevationM",
-        "permittedAzimuthsDeg", notes, "values"
+        "permittedAzimuthsDeg", notes, "values", particulars
       from ${recordset(rows.slice(i, i + ROWS_A_STATEMENT))}`);
   }
   return rows.map(({ id }) => id);
@@ -151,7 +152,7 @@ export async function insertSites(
 function recordset(rows: readonly (SiteFields & { id: string })[]): SQL {
   return sql`jsonb_to_recordset(${JSON.stringify(rows)}::jsonb) as new(
     id uuid, code text, name text, "nameKey" text, "latitudeDeg" float8, "longitudeDeg" float8, "elevationM" float8,
-    "permittedAzimuthsDeg" jsonb, notes text, "values" jsonb)`;
+    "permittedAzimuthsDeg" jsonb, notes text, "values" jsonb, particulars jsonb)`;
 }
 
 /** Writes many sites and moves their versions, in one statement a thousand. */
@@ -165,6 +166,7 @@ export async function updateSites(
         code = new.code, name = new.name, name_key = new."nameKey",
         latitude_deg = new."latitudeDeg", longitude_deg = new."longitudeDeg", elevation_m = new."elevationM",
         permitted_azimuths_deg = new."permittedAzimuthsDeg", notes = new.notes, "values" = new."values",
+        particulars = new.particulars,
         version = site.version + 1, updated_at = now()
       from ${recordset(sites.slice(i, i + ROWS_A_STATEMENT))}
       where site.id = new.id and site.study_id = ${studyId} and site.deleted_at is null`);

@@ -2,7 +2,17 @@ import { and, eq, isNull, sql } from 'drizzle-orm';
 import type { Db } from '../client.ts';
 import { weightSet } from '../schema/criterion.ts';
 
-const columns = { points: weightSet.points, version: weightSet.version };
+const columns = {
+  method: weightSet.method,
+  points: weightSet.points,
+  order: weightSet.order,
+  judgements: weightSet.judgements,
+  shared: weightSet.shared,
+  origin: weightSet.origin,
+  reason: weightSet.reason,
+  version: weightSet.version,
+  updatedAt: weightSet.updatedAt,
+};
 
 /** A set of a study: a member's own, or the study's where no person is named. */
 interface WhichSet {

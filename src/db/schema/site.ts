@@ -46,6 +46,16 @@ export const upload = pgTable(
   (t) => [index('upload_study_idx').on(t.studyId, t.createdAt)],
 );
 
+/** Uncertainty and provenance of an entered figure; what is not known is left out. */
+export interface FigureParticulars {
+  low?: number | undefined;
+  high?: number | undefined;
+  source?: string | undefined;
+  /** ISO 8601 day the figure is of. */
+  date?: string | undefined;
+  confidence?: 'low' | 'medium' | 'high' | undefined;
+}
+
 /** A candidate site. Latitude is geodetic (WGS 84), elevation is above the ellipsoid. */
 export const site = pgTable(
   'site',
@@ -65,6 +75,8 @@ export const site = pgTable(
     notes: text('notes').notNull().default(''),
     /** Entered figures by criterion id: a number, or text kept as given. */
     values: jsonb('values').notNull().$type<Record<string, number | string>>().default({}),
+    /** What is known of an entered figure beside its likely value, by criterion id. */
+    particulars: jsonb('particulars').notNull().$type<Record<string, FigureParticulars>>().default({}),
     version: integer('version').notNull().default(1),
     uploadId: uuid('upload_id').references(() => upload.id),
     createdAt: instant('created_at').notNull().defaultNow(),
@@ -83,4 +95,30 @@ export const site = pgTable(
     check('site_latitude', sql`${t.latitudeDeg} between -90 and 90`),
     check('site_longitude', sql`${t.longitudeDeg} > -180 and ${t.longitudeDeg} <= 180`),
   ],
+);
+
+/** A file that supports an entered figure. Taken away it stays in the record's sight and is listed nowhere else. */
+export const evidence = pgTable(
+  'evidence',
+  {
+    id: idColumn(),
+    studyId: uuid('study_id')
+      .notNull()
+      .references(() => study.id),
+    siteId: uuid('site_id')
+      .notNull()
+      .references(() => site.id),
+    /** No reference: a criterion can be removed, and its evidence with it. */
+    criterionId: uuid('criterion_id').notNull(),
+    fileName: text('file_name').notNull(),
+    mediaType: text('media_type').notNull(),
+    bytes: bytea('bytes').notNull(),
+    sha256: text('sha256').notNull(),
+    createdBy: text('created_by')
+      .notNull()
+      .references(() => user.id),
+    createdAt: instant('created_at').notNull().defaultNow(),
+    removedAt: instant('removed_at'),
+  },
+  (t) => [index('evidence_study_idx').on(t.studyId, t.siteId, t.criterionId)],
 );

@@ -27,6 +27,8 @@ export async function addCriterion(
         ...described,
         nameKey: await freeNameKey(tx, { studyId, name: described.name }),
         ...levelColumns(input.levels),
+        shape: input.shape,
+        groupId: input.groupId,
         ...limitColumns(input.limit),
       },
     });
@@ -35,9 +37,20 @@ export async function addCriterion(
   });
 }
 
-type Described = Pick<NewCriterion, 'name' | 'unit' | 'direction' | 'source' | 'quantity' | 'orbitId'>;
+type Described = Pick<
+  NewCriterion,
+  'name' | 'unit' | 'direction' | 'source' | 'quantity' | 'orbitId' | 'ratingSteps'
+>;
 
 async function describe(tx: Db, studyId: string, input: CriterionInput): Promise<Described> {
+  if (input.source === 'rating')
+    return {
+      name: input.name,
+      unit: '',
+      direction: input.direction,
+      source: 'rating',
+      ratingSteps: input.steps,
+    };
   if (input.source !== 'computed')
     return { name: input.name, unit: input.unit, direction: input.direction, source: input.source };
   const { quantity, orbitId } = input;

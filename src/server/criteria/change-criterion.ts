@@ -46,7 +46,7 @@ async function columnsToWrite(
   row: CriterionRow,
   patch: CriterionPatch,
 ): Promise<Partial<NewCriterion>> {
-  const { name, unit, direction, source, levels, limit } = patch;
+  const { name, unit, direction, source, levels, shape, limit } = patch;
   if (row.source === 'computed' && (unit !== undefined || source !== undefined))
     throw new AppError('invalid', 'A computed criterion keeps its unit and its source.');
   const fault = levelFault(direction ?? row.direction, levels ?? presentCriterion(row).levels);
@@ -59,6 +59,7 @@ async function columnsToWrite(
     ...(direction === undefined ? {} : { direction }),
     ...(source === undefined ? {} : { source }),
     ...(levels === undefined ? {} : levelColumns(levels)),
+    ...(shape === undefined ? {} : { shape }),
     ...(limit === undefined ? {} : limitColumns(limit)),
   };
 }

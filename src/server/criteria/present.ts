@@ -25,6 +25,9 @@ export function presentCriterion(row: CriterionRow): Criterion {
     quantity: row.quantity !== null && isQuantity(row.quantity) ? row.quantity : null,
     orbitId: row.orbitId,
     levels: levelsOf(row),
+    shape: row.shape,
+    groupId: row.groupId,
+    steps: row.ratingSteps,
     limit: limitOf(row),
     version: row.version,
   };

@@ -30,7 +30,7 @@ export async function loadMemoFacts(
   if (!study) throw notFound();
   const { inputs } = snapshot;
   const figures = rankingFigures(snapshot);
-  const ranking = presentRanking(rankFigures(prepareFigures(figures), snapshot.study.points), 'study');
+  const ranking = presentRanking(rankFigures(prepareFigures(figures), snapshot.study), 'study');
   const sites = listedSites({ ranking, inputs }).map(({ site }) => site);
   const flights = evaluateStudy({ ...inputs, sites });
   return {

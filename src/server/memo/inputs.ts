@@ -7,7 +7,7 @@ import type { RankingSnapshot } from '#server/ranking/read-snapshot.ts';
  * Everything a memo's figures follow from, without the study's own ids and in an order of its own, so that the same
  * inputs are the same text wherever they were entered. `evaluate` may be posted to the interface as it is.
  */
-function inputsOf({ inputs, criteria, values, study }: RankingSnapshot) {
+function inputsOf({ inputs, criteria, entered, study }: RankingSnapshot) {
   const orbitCode = new Map(inputs.orbits.map(({ orbitId, code }) => [orbitId, code]));
   const nameOf = new Map(criteria.map(({ id, name }) => [id, name]));
   const evaluate: Omit<EvaluateInput, 'vehicle'> & { vehicle?: EvaluateInput['vehicle'] } = {
@@ -34,7 +34,7 @@ function inputsOf({ inputs, criteria, values, study }: RankingSnapshot) {
       inputs.sites.map(({ siteId, code }) => [
         code,
         Object.fromEntries(
-          Object.entries(values.get(siteId) ?? {}).flatMap(([id, value]) => {
+          Object.entries(entered.get(siteId)?.values ?? {}).flatMap(([id, value]) => {
             const name = nameOf.get(id);
             return name === undefined ? [] : [[name, value]];
           }),

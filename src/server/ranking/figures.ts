@@ -15,7 +15,7 @@ import type { RankingSnapshot } from './read-snapshot.ts';
 const REFERENCE_ALTITUDE_KM = 185;
 
 /** Figures of every site under every weighed criterion, computed and entered. */
-export function rankingFigures({ inputs, criteria, values }: RankingSnapshot): RankingFigures {
+export function rankingFigures({ inputs, criteria, entered }: RankingSnapshot): RankingFigures {
   const weighed = criteria.filter(({ source }) => source !== 'text');
   const flights = weighed.some(({ source }) => source === 'computed') ? flightsOf(inputs) : [];
   const notes: RankingFigures['notes'] = [];
@@ -23,8 +23,8 @@ export function rankingFigures({ inputs, criteria, values }: RankingSnapshot): R
     weighed.map((criterion, place) => {
       const flight = flights[site];
       const { cell, note }: ComputedFigure =
-        criterion.source === 'entered'
-          ? enteredFigure(values.get(siteId)?.[criterion.id])
+        criterion.source === 'entered' || criterion.source === 'rating'
+          ? enteredFigure(entered.get(siteId)?.values[criterion.id])
           : flight
             ? computedFigure(criterion, orbitIndexOf(inputs, criterion), flight)
             : { cell: null };
@@ -39,7 +39,13 @@ export function rankingFigures({ inputs, criteria, values }: RankingSnapshot): R
     latitudeDeg,
     longitudeDeg,
   }));
-  return { revision: inputs.revision, criteria: weighed, sites, cells, notes };
+  const particulars = inputs.sites.flatMap(({ siteId }, site) =>
+    weighed.flatMap(({ id }, place): RankingFigures['particulars'] => {
+      const known = entered.get(siteId)?.particulars[id];
+      return known === undefined ? [] : [[site, place, known]];
+    }),
+  );
+  return { revision: inputs.revision, criteria: weighed, sites, cells, notes, particulars, evidence: [] };
 }
 
 /** Text under a criterion that is weighed is kept as it was given and is no figure. */

@@ -20,8 +20,8 @@ export async function loadRanking(
   { weights, ...asked }: Asked & { weights: WeightsOf },
 ): Promise<RankingModel> {
   const snapshot = await readSnapshot(db, asked);
-  const { points } = weights === 'mine' ? snapshot.mine : snapshot.study;
-  return rankFigures(prepareFigures(rankingFigures(snapshot)), points);
+  const set = weights === 'mine' ? snapshot.mine : snapshot.study;
+  return rankFigures(prepareFigures(rankingFigures(snapshot)), set);
 }
 
 /** The ranking as the interface answers it. @throws AppError 'not-found' */
@@ -41,9 +41,6 @@ export async function readRankingStart(
 ): Promise<RankingStart> {
   const snapshot = await readSnapshot(db, asked);
   const { study, mine } = snapshot;
-  const model = rankFigures(
-    prepareFigures(rankingFigures(snapshot)),
-    (weights === 'mine' ? mine : study).points,
-  );
+  const model = rankFigures(prepareFigures(rankingFigures(snapshot)), weights === 'mine' ? mine : study);
   return { ranking: presentRanking(model, weights, FIRST_ROWS), study, mine };
 }

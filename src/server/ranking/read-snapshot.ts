@@ -1,4 +1,5 @@
 import type { Criterion } from '#contract/criterion.ts';
+import type { FigureParticulars } from '#contract/site.ts';
 import type { StudyInputs } from '#contract/study-inputs.ts';
 import type { Weights } from '#contract/weights.ts';
 import type { PooledDb } from '#db/client.ts';
@@ -9,13 +10,18 @@ import { notFound } from '#server/errors.ts';
 import { presentStudyInputs } from '#server/evaluate/study-inputs.ts';
 import { readWeights } from '#server/weights/read-weights.ts';
 
+export interface Entered {
+  values: Readonly<Record<string, number | string>>;
+  particulars: Readonly<Record<string, FigureParticulars>>;
+}
+
 /** Everything a ranking follows from, of one moment. */
 export interface RankingSnapshot {
   inputs: StudyInputs;
   /** Text criteria too. */
   criteria: Criterion[];
-  /** Entered figures by site id, then by criterion id. */
-  values: ReadonlyMap<string, Readonly<Record<string, number | string>>>;
+  /** Entered figures and what is known of them, by site id, then by criterion id. */
+  entered: ReadonlyMap<string, Entered>;
   study: Weights;
   mine: Weights;
 }
@@ -28,7 +34,9 @@ export async function readSnapshot(
   const { rows, ...rest } = await inOneMoment(db, async (tx) => ({
     rows: await selectStudyInputs(tx, { studyId }),
     criteria: await readCriteria(tx, { studyId }),
-    values: new Map((await listEnteredValues(tx, { studyId })).map(({ siteId, values }) => [siteId, values])),
+    entered: new Map(
+      (await listEnteredValues(tx, { studyId })).map(({ siteId, ...entered }) => [siteId, entered]),
+    ),
     study: await readWeights(tx, { studyId, userId, weights: 'study' }),
     mine: await readWeights(tx, { studyId, userId, weights: 'mine' }),
   }));

@@ -34,7 +34,19 @@ function criterionOf(
   const key = ids.criteria.of(name);
   const orbitKey = orbitCode === undefined ? null : ids.orbits.of(orbitCode);
   const input = CriterionInput.parse(draft.source === 'computed' ? { ...draft, orbitId: orbitKey } : draft);
-  const settings = { ...levelColumns(input.levels), ...limitColumns(input.limit) };
+  const settings = { ...levelColumns(input.levels), shape: input.shape, ...limitColumns(input.limit) };
+  if (input.source === 'rating')
+    return {
+      key,
+      orbitKey: null,
+      name: input.name,
+      nameKey: foldName(input.name),
+      unit: '',
+      direction: input.direction,
+      source: 'rating',
+      ratingSteps: input.steps,
+      ...settings,
+    };
   if (input.source !== 'computed')
     return {
       key,

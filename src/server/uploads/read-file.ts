@@ -13,7 +13,7 @@ export interface StudyFile {
   criteria: CriterionRow[];
 }
 
-const KINDS = { entered: 'number', text: 'text', computed: 'computed' } as const;
+const KINDS = { entered: 'number', rating: 'number', text: 'text', computed: 'computed' } as const;
 
 /**
  * Reads a file by the same code as the browser, against the study as it is now.

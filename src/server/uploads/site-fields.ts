@@ -25,6 +25,7 @@ export function newFields(
     permittedAzimuthsDeg: permittedAzimuthsDeg.map(([from, to]) => [from, to]),
     notes,
     values: withoutEmpty(figuresOf(row, filled)),
+    particulars: {},
   };
 }
 
@@ -47,6 +48,7 @@ export function updatedFields(
       : before.permittedAzimuthsDeg,
     notes: has('notes') ? read.notes : before.notes,
     values: withoutEmpty({ ...before.values, ...figuresOf(row, filled) }),
+    particulars: before.particulars,
   };
 }
 

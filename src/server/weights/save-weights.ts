@@ -1,4 +1,4 @@
-import type { Weights, WeightsInput, WeightsOf } from '#contract/weights.ts';
+import type { Weights, WeightsDraft, WeightsOf } from '#contract/weights.ts';
 import type { Db, PooledDb } from '#db/client.ts';
 import { listCriteria } from '#db/queries/criterion.ts';
 import { findWeights, writeWeights } from '#db/queries/weights.ts';
@@ -12,7 +12,7 @@ interface SaveRequest {
   weights: WeightsOf;
   /** The version the points are based on; 0 where the set has never been saved. */
   version: number;
-  input: WeightsInput;
+  input: WeightsDraft;
 }
 
 /**
@@ -33,10 +33,10 @@ export async function saveWeights(
     const before = await readWeights(tx, { studyId, userId, weights });
     if ((kept?.version ?? 0) !== version) throw stale(before);
     const ids = await weighable(tx, studyId, input);
-    const unchanged = kept && ids.every((id) => (kept.points[id] ?? 0) === (input.points[id] ?? 0));
+    const unchanged = kept && ids.every((id) => (kept.points[id] ?? 0) === (input.points?.[id] ?? 0));
     if (unchanged) return { result: before, entries: [] };
-    const row = await writeWeights(tx, { ...set, id: kept?.id ?? null, points: input.points });
-    const after = presentWeights({ weights, ids, points: row.points, version: row.version });
+    const row = await writeWeights(tx, { ...set, id: kept?.id ?? null, points: input.points ?? {} });
+    const after = presentWeights({ weights, ids, set: row, version: row.version });
     return {
       result: after,
       entries: [
@@ -52,7 +52,7 @@ export async function saveWeights(
   });
 }
 
-async function weighable(tx: Db, studyId: string, { points }: WeightsInput): Promise<string[]> {
+async function weighable(tx: Db, studyId: string, { points = {} }: WeightsDraft): Promise<string[]> {
   const ids = (await listCriteria(tx, { studyId }))
     .filter(({ source }) => source !== 'text')
     .map(({ id }) => id);

@@ -1,5 +1,6 @@
 import type { Criterion } from '#contract/criterion.ts';
 import { prepareFigures, rankFigures, type RankingModel } from '#contract/ranking-model.ts';
+import { pointsStatement } from '#contract/weights.ts';
 import type { RankingCell, RankingFigures } from '#contract/ranking.ts';
 
 /** Ids of the trial's criteria, in their order. */
@@ -19,6 +20,9 @@ export const criteria: Criterion[] = [
     quantity: null,
     orbitId: null,
     levels: fixed(400, 200),
+    shape: { kind: 'straight' },
+    groupId: null,
+    steps: null,
     limit: { kind: 'at-most', value: 390 },
     version: 1,
   },
@@ -32,6 +36,9 @@ export const criteria: Criterion[] = [
     quantity: null,
     orbitId: null,
     levels: fixed(100, 300),
+    shape: { kind: 'straight' },
+    groupId: null,
+    steps: null,
     limit: null,
     version: 1,
   },
@@ -58,6 +65,8 @@ export function trialFigures(
     })),
     cells: sites.map(({ cells }) => cells),
     notes: [],
+    particulars: [],
+    evidence: [],
     ...over,
   };
 }
@@ -73,4 +82,4 @@ export const four = trialFigures([
 export const trialModel = (
   figures = four,
   points: Record<string, number> = { [COST]: 60, [DAYS]: 40 },
-): RankingModel => rankFigures(prepareFigures(figures), points);
+): RankingModel => rankFigures(prepareFigures(figures), pointsStatement(points));

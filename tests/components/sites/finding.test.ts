@@ -14,6 +14,7 @@ const site = (code: string, name: string, latitudeDeg: number, sectors: [number,
   permittedAzimuthsDeg: sectors,
   notes: '',
   values: {},
+  particulars: {},
   version: 1,
 });
 

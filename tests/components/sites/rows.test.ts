@@ -13,6 +13,7 @@ const site = (code: string, name: string, latitudeDeg: number, notes = ''): Site
   permittedAzimuthsDeg: [],
   notes,
   values: {},
+  particulars: {},
   version: 1,
 });
 const sites = [site('B2', 'Pad 10', 10), site('A1', 'Pad 9', -5, 'old quay'), site('C3', 'Éire Head', 52)];

@@ -18,7 +18,7 @@ interface SiteFeature {
   properties: { code: string; name: string };
 }
 
-const KINDS = { entered: 'number', text: 'text', computed: 'computed' } as const;
+const KINDS = { entered: 'number', rating: 'number', text: 'text', computed: 'computed' } as const;
 
 /** The study's sites, all in one answer, and its criteria. */
 export async function readContents(studyId: string): Promise<StudyContents> {
