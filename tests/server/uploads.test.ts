@@ -1,5 +1,5 @@
 import { readFileSync } from 'node:fs';
-import { eq } from 'drizzle-orm';
+import { eq, sql } from 'drizzle-orm';
 import { describe, expect, test } from 'vitest';
 import { CriterionInput } from '#contract/criterion.ts';
 import { SiteInput } from '#contract/site.ts';
@@ -253,6 +253,19 @@ describe('undo', () => {
     ]);
     expect((await preview(member, 'name,lat,lon,Cost\nX,1,1,1\n')).columns[3]?.criterionId).toBeNull();
     expect((await faultOf(undoUpload(db, { member, uploadId: read.uploadId }))).status).toBe(409);
+  });
+
+  test('undoes a commit that was made before figures had particulars', async () => {
+    const member = await studyWith(db, 'engineer');
+    await addSite(db, { member, input: essery });
+    const read = await preview(member, 'name,lat,lon,Cost\nEssery Bank,8,-59,12\n');
+    await commit(member, read, { duplicates: 'update' });
+    await db
+      .update(upload)
+      .set({ effect: sql`${upload.effect} #- '{updated,0,before,particulars}'` })
+      .where(eq(upload.id, read.uploadId));
+    await undoUpload(db, { member, uploadId: read.uploadId });
+    expect(await sitesOf(member)).toMatchObject([{ latitudeDeg: 7.33, values: {}, particulars: {} }]);
   });
 
   test('409 after a site of it was edited, added or updated, and after one was removed', async () => {

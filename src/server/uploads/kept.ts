@@ -1,3 +1,4 @@
+import { FigureParticulars } from '#contract/site.ts';
 import { z } from '#contract/zod.ts';
 import { ENCODINGS } from '#core/csv/encoding.ts';
 import { COLUMN_FIELDS } from '#core/csv/headings.ts';
@@ -23,6 +24,8 @@ const fields = z.object({
   permittedAzimuthsDeg: z.array(z.tuple([z.number(), z.number()])),
   notes: z.string(),
   values: z.record(z.string(), z.union([z.number(), z.string()])),
+  // A commit made before figures had particulars kept none, because there were none.
+  particulars: z.record(z.string(), FigureParticulars).default({}),
 });
 
 /** What a commit did, kept with the upload so that it can be undone; versions are those the commit left. */
