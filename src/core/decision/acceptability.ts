@@ -1,11 +1,10 @@
-import { confidenceFactors } from './confidence.ts';
-import { completeValues, overallValue } from './overall.ts';
+import { confidenceRun, type ConfidenceRun } from './confidence.ts';
+import { completeValues, overallValue, type ValueTable } from './overall.ts';
 import type { Prepared } from './prepare.ts';
-import { streamFrom } from './random.ts';
-import { fallingOrder } from './falling-order.ts';
-import { endOfTie } from './ties.ts';
-import { highestValues, valueSampler, type UncertainFigure } from './uncertain.ts';
-import { criterionCountOf, weightSampler, type WeightModel } from './weight-model.ts';
+import { streamFrom, type RandomStream } from './random.ts';
+import { centralWeightsOf, count, tallyOf, type Tally } from './tally.ts';
+import { highestValues, valueSampler, type DrawValues, type UncertainFigure } from './uncertain.ts';
+import { criterionCountOf, weightSampler, type DrawWeights, type WeightModel } from './weight-model.ts';
 
 export interface AcceptabilityQuestion {
   prepared: Prepared;
@@ -22,86 +21,108 @@ export interface AcceptabilityQuestion {
 export interface Acceptability {
   /** Share of draws in which site s has rank r + 1, at s × siteCount + r; tied sites share the tied ranks equally. */
   shares: Float64Array;
+  /** Pairwise winning share: of draws in which site a stands above site b, at a × siteCount + b; a tie counts a half. */
+  wins: Float64Array;
   /** Mean of the weights under which a site leads, one a criterion; null where it never does. */
   centralWeights: (Float64Array | null)[];
   /** Share of draws of the figures in which a site leads under its central weights; null where it never leads. */
   confidence: (number | null)[];
 }
 
+/** An analysis done a few draws at a time; however it is cut, it gives the same to the last digit. */
+export interface AcceptabilityRun {
+  /** All draws: first those of weights and figures, then those of figures alone for the confidence factors. */
+  readonly total: number;
+  readonly done: number;
+  /** Makes at most so many draws, at least 1. @returns whether all are done */
+  step(draws: number): boolean;
+  /** @throws RangeError while draws are left */
+  result(): Acceptability;
+}
+
 /**
  * Stochastic multicriteria acceptability analysis, SMAA-2: weights and uncertain figures are drawn, sites ranked by
- * additive value each time. The standard error of a share p of N draws is √(p(1 − p)/N).
+ * additive value each time.
  * @throws RangeError when a site misses a figure, the weights are not one a criterion, or there are no samples.
  * @see references.ts `lahdelmaSalminen`; checked by tests/reference/decision-acceptability.csv
  */
-export function acceptability(question: AcceptabilityQuestion): Acceptability {
+export function acceptabilityRun(question: AcceptabilityQuestion): AcceptabilityRun {
   const { prepared, uncertain, weights: model, samples, seed } = question;
   const table = completeValues(prepared);
-  const { siteCount, criterionCount } = table;
-  if (criterionCountOf(model) !== criterionCount)
-    throw new RangeError(`acceptability: ${criterionCountOf(model)} weights for ${criterionCount} criteria`);
+  if (criterionCountOf(model) !== table.criterionCount)
+    throw new RangeError(
+      `acceptability: ${criterionCountOf(model)} weights for ${table.criterionCount} criteria`,
+    );
   if (!Number.isSafeInteger(samples) || samples < 1)
     throw new RangeError(`acceptability: ${samples} samples`);
   const random = streamFrom(seed);
-  const drawWeights = weightSampler(model);
   const drawValues = valueSampler(prepared, uncertain);
-  const tally = tallyOf(siteCount, criterionCount);
+  const tally = tallyOf(table.siteCount, table.criterionCount);
+  const drawRanks = ranksDrawer(table, tally, weightSampler(model), drawValues, random);
+  const afterwards = uncertain.length > 0 ? samples : 1;
+  let done = 0;
+  let confidence: ConfidenceRun | null = null;
+  return {
+    total: samples + afterwards,
+    get done() {
+      return done;
+    },
+    step(draws) {
+      if (!(draws >= 1)) throw new RangeError(`acceptability: a step of ${draws} draws`);
+      const until = Math.min(done + draws, samples + afterwards);
+      for (; done < until && done < samples; done++) drawRanks();
+      if (done < samples) return false;
+      // The central weights are known only now.
+      confidence ??= confidenceRun(table, highestValues(prepared, uncertain), centralWeightsOf(tally));
+      for (; done < until; done++) confidence.draw(drawValues, random);
+      return done === samples + afterwards;
+    },
+    result() {
+      if (confidence === null || done < samples + afterwards)
+        throw new RangeError(`acceptability: ${done} of ${samples + afterwards} draws are done`);
+      return {
+        shares: tally.ranks.map((times) => times / samples),
+        wins: Float64Array.from(tally.wins, (halves) => halves / (2 * samples)),
+        centralWeights: centralWeightsOf(tally),
+        confidence: confidence.factors(afterwards),
+      };
+    },
+  };
+}
+
+/** The whole analysis at once. @throws RangeError as `acceptabilityRun` */
+export function acceptability(question: AcceptabilityQuestion): Acceptability {
+  const run = acceptabilityRun(question);
+  run.step(run.total);
+  return run.result();
+}
+
+/**
+ * Standard error of a share p of N draws, √(p(1 − p)/N).
+ * @param share 0…1.
+ * @param samples N.
+ */
+export const standardError = (share: number, samples: number): number =>
+  Math.sqrt((share * (1 - share)) / samples);
+
+/** Makes what draws weights and figures once and counts the ranks they give. */
+function ranksDrawer(
+  table: ValueTable,
+  tally: Tally,
+  drawWeights: DrawWeights,
+  drawValues: DrawValues,
+  random: RandomStream,
+): () => void {
+  const { siteCount, criterionCount } = table;
   const weights = new Float64Array(criterionCount);
   const values = table.values.slice();
   const totals = new Float64Array(siteCount);
-  for (let sample = 0; sample < samples; sample++) {
+  return () => {
     drawWeights(weights, random);
     drawValues(values, random);
     for (let site = 0; site < siteCount; site++) {
       totals[site] = overallValue(weights, values, site * criterionCount);
     }
     count(tally, totals, weights);
-  }
-  const shares = tally.ranks.map((times) => times / samples);
-  const centralWeights = centralWeightsOf(tally, siteCount, criterionCount);
-  const draws = { drawValues, random, samples: uncertain.length > 0 ? samples : 1 };
-  const highest = highestValues(prepared, uncertain);
-  return { shares, centralWeights, confidence: confidenceFactors(table, highest, centralWeights, draws) };
-}
-
-interface Tally {
-  /** Times site s had rank r + 1, at s × siteCount + r. */
-  ranks: Float64Array;
-  /** Sum of the weights under which site s led, at s × criterionCount. */
-  leading: Float64Array;
-  order: Uint32Array;
-}
-
-const tallyOf = (siteCount: number, criterionCount: number): Tally => ({
-  ranks: new Float64Array(siteCount * siteCount),
-  leading: new Float64Array(siteCount * criterionCount),
-  order: Uint32Array.from({ length: siteCount }, (_, site) => site),
-});
-
-/** Adds one draw. @param totals overall values by site; left sorted */
-function count({ ranks, leading, order }: Tally, totals: Float64Array, weights: Float64Array): void {
-  const siteCount = order.length;
-  for (let site = 0; site < siteCount; site++) order[site] = site;
-  fallingOrder(totals, order);
-  for (let first = 0, end = 0; first < siteCount; first = end) {
-    end = endOfTie(totals, first);
-    const share = 1 / (end - first);
-    for (let place = first; place < end; place++) {
-      const row = (order[place] ?? 0) * siteCount;
-      for (let rank = first; rank < end; rank++) ranks[row + rank] = (ranks[row + rank] ?? 0) + share;
-      if (first === 0) addTo(leading, (order[place] ?? 0) * weights.length, weights, share);
-    }
-  }
-}
-
-function addTo(sums: Float64Array, from: number, weights: Float64Array, share: number): void {
-  for (let j = 0; j < weights.length; j++) sums[from + j] = (sums[from + j] ?? 0) + share * (weights[j] ?? 0);
-}
-
-function centralWeightsOf({ ranks, leading }: Tally, siteCount: number, criterionCount: number) {
-  return Array.from({ length: siteCount }, (_, site) => {
-    const led = ranks[site * siteCount] ?? 0;
-    if (led === 0) return null;
-    return leading.subarray(site * criterionCount, (site + 1) * criterionCount).map((sum) => sum / led);
-  });
+  };
 }

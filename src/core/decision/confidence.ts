@@ -4,12 +4,6 @@ import type { RandomStream } from './random.ts';
 import { TIE } from './ties.ts';
 import type { DrawValues } from './uncertain.ts';
 
-interface Draws {
-  drawValues: DrawValues;
-  random: RandomStream;
-  samples: number;
-}
-
 /** A site that can lead, at its central weights. */
 interface Contender {
   site: number;
@@ -20,6 +14,14 @@ interface Contender {
   reach: Float64Array;
 }
 
+/** Confidence factors in the making. */
+export interface ConfidenceRun {
+  /** Draws the figures once and counts who leads. */
+  draw(drawValues: DrawValues, random: RandomStream): void;
+  /** @param draws how many have been made */
+  factors(draws: number): (number | null)[];
+}
+
 /**
  * Confidence factor of every site that can lead: the share of draws of the figures in which it leads while the weights
  * stay at its central ones; where it ties for the lead it counts as its share of the tie.
@@ -28,24 +30,25 @@ interface Contender {
  * @param centralWeights by site; null where it never leads, which gives null.
  * @see references.ts `lahdelmaSalminen`
  */
-export function confidenceFactors(
+export function confidenceRun(
   table: ValueTable,
   highest: Float64Array,
   centralWeights: readonly (Float64Array | null)[],
-  { drawValues, random, samples }: Draws,
-): (number | null)[] {
+): ConfidenceRun {
   const contenders = centralWeights.flatMap((weights, site) =>
     weights ? { site, weights, ...rivalsOf({ ...table, values: highest }, weights, site) } : [],
   );
   const led = new Float64Array(table.siteCount);
   const values = table.values.slice();
-  for (let sample = 0; sample < samples; sample++) {
-    drawValues(values, random);
-    for (const contender of contenders) {
-      led[contender.site] = (led[contender.site] ?? 0) + shareOfLead(contender, values);
-    }
-  }
-  return centralWeights.map((weights, site) => (weights ? (led[site] ?? 0) / samples : null));
+  return {
+    draw(drawValues, random) {
+      drawValues(values, random);
+      for (const contender of contenders) {
+        led[contender.site] = (led[contender.site] ?? 0) + shareOfLead(contender, values);
+      }
+    },
+    factors: (draws) => centralWeights.map((weights, site) => (weights ? (led[site] ?? 0) / draws : null)),
+  };
 }
 
 function rivalsOf(highest: ValueTable, weights: Float64Array, site: number) {

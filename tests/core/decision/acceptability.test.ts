@@ -1,6 +1,11 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { acceptability, type AcceptabilityQuestion } from '#core/decision/acceptability.ts';
+import {
+  acceptability,
+  acceptabilityRun,
+  standardError,
+  type AcceptabilityQuestion,
+} from '#core/decision/acceptability.ts';
 import type { WeightModel } from '#core/decision/weight-model.ts';
 import { reference } from '#tests/support/reference.ts';
 import { preparedValues } from './tables.ts';
@@ -38,10 +43,11 @@ describe('acceptability', () => {
   };
 
   test.each(reference('decision-acceptability'))('$id', (row) => {
-    const { shares, centralWeights, confidence } = answerOf(row.rows, row.model);
+    const { shares, wins, centralWeights, confidence } = answerOf(row.rows, row.model);
     const [site, place] = [Number(row.site), Number(row.place)];
     const figures: Record<string, number | null | undefined> = {
       share: shares[site * centralWeights.length + place],
+      win: wins[site * centralWeights.length + place],
       centre: centralWeights[site]?.[place],
       confidence: confidence[site],
     };
@@ -87,6 +93,58 @@ describe('acceptability', () => {
     );
   });
 
+  test('winning shares of a pair sum to 1, and those against a site to its mean rank less 1', () => {
+    fc.assert(
+      fc.property(rows, fc.boolean(), (it, open) => {
+        const { shares, wins } = ask(it, open ? spread(it) : []);
+        const n = it.length;
+        it.forEach((_, site) => {
+          // [derived] a mean rank is 1 + the sites above + half of those level.
+          let [meanRank, above] = [0, 0];
+          it.forEach((__, other) => {
+            meanRank += (other + 1) * (shares[site * n + other] ?? NaN);
+            above += wins[other * n + site] ?? NaN;
+            const both = (wins[site * n + other] ?? NaN) + (wins[other * n + site] ?? NaN);
+            expect(both).toBeCloseTo(site === other ? 0 : 1, 12);
+          });
+          expect(meanRank).toBeCloseTo(1 + above, 9);
+        });
+      }),
+      { numRuns: 40 },
+    );
+  });
+
+  test('a run cut into steps of any size gives the same to the last digit', () => {
+    fc.assert(
+      fc.property(rows, fc.boolean(), fc.integer({ min: 1, max: 250 }), (it, open, size) => {
+        const question: AcceptabilityQuestion = {
+          prepared: preparedValues(it),
+          uncertain: open ? spread(it) : [],
+          weights: { kind: 'simplex', criterionCount: it[0]?.length ?? 0 },
+          samples: 200,
+          seed: 7,
+        };
+        const run = acceptabilityRun(question);
+        let steps = 0;
+        for (; !run.step(size); steps++) {
+          expect(run.done).toBe((steps + 1) * size);
+          expect(() => run.result()).toThrow(RangeError);
+        }
+        expect(run.done).toBe(run.total);
+        expect(steps).toBe(Math.ceil(run.total / size) - 1);
+        expect(run.result()).toEqual(acceptability(question));
+      }),
+      { numRuns: 40 },
+    );
+  });
+
+  test('the standard error of a share is √(p(1 − p)/N)', () => {
+    // [derived] 10,000 draws: .005 at a half, √(.1 × .9)/100 at a tenth.
+    expect(standardError(0.5, 10_000)).toBeCloseTo(0.005, 15);
+    expect(standardError(0.1, 10_000)).toBeCloseTo(0.003, 15);
+    expect([standardError(0, 100), standardError(1, 100)]).toEqual([0, 0]);
+  });
+
   test('a site that another beats everywhere never leads: no central weights, no confidence', () => {
     fc.assert(
       fc.property(rows, (it) => {
@@ -122,13 +180,14 @@ describe('acceptability', () => {
     expect(ask(it, spread(it)).confidence[0]).toBeLessThan(1);
   });
 
-  test('refuses no samples, a seed that is none, weights of another number, and gaps', () => {
+  test('refuses no samples, a seed that is none, weights of another number, gaps, and steps of nothing', () => {
     const question = { ...questionOf('1;0|0;1', 'simplex'), samples: 10, seed: 1 };
     expect(() => acceptability({ ...question, samples: 0 })).toThrow(RangeError);
     expect(() => acceptability({ ...question, seed: -1 })).toThrow(RangeError);
     expect(() => acceptability({ ...question, weights: { kind: 'simplex', criterionCount: 3 } })).toThrow(
       RangeError,
     );
+    for (const draws of [0, NaN]) expect(() => acceptabilityRun(question).step(draws)).toThrow(RangeError);
     const gap = { ...question.prepared, gaps: Uint8Array.of(0, 1) };
     expect(() => acceptability({ ...question, prepared: gap })).toThrow(/site 1/);
   });
