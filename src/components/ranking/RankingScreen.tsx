@@ -1,4 +1,4 @@
-import { useCallback, useRef } from 'react';
+import { useCallback, useMemo, useRef } from 'react';
 import { useAddressParam } from '#components/live/address.ts';
 import { useFinding } from '#components/live/hooks.ts';
 import { Button } from '#components/ui/Button.tsx';
@@ -8,10 +8,12 @@ import { Segmented } from '#components/ui/Segmented.tsx';
 import { Stale } from '#components/ui/States.tsx';
 import { MOST_POINTS } from '#contract/points.ts';
 import { countsInWords, findingText, rankingFinding, rankingWhy } from '#contract/ranking-words.ts';
-import type { RankingStart } from '#contract/ranking.ts';
+import type { RankingStart, RankingState } from '#contract/ranking.ts';
+import { sheetOf } from './columns.ts';
 import { exportLabel, rankingCsv, saveCsv } from './export.ts';
 import { BeforeRanks, ConnectionNote, EstimatesCaution, FiguresNotRead } from './Notices.tsx';
 import { RankingSheets, type RankingAddress } from './RankingSheets.tsx';
+import { RankingViews } from './RankingViews.tsx';
 import { useRanking, type LiveRanking } from './use-ranking.ts';
 import { PATTERNS } from './ValueBar.tsx';
 import { lockOf, type Viewer } from './viewer.ts';
@@ -27,6 +29,7 @@ interface RankingScreenProps {
 
 export function RankingScreen({ studyId, title, start, viewer, address, nonce }: RankingScreenProps) {
   const [whoseParam, setWhose] = useAddressParam('weights', address.weights);
+  const [view, setView] = useAddressParam('view', address.view);
   const whose = whoseParam === 'mine' ? 'mine' : 'study';
   const live = useRanking(studyId, start, whose);
   const shown = useRef<(() => string[]) | null>(null);
@@ -34,6 +37,7 @@ export function RankingScreen({ studyId, title, start, viewer, address, nonce }:
     shown.current = ask;
   }, []);
   const { ranking, model, weights, staleRevision, error } = live;
+  const sheet = useMemo(() => sheetOf(ranking, model), [ranking, model]);
   const locked = lockOf(viewer, whose);
   useFinding(findingText(ranking));
   const exportFile = (): void => {
@@ -43,6 +47,10 @@ export function RankingScreen({ studyId, title, start, viewer, address, nonce }:
   };
   const even = (): void =>
     weights.give(Object.fromEntries(ranking.criteria.map(({ id }) => [id, MOST_POINTS])));
+  const onEven = locked === undefined ? even : undefined;
+  const beforeRanks = (state: Exclude<RankingState, 'ranked'>) => (
+    <BeforeRanks state={state} studyId={studyId} onEven={onEven} />
+  );
   const bar = (
     <>
       <Segmented
@@ -70,17 +78,20 @@ export function RankingScreen({ studyId, title, start, viewer, address, nonce }:
       </svg>
       <RankingHead live={live} onExport={model?.rows.length ? exportFile : undefined} />
       {error && <FiguresNotRead error={error} onAgain={live.again} />}
-      {ranking.state !== 'ranked' && (
-        <BeforeRanks
-          state={ranking.state}
-          studyId={studyId}
-          onEven={locked === undefined ? even : undefined}
-        />
-      )}
       {ranking.state !== 'no-sites' && ranking.criteria.length > 0 ? (
-        <RankingSheets {...{ studyId, live, address, nonce, locked, shown, onShown, whose, bar }} />
+        <RankingViews
+          {...{ studyId, title, live, sheet, whose, viewer, onEven, bar }}
+          param={view}
+          onView={setView}
+        >
+          {ranking.state !== 'ranked' && beforeRanks(ranking.state)}
+          <RankingSheets {...{ studyId, live, sheet, address, nonce, locked, shown, onShown, whose, bar }} />
+        </RankingViews>
       ) : (
-        <div className="rk-bar">{bar}</div>
+        <>
+          {ranking.state !== 'ranked' && beforeRanks(ranking.state)}
+          <div className="rk-bar">{bar}</div>
+        </>
       )}
       <div className="mt-9">
         <EstimatesCaution />

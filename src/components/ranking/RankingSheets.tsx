@@ -6,7 +6,7 @@ import { Panel } from '#components/ui/Finding.tsx';
 import { formatNumber } from '#contract/format.ts';
 import { rowOf, rowsOf, type RankingRow } from '#contract/ranking-rows.ts';
 import { ColumnChooser } from './ColumnChooser.tsx';
-import { sheetOf } from './columns.ts';
+import type { Sheet } from './columns.ts';
 import { Contributions } from './Contributions.tsx';
 import { RankingList } from './RankingList.tsx';
 import { RankingTable } from './RankingTable.tsx';
@@ -19,6 +19,7 @@ const RankingGrid = lazy(() => import('./RankingGrid.tsx'));
 
 /** What of the screen the address holds. */
 export interface RankingAddress {
+  view: string | null;
   weights: string | null;
   site: string | null;
   hide: string | null;
@@ -29,6 +30,7 @@ export interface RankingAddress {
 interface SheetsProps {
   studyId: string;
   live: LiveRanking;
+  sheet: Sheet;
   address: RankingAddress;
   nonce: string;
   locked: string | undefined;
@@ -44,11 +46,10 @@ const LIST_STEP = 50;
 
 /** The ranking itself, as grid, table or list, with the weights and the chosen site's terms under it. */
 export function RankingSheets(props: SheetsProps) {
-  const { studyId, live, address, nonce, locked, shown, onShown, whose, bar } = props;
+  const { studyId, live, sheet, address, nonce, locked, shown, onShown, whose, bar } = props;
   const { ranking, weights } = live;
   // The sliders must not wait for a long grid: it follows a moment later.
   const model = useDeferredValue(live.model);
-  const sheet = useMemo(() => sheetOf(ranking, live.model), [ranking, live.model]);
   const [code, setCode] = useAddressParam('site', address.site);
   const [hide, setHide] = useAddressParam('hide', address.hide);
   const [sort, setSort] = useAddressParam('sort', address.sort);
