@@ -34,12 +34,14 @@ export const weighingReferences = {
   kendall: 'Kendall, Rank Correlation Methods (1948): coefficient of concordance with ties corrected',
 } as const;
 
-/** Sources of the ways in which a member states weights, beside points and pairwise comparison. */
-export const statementReferences = {
+/** Sources of the further ways in which a study's weights are set and its ranking is tried. */
+export const studyReferences = {
   edwardsBarron:
     'Edwards and Barron, SMARTS and SMARTER: improved simple methods for multiattribute utility measurement (1994): swing weights',
   barronBarrett:
     'Barron and Barrett, Decision quality using ranked attribute weights (1996): rank-order centroid weights',
+  clemen:
+    'Clemen, Making Hard Decisions (1996), chapter 5: one uncertain figure at a time, drawn as a tornado',
 } as const;
 
 export type ReferenceKey = keyof typeof references;

@@ -55,10 +55,20 @@ export function valueSampler(prepared: Prepared, figures: readonly UncertainFigu
 export function highestValues(prepared: Prepared, figures: readonly UncertainFigure[]): Float64Array {
   const highest = prepared.values.slice();
   for (const figure of figures) {
-    const { at, low, high, span, shape } = cellOf(prepared, figure);
-    highest[at] = Math.max(valueOf(low, span, shape), valueOf(high, span, shape));
+    const { at, low, high } = endValues(prepared, figure);
+    highest[at] = Math.max(low, high);
   }
   return highest;
+}
+
+/**
+ * What an uncertain figure is worth at either end, between the levels of `prepared`.
+ * @returns values 0…1, and the place of the cell in the table.
+ * @throws RangeError when low ≤ likely ≤ high does not hold.
+ */
+export function endValues(prepared: Prepared, figure: UncertainFigure) {
+  const { at, low, high, span, shape } = cellOf(prepared, figure);
+  return { at, low: valueOf(low, span, shape), high: valueOf(high, span, shape) };
 }
 
 function cellOf({ table, spans, shapes }: Prepared, figure: UncertainFigure): Cell {
