@@ -81,6 +81,8 @@ export const ROUTES: Readonly<Record<string, RouteRules>> = {
   [`${STUDY}/evaluation/inputs`]: { GET: 'study:read' },
   [`${STUDY}/criteria`]: { GET: 'study:read', POST: 'study:input' },
   [`${STUDY}/criteria/[criterionId]`]: { GET: 'study:read', PATCH: 'study:input', DELETE: 'study:input' },
+  [`${STUDY}/criterion-groups`]: { GET: 'study:read', POST: 'study:input' },
+  [`${STUDY}/criterion-groups/[groupId]`]: { PATCH: 'study:input', DELETE: 'study:input' },
   // The study's own set is the lead's to write (checked there, by the set asked for).
   [`${STUDY}/weights`]: { GET: 'study:read', PUT: 'study:weigh' },
   [`${STUDY}/ranking`]: { GET: 'study:read' },

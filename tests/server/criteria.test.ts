@@ -3,9 +3,10 @@ import { describe, expect, test } from 'vitest';
 import { CriterionInput, CriterionPatch, type CriterionDraft } from '#contract/criterion.ts';
 import { newId } from '#db/columns.ts';
 import { record } from '#db/schema/record.ts';
-import { site } from '#db/schema/site.ts';
+import { evidence, site } from '#db/schema/site.ts';
 import { study, targetOrbit } from '#db/schema/study.ts';
 import { addCriterion } from '#server/criteria/add-criterion.ts';
+import { addGroup } from '#server/criteria/groups/add-group.ts';
 import { changeCriterion } from '#server/criteria/change-criterion.ts';
 import { listCriteriaPage, readCriteria, readCriterion } from '#server/criteria/read-criteria.ts';
 import { removeCriterion } from '#server/criteria/remove-criterion.ts';
@@ -165,8 +166,75 @@ describe('changing', () => {
   });
 });
 
+describe('shape, group and steps', () => {
+  const knots: CriterionPatch = { shape: { kind: 'piecewise', knots: [[0, 0], [0.4, 0.7], [1, 1]] } }; // prettier-ignore
+
+  test('are kept as they are sent, on adding and on changing', async () => {
+    const member = await studyWith(db, 'engineer');
+    const group = await addGroup(db, { member, name: 'Money' });
+    const made = await add(member, {
+      ...cost,
+      groupId: group.id,
+      shape: { kind: 'exponential', curvature: 2.5 },
+    });
+    expect(made).toMatchObject({
+      groupId: group.id,
+      shape: { kind: 'exponential', curvature: 2.5 },
+      steps: null,
+    });
+    expect(await patch(member, made.id, 1, knots)).toMatchObject({ ...knots, groupId: group.id, version: 2 });
+    expect(await patch(member, made.id, 2, { groupId: null })).toMatchObject({ ...knots, groupId: null });
+    expect((await linesOf(member)).at(-1)).toMatchObject({
+      object: 'criterion',
+      from: { groupId: group.id },
+      to: { groupId: null },
+    });
+  });
+
+  test('a rating has five named steps, its levels 0 and 4, and keeps unit and source', async () => {
+    const member = await studyWith(db, 'engineer');
+    const rating = await add(member, { source: 'rating', name: 'Road access' });
+    expect(rating).toMatchObject({
+      source: 'rating',
+      unit: '',
+      steps: ['Very poor', 'Poor', 'Fair', 'Good', 'Very good'],
+      levels: { mode: 'fixed', worst: 0, best: 4 },
+    });
+    const steps = ['Track', 'Gravel', 'Two lanes', 'Trunk road', 'Motorway'];
+    expect(await patch(member, rating.id, 1, { steps })).toMatchObject({ steps, version: 2 });
+    await expect(patch(member, rating.id, 2, { source: 'entered' })).rejects.toMatchObject({
+      code: 'invalid',
+    });
+    const entered = await add(member);
+    await expect(patch(member, entered.id, 1, { steps })).rejects.toMatchObject({
+      code: 'invalid',
+      errors: [{ path: 'steps' }],
+    });
+  });
+
+  test('a group of another study is refused', async () => {
+    const member = await studyWith(db, 'engineer');
+    const elsewhere = await addGroup(db, { member: await studyWith(db, 'engineer'), name: 'Money' });
+    const refused = { code: 'invalid', errors: [{ path: 'groupId' }] };
+    await expect(add(member, { ...cost, groupId: elsewhere.id })).rejects.toMatchObject(refused);
+    const { id } = await add(member);
+    await expect(patch(member, id, 1, { groupId: elsewhere.id })).rejects.toMatchObject(refused);
+  });
+
+  test.each<[string, CriterionPatch]>([
+    ['a curvature beyond 20', { shape: { kind: 'exponential', curvature: 21 } }],
+    ['points that fall', { shape: { kind: 'piecewise', knots: [[0, 0], [0.2, 0.5], [0.6, 0.4], [1, 1]] } }], // prettier-ignore
+    ['points that do not end at 1', { shape: { kind: 'piecewise', knots: [[0, 0], [1, 0.9]] } }], // prettier-ignore
+    ['six points', { shape: { kind: 'piecewise', knots: [0, 0.2, 0.4, 0.6, 0.8, 1].map((s) => [s, s]) } }],
+    ['four steps', { steps: ['a', 'b', 'c', 'd'] }],
+    ['two steps of one name', { steps: ['a', 'b', 'c', 'd', 'A'] }],
+  ])('refuses %s', (_, fields) => {
+    expect(CriterionPatch.safeParse(fields).success).toBe(false);
+  });
+});
+
 describe('removing', () => {
-  test('takes its figures out of the sites, keeps them in the record and closes the order', async () => {
+  test('takes its figures, particulars and evidence out of the sites, keeps them in the record and closes the order', async () => {
     const member = await studyWith(db, 'engineer');
     const { studyId } = member;
     const { id } = await add(member);
@@ -181,14 +249,45 @@ describe('removing', () => {
       latitudeDeg: 1,
       longitudeDeg: 2,
       values: { [id]: 12.5, [other.id]: 3 },
+      particulars: { [id]: { low: 10, high: 15 }, [other.id]: { source: 'survey' } },
     });
+    const file = (criterionId: string) => ({
+      id: newId(),
+      studyId,
+      siteId,
+      criterionId,
+      fileName: 'quote.csv',
+      mediaType: 'text/csv',
+      bytes: Buffer.from('a,b'),
+      sha256: '0',
+      createdBy: member.userId,
+    });
+    const [ours, others] = [file(id), file(other.id)];
+    await db.insert(evidence).values([ours, others]);
     await removeCriterion(db, { member, criterionId: id, version: 1 });
-    const [row] = await db.select({ values: site.values }).from(site).where(eq(site.id, siteId));
-    expect(row?.values).toEqual({ [other.id]: 3 });
+    const [row] = await db
+      .select({ values: site.values, particulars: site.particulars })
+      .from(site)
+      .where(eq(site.id, siteId));
+    expect(row).toEqual({
+      values: { [other.id]: 3 },
+      particulars: { [other.id]: { source: 'survey' } },
+    });
+    const files = await db
+      .select({ id: evidence.id, removedAt: evidence.removedAt })
+      .from(evidence)
+      .where(eq(evidence.siteId, siteId));
+    expect(files.find(({ id: fileId }) => fileId === ours.id)?.removedAt).toBeInstanceOf(Date);
+    expect(files.find(({ id: fileId }) => fileId === others.id)?.removedAt).toBeNull();
     expect(await namesOf(member)).toEqual(['0 Days']);
     expect((await linesOf(member)).at(-1)).toMatchObject({
       action: 'remove',
-      from: { name: 'Cost', figures: { [siteId]: 12.5 } },
+      from: {
+        name: 'Cost',
+        figures: { [siteId]: 12.5 },
+        particulars: { [siteId]: { low: 10, high: 15 } },
+        evidence: [ours.id],
+      },
       to: null,
     });
   });

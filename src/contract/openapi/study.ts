@@ -1,4 +1,13 @@
-import { CriterionInput, Criterion, CriterionList, CriterionPatch } from '../criterion.ts';
+import {
+  Criterion,
+  CriterionGroup,
+  CriterionGroupInput,
+  CriterionGroupList,
+  CriterionGroupPatch,
+  CriterionInput,
+  CriterionList,
+  CriterionPatch,
+} from '../criterion.ts';
 import { ListQuery } from '../list.ts';
 import { MemberInput, MemberList, MemberPatch, StudyMember } from '../member.ts';
 import { MemoQuery } from '../memo.ts';
@@ -99,6 +108,28 @@ export const studyOperations: Operations = {
     get: { summary: 'A criterion', answer: Criterion },
     patch: { summary: 'Change a criterion', body: CriterionPatch, answer: Criterion, versioned: true },
     delete: { summary: 'Remove a criterion', status: 204, versioned: true },
+  },
+  [`${STUDY}/criterion-groups`]: {
+    get: { summary: 'Groups of criteria', query: ListQuery, answer: CriterionGroupList },
+    post: {
+      summary: 'Make a group of criteria',
+      body: CriterionGroupInput,
+      answer: CriterionGroup,
+      status: 201,
+    },
+  },
+  [`${STUDY}/criterion-groups/{groupId}`]: {
+    patch: {
+      summary: 'Rename a group',
+      body: CriterionGroupPatch,
+      answer: CriterionGroup,
+      versioned: true,
+    },
+    delete: {
+      summary: 'Remove a group; its criteria stay, in no group',
+      status: 204,
+      versioned: true,
+    },
   },
   [`${STUDY}/weights`]: {
     get: { summary: 'Weights: the study’s or your own', query: WeightsQuery, answer: Weights },

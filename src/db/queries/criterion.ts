@@ -1,7 +1,7 @@
-import { and, asc, eq, isNull, sql } from 'drizzle-orm';
+import { and, asc, eq, isNull, or, sql } from 'drizzle-orm';
 import type { Db } from '../client.ts';
 import { criterion } from '../schema/criterion.ts';
-import { site } from '../schema/site.ts';
+import { evidence, site, type FigureParticulars } from '../schema/site.ts';
 import { targetOrbit } from '../schema/study.ts';
 
 export type CriterionRow = typeof criterion.$inferSelect;
@@ -106,14 +106,28 @@ export function listEnteredValues(db: Db, { studyId }: InStudy) {
     .where(and(eq(site.studyId, studyId), isNull(site.deletedAt)));
 }
 
-/** Takes a criterion's figures out of every site of the study and returns them by site id, for the record. */
+/** What is entered for a criterion: figures and particulars by site id, and the ids of its evidence files. */
+interface TakenFigures {
+  figures: Record<string, number | string>;
+  particulars: Record<string, FigureParticulars>;
+  evidence: string[];
+}
+
+/** Takes all that was entered for a criterion out of every site of the study and returns it, for the record. */
 export async function takeFigures(
   db: Db,
   { studyId, criterionId }: InStudy & { criterionId: string },
-): Promise<Record<string, number | string>> {
-  const held = and(eq(site.studyId, studyId), sql`${site.values} ? ${criterionId}`);
+): Promise<TakenFigures> {
+  const held = and(
+    eq(site.studyId, studyId),
+    or(sql`${site.values} ? ${criterionId}`, sql`${site.particulars} ? ${criterionId}`),
+  );
   const rows = await db
-    .select({ id: site.id, figure: sql<number | string>`${site.values} -> ${criterionId}` })
+    .select({
+      id: site.id,
+      figure: sql<number | string | null>`${site.values} -> ${criterionId}`,
+      particulars: sql<FigureParticulars | null>`${site.particulars} -> ${criterionId}`,
+    })
     .from(site)
     .where(held);
   await db
@@ -123,7 +137,31 @@ export async function takeFigures(
       particulars: sql`${site.particulars} - ${criterionId}::text`,
     })
     .where(held);
-  return Object.fromEntries(rows.map(({ id, figure }) => [id, figure]));
+  const files = await db
+    .update(evidence)
+    .set({ removedAt: sql`now()` })
+    .where(
+      and(eq(evidence.studyId, studyId), eq(evidence.criterionId, criterionId), isNull(evidence.removedAt)),
+    )
+    .returning({ id: evidence.id });
+  return {
+    figures: bySite(rows, ({ figure }) => figure),
+    particulars: bySite(rows, ({ particulars }) => particulars),
+    evidence: files.map(({ id }) => id),
+  };
+}
+
+/** What each row holds, by site id; rows that hold none are left out. */
+function bySite<R extends { id: string }, V>(
+  rows: readonly R[],
+  read: (row: R) => V | null,
+): Record<string, V> {
+  return Object.fromEntries(
+    rows.flatMap((row) => {
+      const held = read(row);
+      return held === null ? [] : [[row.id, held]];
+    }),
+  );
 }
 
 /** The name of a study's orbit, as criteria are named after it. */

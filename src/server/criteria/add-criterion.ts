@@ -5,6 +5,7 @@ import { findOrbitName, insertCriterion, listCriteria, type NewCriterion } from 
 import { changeStudy } from '#server/change-study.ts';
 import { AppError } from '#server/errors.ts';
 import type { Member } from '#server/member.ts';
+import { requireGroup } from './groups/name.ts';
 import { freeNameKey } from './name.ts';
 import { levelColumns, limitColumns, presentCriterion } from './present.ts';
 
@@ -20,6 +21,7 @@ export async function addCriterion(
     const { studyId } = member;
     if ((await listCriteria(tx, { studyId })).length >= MOST_CRITERIA)
       throw new AppError('invalid', `A study has up to ${MOST_CRITERIA} criteria. Nothing was added.`);
+    await requireGroup(tx, { studyId, groupId: input.groupId });
     const described = await describe(tx, studyId, input);
     const row = await insertCriterion(tx, {
       studyId,

@@ -11,6 +11,7 @@ import {
 import { changeStudy, type RecordEntry } from '#server/change-study.ts';
 import { AppError, notFound, stale } from '#server/errors.ts';
 import type { Member } from '#server/member.ts';
+import { requireGroup } from './groups/name.ts';
 import { freeNameKey } from './name.ts';
 import { levelColumns, limitColumns, presentCriterion } from './present.ts';
 
@@ -41,14 +42,26 @@ export async function changeCriterion(
   });
 }
 
+/** Refuses what goes with where a criterion's figures come from. @throws AppError 'invalid' */
+function refuseFixed(row: CriterionRow, { unit, source, steps }: CriterionPatch): void {
+  const keeps = row.source === 'computed' || row.source === 'rating';
+  if (keeps && (unit !== undefined || source !== undefined)) {
+    const kind = row.source === 'rating' ? 'rating' : 'computed criterion';
+    throw new AppError('invalid', `A ${kind} keeps its unit and its source.`);
+  }
+  if (row.source === 'rating' || steps === undefined) return;
+  const message = 'Only a rating has named steps.';
+  throw new AppError('invalid', message, { errors: [{ path: 'steps', message }] });
+}
+
 async function columnsToWrite(
   tx: Db,
   row: CriterionRow,
   patch: CriterionPatch,
 ): Promise<Partial<NewCriterion>> {
-  const { name, unit, direction, source, levels, shape, limit } = patch;
-  if (row.source === 'computed' && (unit !== undefined || source !== undefined))
-    throw new AppError('invalid', 'A computed criterion keeps its unit and its source.');
+  const { name, unit, direction, source, levels, shape, groupId, steps, limit } = patch;
+  refuseFixed(row, patch);
+  await requireGroup(tx, { studyId: row.studyId, groupId });
   const fault = levelFault(direction ?? row.direction, levels ?? presentCriterion(row).levels);
   if (fault) throw new AppError('invalid', fault, { errors: [{ path: 'levels.best', message: fault }] });
   return {
@@ -60,6 +73,8 @@ async function columnsToWrite(
     ...(source === undefined ? {} : { source }),
     ...(levels === undefined ? {} : levelColumns(levels)),
     ...(shape === undefined ? {} : { shape }),
+    ...(groupId === undefined ? {} : { groupId }),
+    ...(steps === undefined ? {} : { ratingSteps: steps }),
     ...(limit === undefined ? {} : limitColumns(limit)),
   };
 }

@@ -12,8 +12,8 @@ import type { Member } from '#server/member.ts';
 import { presentCriterion } from './present.ts';
 
 /**
- * Removes a criterion and the figures entered for it; the record keeps both. Points given to it in sets of weights
- * count for nothing from here on. @throws AppError 'not-found' · 'stale'
+ * Removes a criterion with the figures entered for it, their particulars and evidence; the record keeps them. Points
+ * given to it in sets of weights count for nothing from here on. @throws AppError 'not-found' · 'stale'
  */
 export async function removeCriterion(
   db: PooledDb,
@@ -25,12 +25,12 @@ export async function removeCriterion(
     if (!row) throw notFound('There is no such criterion in this study.');
     const before = presentCriterion(row);
     if (row.version !== version) throw stale(before);
-    const figures = await takeFigures(tx, { studyId, criterionId });
+    const taken = await takeFigures(tx, { studyId, criterionId });
     await deleteCriterion(tx, { studyId, criterionId });
     for (const [position, { id }] of (await listCriteria(tx, { studyId })).entries()) {
       await placeCriterion(tx, { studyId, criterionId: id, position });
     }
-    const from = { ...before, figures };
+    const from = { ...before, ...taken };
     return { result: {}, entries: [{ object: 'criterion', objectId: criterionId, action: 'remove', from }] };
   });
 }
