@@ -1,11 +1,12 @@
 import { eq } from 'drizzle-orm';
 import { describe, expect, test } from 'vitest';
-import { SiteInput } from '#contract/site.ts';
+import { SiteInput, type SitePatch } from '#contract/site.ts';
 import { newId } from '#db/columns.ts';
 import { user } from '#db/schema/auth.ts';
 import { criterion } from '#db/schema/criterion.ts';
 import { record } from '#db/schema/record.ts';
 import { study } from '#db/schema/study.ts';
+import type { AppError } from '#server/errors.ts';
 import type { Member } from '#server/member.ts';
 import { addSite } from '#server/sites/add-site.ts';
 import { changeSite } from '#server/sites/change-site.ts';
@@ -94,6 +95,101 @@ describe('sites of a study', () => {
       code: 'stale',
       status: 409,
       current: { elevationM: 31, version: 2, changedBy: 'Ada Quill' },
+    });
+  });
+
+  describe('what is known of a figure', () => {
+    /** A site with 268 launch days, a rating, a text and a computed criterion beside. */
+    async function figured() {
+      const member = await engineer();
+      const common = { studyId: member.studyId, direction: 'less' as const };
+      const named = (position: number, name: string) => ({ ...common, position, name, nameKey: name });
+      const steps = { ratingSteps: ['a', 'b', 'c', 'd', 'e'] };
+      const made = await db
+        .insert(criterion)
+        .values([
+          { ...named(0, 'Launch days'), source: 'entered' },
+          { ...named(1, 'Standing'), source: 'rating', ...steps },
+          { ...named(2, 'Sea access'), source: 'text' },
+          { ...named(3, 'Turn'), source: 'computed', quantity: 'turn' },
+        ])
+        .returning({ id: criterion.id });
+      const [days = '', rating = '', text = '', computed = ''] = made.map(({ id }) => id);
+      const site = await addSite(db, {
+        member,
+        input: draft({
+          values: { [days]: 268, [rating]: 3, [text]: 'quay' },
+          particulars: { [days]: { low: 240, high: 280, source: ' Port office ', date: '2026-05-01' } },
+        }),
+      });
+      const change = (patch: Omit<SitePatch, 'version'>, version = 1) =>
+        changeSite(db, { member, siteId: site.id, version, patch });
+      return { member, site, days, rating, text, computed, change };
+    }
+
+    test('is kept as sent, replaced whole, recorded, and goes with its figure', async () => {
+      const { site, days, change } = await figured();
+      const known = { low: 240, high: 280, source: 'Port office', date: '2026-05-01' };
+      expect(site.particulars).toEqual({ [days]: known });
+      const same = { date: '2026-05-01', source: 'Port office', high: 280, low: 240 };
+      expect((await change({ particulars: { [days]: same } })).version).toBe(1);
+      const less = await change({ particulars: { [days]: { low: 250, source: '', confidence: 'high' } } });
+      expect(less.particulars).toEqual({ [days]: { low: 250, confidence: 'high' } });
+      const lines = await db.select().from(record).where(eq(record.objectId, site.id));
+      expect(lines.at(-1)).toMatchObject({
+        from: { particulars: { [days]: known } },
+        to: { particulars: { [days]: { low: 250, confidence: 'high' } } },
+      });
+      const gone = await change({ values: { [days]: null } }, 2);
+      expect([gone.values[days], gone.particulars]).toEqual([undefined, {}]);
+    });
+
+    test('null and nothing at all take it away and leave the figure', async () => {
+      const { days, change } = await figured();
+      const emptied = await change({ particulars: { [days]: {} } });
+      expect([emptied.values[days], emptied.particulars]).toEqual([268, {}]);
+      await change({ particulars: { [days]: { low: 1 } } }, 2);
+      expect((await change({ particulars: { [days]: null } }, 3)).particulars).toEqual({});
+    });
+
+    test('holds the figure between low and high, and a rating on its steps', async () => {
+      const { days, rating, change } = await figured();
+      const errorsOf = (patch: Omit<SitePatch, 'version'>) =>
+        change(patch).then(
+          () => [],
+          (error: unknown) => (error as AppError).errors,
+        );
+      expect(await errorsOf({ values: { [days]: 300 } })).toEqual([
+        { path: `values.${days}`, message: 'High 280 is below the figure, 300.' },
+      ]);
+      expect(await errorsOf({ particulars: { [days]: { low: 270, high: 267 } } })).toEqual([
+        { path: `particulars.${days}.low`, message: 'Low 270 is above the figure, 268.' },
+        { path: `particulars.${days}.high`, message: 'High 267 is below the figure, 268.' },
+      ]);
+      expect(await errorsOf({ values: { [rating]: 2.5 } })).toMatchObject([{ path: `values.${rating}` }]);
+      expect(await errorsOf({ values: { [rating]: 5 } })).toMatchObject([{ path: `values.${rating}` }]);
+      expect(await errorsOf({ particulars: { [rating]: { low: -1, high: 3.5 } } })).toMatchObject([
+        { path: `particulars.${rating}.low` },
+        { path: `particulars.${rating}.high` },
+      ]);
+      expect(await errorsOf({ particulars: { [rating]: { low: 3, high: 4 } } })).toEqual([]);
+    });
+
+    test('needs a figure under an entered criterion or a rating', async () => {
+      const { text, computed, days, member, change } = await figured();
+      for (const id of [text, computed, newId()])
+        await expect(change({ particulars: { [id]: { source: 'x' } } })).rejects.toMatchObject({
+          status: 422,
+          errors: [{ path: `particulars.${id}` }],
+        });
+      const known = { [days]: { source: 'x' } };
+      await expect(change({ values: { [days]: null }, particulars: known })).rejects.toMatchObject({
+        status: 422,
+      });
+      const input = draft({ name: 'Other', particulars: known });
+      await expect(addSite(db, { member, input })).rejects.toMatchObject({
+        errors: [{ path: `particulars.${days}`, message: expect.stringContaining('no figure') as string }],
+      });
     });
   });
 

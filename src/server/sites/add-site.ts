@@ -4,7 +4,7 @@ import type { PooledDb } from '#db/client.ts';
 import { insertSite } from '#db/queries/site.ts';
 import { changeStudy } from '#server/change-study.ts';
 import type { Member } from '#server/member.ts';
-import { checkEnteredValues } from './entered-values.ts';
+import { checkFigures, patchedFigures } from './entered-figures.ts';
 import { claimIdentity } from './identity.ts';
 import { presentSite, recordedSite } from './present.ts';
 
@@ -16,8 +16,14 @@ export async function addSite(
   const { studyId } = member;
   return changeStudy(db, { member, kind: 'inputs' }, async (tx) => {
     const codes = await claimIdentity(tx, { studyId, wanted: input });
-    await checkEnteredValues(tx, { studyId, values: input.values });
-    const values = { ...input, code: input.code ?? codes.make(input.name), nameKey: foldName(input.name) };
+    const figures = patchedFigures({ values: {}, particulars: {} }, input);
+    await checkFigures(tx, { studyId, after: figures, patch: input });
+    const values = {
+      ...input,
+      ...figures,
+      code: input.code ?? codes.make(input.name),
+      nameKey: foldName(input.name),
+    };
     const made = presentSite(await insertSite(tx, { studyId, values }));
     const entry = { object: 'site', objectId: made.id, action: 'add', to: recordedSite(made) };
     return { result: made, entries: [entry] };

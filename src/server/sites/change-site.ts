@@ -1,3 +1,4 @@
+import { isDeepStrictEqual } from 'node:util';
 import type { ChangedSite, SavedSite, Site, SitePatch } from '#contract/site.ts';
 import { foldName } from '#core/csv/codes.ts';
 import type { Db, PooledDb } from '#db/client.ts';
@@ -5,7 +6,7 @@ import { findSite, lastChangeOfSite, updateSite, type SiteFields } from '#db/que
 import { changeStudy, type RecordEntry } from '#server/change-study.ts';
 import { notFound, stale } from '#server/errors.ts';
 import type { Member } from '#server/member.ts';
-import { checkEnteredValues } from './entered-values.ts';
+import { checkFigures, patchedFigures } from './entered-figures.ts';
 import { claimIdentity } from './identity.ts';
 import { presentSite } from './present.ts';
 
@@ -30,8 +31,9 @@ export async function changeSite(
     const before = presentSite(row);
     if (before.version !== version) throw stale(await withLastChange(tx, studyId, before));
     await claimIdentity(tx, { studyId, wanted: patch, except: siteId });
-    await checkEnteredValues(tx, { studyId, values: patch.values ?? {} });
-    const values = columnsToWrite(before, patch);
+    const figures = patchedFigures(before, patch);
+    await checkFigures(tx, { studyId, after: figures, patch });
+    const values = { ...columnsToWrite(patch), ...figures };
     const changes = differences(before, values);
     if (!changes) return { result: before, entries: [] };
     const written = await updateSite(tx, { ...scope, values });
@@ -46,28 +48,18 @@ async function withLastChange(tx: Db, studyId: string, site: Site): Promise<Chan
   return { ...site, changedBy: last?.by ?? null, changedAt: last?.at.toISOString() ?? null };
 }
 
-function columnsToWrite(before: Site, patch: SitePatch): Partial<SiteFields> {
-  const { version: _version, values, name, ...rest } = patch;
+/** The columns that are sent, without the figures. */
+function columnsToWrite(patch: SitePatch): Partial<SiteFields> {
+  const { version: _version, values: _values, particulars: _particulars, name, ...rest } = patch;
   const given = Object.fromEntries(Object.entries(rest).filter(([, value]) => value !== undefined));
-  const figures = Object.entries({ ...before.values, ...values });
-  return {
-    ...given,
-    ...(name === undefined ? {} : { name, nameKey: foldName(name) }),
-    ...(values === undefined
-      ? {}
-      : {
-          values: Object.fromEntries(
-            figures.filter((entry): entry is [string, string | number] => entry[1] !== null),
-          ),
-        }),
-  };
+  return { ...given, ...(name === undefined ? {} : { name, nameKey: foldName(name) }) };
 }
 
-/** The fields that differ, before and after; undefined where none does. */
+/** The fields that differ, before and after; undefined where none does. The database keeps its own order of keys. */
 function differences(before: Site, values: Partial<SiteFields>): { from: object; to: object } | undefined {
   const was = before as Record<string, unknown>;
   const changed = Object.entries(values).filter(
-    ([key, value]) => key !== 'nameKey' && JSON.stringify(value) !== JSON.stringify(was[key]),
+    ([key, value]) => key !== 'nameKey' && !isDeepStrictEqual(value, was[key]),
   );
   if (changed.length === 0) return undefined;
   return {

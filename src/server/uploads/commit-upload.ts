@@ -1,3 +1,4 @@
+import { isDeepStrictEqual } from 'node:util';
 import type { UploadCommit, UploadCommitted } from '#contract/upload.ts';
 import type { Db, PooledDb } from '#db/client.ts';
 import type { SiteRow } from '#db/queries/site.ts';
@@ -135,13 +136,8 @@ type Key = Exclude<keyof WrittenFields, 'nameKey'>;
 
 function changedKeys(was: WrittenFields, now: WrittenFields): Key[] {
   const keys = Object.keys(was).filter((key): key is Key => key !== 'nameKey');
-  return keys.filter((key) => canonical(was[key]) !== canonical(now[key]));
-}
-
-/** Figures in the order of their keys, because jsonb keeps an order of its own. */
-function canonical(value: WrittenFields[Key]): string {
-  if (typeof value !== 'object' || Array.isArray(value)) return JSON.stringify(value);
-  return JSON.stringify(Object.entries(value).sort(([a], [b]) => (a < b ? -1 : 1)));
+  // Not by their JSON: the database keeps an order of keys of its own.
+  return keys.filter((key) => !isDeepStrictEqual(was[key], now[key]));
 }
 
 function pick(fields: WrittenFields, keys: readonly Key[]): Record<string, unknown> {
