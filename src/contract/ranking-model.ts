@@ -4,10 +4,10 @@ import { figureTable } from '#core/decision/figures.ts';
 import { listing, type Listed } from '#core/decision/listing.ts';
 import { prepare, type Prepared } from '#core/decision/prepare.ts';
 import { rank, type Ranking as RankedTable } from '#core/decision/rank.ts';
-import { weightsFromPoints } from '#core/decision/weights.ts';
 import type { Criterion } from './criterion.ts';
 import { decimalsOf } from './ranking-words.ts';
 import type { RankingFigures, RankingState } from './ranking.ts';
+import { weighNow } from './weighing.ts';
 import type { WeightStatement } from './weights.ts';
 
 /** Figures made ready for weighing; made once, ranked as often as the weights move. */
@@ -54,7 +54,7 @@ export function prepareFigures(figures: RankingFigures): PreparedFigures {
 
 export function rankFigures(ready: PreparedFigures, statement: WeightStatement): RankingModel {
   const { figures, prepared } = ready;
-  const given = weightsFromPoints(figures.criteria.map(({ id }) => statement.points[id] ?? 0));
+  const given = weighNow(figures.criteria, statement);
   const weights = given.kind === 'set' ? given.weights : new Float64Array(figures.criteria.length);
   const table = rank(prepared, weights);
   const state = stateOf(figures, given.kind === 'set');

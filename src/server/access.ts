@@ -85,7 +85,14 @@ export const ROUTES: Readonly<Record<string, RouteRules>> = {
   [`${STUDY}/criterion-groups/[groupId]`]: { PATCH: 'study:input', DELETE: 'study:input' },
   // The study's own set is the lead's to write (checked there, by the set asked for).
   [`${STUDY}/weights`]: { GET: 'study:read', PUT: 'study:weigh' },
+  [`${STUDY}/weights/choice`]: { POST: 'study:lead' },
+  [`${STUDY}/weights/members`]: { GET: 'study:read' },
+  // A what-if is its maker's alone to change; others see it once it is shared (checked there).
+  [`${STUDY}/what-ifs`]: { GET: 'study:read', POST: 'study:weigh' },
+  [`${STUDY}/what-ifs/[whatIfId]`]: { GET: 'study:read', PATCH: 'study:weigh', DELETE: 'study:weigh' },
+  [`${STUDY}/what-ifs/[whatIfId]/adopt`]: { POST: 'study:lead' },
   [`${STUDY}/ranking`]: { GET: 'study:read' },
+  [`${STUDY}/sensitivity`]: { GET: 'study:read' },
   [`${STUDY}/memo.pdf`]: { GET: 'study:read' },
   [`${STUDY}/memo-inputs.json`]: { GET: 'study:read' },
   [`${STUDY}/sections`]: { GET: 'study:read' },

@@ -32,7 +32,12 @@ const API = '/api/v1/studies/[studyId]';
 /** Beyond reading: every role may leave; the members' list says who may do more. */
 const ANY_MEMBER = new Set([`DELETE ${API}/members/[memberId]`]);
 const OWN_WEIGHTS = new Set([`PUT ${API}/weights`]);
-const LEAD_ALONE = new Set([`DELETE ${API}`, `POST ${API}/members`, `PATCH ${API}/members/[memberId]`]);
+const LEAD_ALONE = new Set([
+  `DELETE ${API}`,
+  `POST ${API}/weights/choice`,
+  `POST ${API}/members`,
+  `PATCH ${API}/members/[memberId]`,
+]);
 
 const requests = Object.entries(ROUTES).flatMap(([route, rules]) =>
   Object.keys(rules).map((verb) => ({ route, verb, name: `${verb} ${route}` })),

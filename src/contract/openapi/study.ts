@@ -25,7 +25,7 @@ import {
 import { StudyEvaluation, StudyInputs } from '../study-inputs.ts';
 import { StudySections } from '../sections.ts';
 import { Study, StudyInput, StudyList, StudyListQuery, StudyPatch } from '../study.ts';
-import { Weights, WeightsInput, WeightsQuery } from '../weights.ts';
+import { MemberWeightsList, Weights, WeightsChoice, WeightsInput, WeightsQuery } from '../weights.ts';
 import { z } from '../zod.ts';
 import type { Operations } from './operation.ts';
 
@@ -137,6 +137,20 @@ export const studyOperations: Operations = {
       summary: 'Set weights; the study’s are a lead’s to set',
       query: WeightsQuery,
       body: WeightsInput,
+      answer: Weights,
+      versioned: true,
+    },
+  },
+  [`${STUDY}/weights/members`]: {
+    get: {
+      summary: 'Who may weigh, and the sets they share; your own always',
+      answer: MemberWeightsList,
+    },
+  },
+  [`${STUDY}/weights/choice`]: {
+    post: {
+      summary: 'Take the study’s weights from a member’s shared set, or from the mean of all',
+      body: WeightsChoice,
       answer: Weights,
       versioned: true,
     },

@@ -1,8 +1,8 @@
-import { pointsStatement, type Weights, type WeightsOf } from '#contract/weights.ts';
-import { weightsFromPoints } from '#core/decision/weights.ts';
+import { statementNow, weighing } from '#contract/weighing.ts';
+import { pointsStatement, type Weights, type WeightsOf, type WeightStatement } from '#contract/weights.ts';
+import type { WeighItem } from '#core/decision/statement.ts';
 import type { Db } from '#db/client.ts';
-import { listCriteria } from '#db/queries/criterion.ts';
-import { findWeights } from '#db/queries/weights.ts';
+import { findWeights, listWeighed } from '#db/queries/weights.ts';
 
 interface Which {
   studyId: string;
@@ -11,54 +11,49 @@ interface Which {
 }
 
 /**
- * A set and the shares it gives. A member's own set starts as a copy of the study's, at version 0.
+ * A set and the weights it comes to. A member's own set starts as a copy of the study's, at version 0.
  */
 export async function readWeights(db: Db, { studyId, userId, weights }: Which): Promise<Weights> {
   const own = weights === 'mine' ? await findWeights(db, { studyId, userId }) : undefined;
   const set = own ?? (await findWeights(db, { studyId, userId: null }));
-  const ids = (await listCriteria(db, { studyId }))
-    .filter(({ source }) => source !== 'text')
-    .map(({ id }) => id);
   return presentWeights({
     weights,
-    ids,
+    items: await listWeighed(db, { studyId }),
     set: set ?? UNSET,
     version: (weights === 'mine' ? own : set)?.version ?? 0,
   });
 }
 
-type KeptSet = NonNullable<Awaited<ReturnType<typeof findWeights>>>;
+export type KeptSet = NonNullable<Awaited<ReturnType<typeof findWeights>>>;
 type Said = Pick<KeptSet, 'method' | 'points' | 'order' | 'judgements' | 'shared' | 'origin' | 'reason'>;
 const UNSET: Said = { ...pointsStatement({}), shared: false, origin: null, reason: '' };
 
-/** Points of criteria that exist, each with its share; what was given to criteria since removed is left out. */
+/** What is said of criteria and groups that exist, and what it comes to. */
 export function presentWeights({
   weights,
-  ids,
+  items,
   set,
   version,
 }: {
   weights: WeightsOf;
-  ids: readonly string[];
+  items: readonly WeighItem[];
   set: Said;
   version: number;
 }): Weights {
-  const given = ids.map((id) => set.points[id] ?? 0);
-  const result = weightsFromPoints(given);
-  const byId = (figures: ArrayLike<number>) =>
-    Object.fromEntries(ids.map((id, at) => [id, figures[at] ?? 0]));
   const study = weights === 'study';
+  const origin = version > 0 ? (set.origin ?? { kind: 'apart' as const }) : null;
   return {
     weights,
-    method: set.method,
-    points: byId(given),
-    order: set.order,
-    judgements: set.judgements,
-    shares: result.kind === 'set' ? byId(result.weights) : null,
-    levels: [],
-    shared: !study && set.shared,
-    origin: study ? set.origin : null,
+    ...presentStatement(items, set),
+    shared: !study && version > 0 && set.shared,
+    origin: study ? origin : null,
     reason: study ? set.reason : '',
     version,
   };
 }
+
+/** A statement as it reads now, with the weights it comes to. */
+export const presentStatement = (items: readonly WeighItem[], said: WeightStatement) => ({
+  ...statementNow(items, said),
+  ...weighing(items, said),
+});

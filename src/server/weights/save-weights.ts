@@ -1,16 +1,17 @@
-import type { Weights, WeightsDraft, WeightsOf } from '#contract/weights.ts';
-import type { Db, PooledDb } from '#db/client.ts';
-import { listCriteria } from '#db/queries/criterion.ts';
+import type { WeightOrigin, Weights, WeightsDraft, WeightsOf, WeightStatement } from '#contract/weights.ts';
+import type { PooledDb } from '#db/client.ts';
 import { findWeights, writeWeights } from '#db/queries/weights.ts';
 import { changeStudy } from '#server/change-study.ts';
 import { AppError, stale } from '#server/errors.ts';
 import type { Member } from '#server/member.ts';
+import { checkStatement } from './check-statement.ts';
 import { presentWeights, readWeights } from './read-weights.ts';
+import { readWeighed } from './read-weighed.ts';
 
 interface SaveRequest {
   member: Member;
   weights: WeightsOf;
-  /** The version the points are based on; 0 where the set has never been saved. */
+  /** The version the set is based on; 0 where it has never been saved. */
   version: number;
   input: WeightsDraft;
 }
@@ -32,37 +33,74 @@ export async function saveWeights(
     const kept = await findWeights(tx, set);
     const before = await readWeights(tx, { studyId, userId, weights });
     if ((kept?.version ?? 0) !== version) throw stale(before);
-    const ids = await weighable(tx, studyId, input);
-    const unchanged = kept && ids.every((id) => (kept.points[id] ?? 0) === (input.points?.[id] ?? 0));
+    const { items, names } = await readWeighed(tx, { studyId });
+    const statement = statementOf(input);
+    const restated = !same(statement, statementOf(before));
+    if (restated) checkStatement(statement, { items, names, before });
+    const particulars = mine ? ownParticulars(before, input) : studyParticulars(before, input, restated);
+    const unchanged = kept && !restated && same(particulars, particularsOf(before));
     if (unchanged) return { result: before, entries: [] };
-    const row = await writeWeights(tx, { ...set, id: kept?.id ?? null, points: input.points ?? {} });
-    const after = presentWeights({ weights, ids, set: row, version: row.version });
-    return {
-      result: after,
-      entries: [
-        {
-          object: mine ? 'own-weights' : 'weights',
-          objectId: row.id,
-          action: 'change',
-          from: before.points,
-          to: after.points,
-        },
-      ],
-    };
+    const values = { ...(restated || !kept ? statement : statementOf(kept)), ...particulars };
+    const row = await writeWeights(tx, { ...set, id: kept?.id ?? null, values });
+    const after = presentWeights({ weights, items, set: row, version: row.version });
+    return { result: after, entries: [{ ...recorded(before, after), objectId: row.id }] };
   });
 }
 
-async function weighable(tx: Db, studyId: string, { points = {} }: WeightsDraft): Promise<string[]> {
-  const ids = (await listCriteria(tx, { studyId }))
-    .filter(({ source }) => source !== 'text')
-    .map(({ id }) => id);
-  const unknown = Object.keys(points).filter((id) => !ids.includes(id));
-  if (unknown.length > 0)
-    throw new AppError('invalid', 'Points were given to what is no weighed criterion of this study.', {
-      errors: unknown.map((id) => ({
-        path: `points.${id}`,
-        message: 'There is no such criterion to weigh.',
-      })),
-    });
-  return ids;
+const same = (a: unknown, b: unknown): boolean => canonical(a) === canonical(b);
+
+/** JSON with its keys in order: the database keeps objects without one. */
+const canonical = (value: unknown): string =>
+  JSON.stringify(value, (_, one: unknown) =>
+    one !== null && typeof one === 'object' && !Array.isArray(one)
+      ? Object.fromEntries(Object.entries(one).sort(([a], [b]) => (a < b ? -1 : 1)))
+      : one,
+  );
+
+const statementOf = ({ method, points, order, judgements }: WeightsDraft): WeightStatement => ({
+  method: method ?? 'points',
+  points: points ?? {},
+  order: order ?? [],
+  judgements: judgements ?? [],
+});
+
+interface Particulars {
+  shared: boolean;
+  origin: WeightOrigin | null;
+  reason: string;
 }
+
+const particularsOf = ({ shared, origin, reason }: Weights): Particulars => ({ shared, origin, reason });
+
+const ownParticulars = (before: Weights, { shared }: WeightsDraft): Particulars => ({
+  shared: shared ?? before.shared,
+  origin: null,
+  reason: '',
+});
+
+/** Points moved by hand set the study's weights apart, and the reason for an earlier choice is none for these. */
+function studyParticulars(before: Weights, { reason }: WeightsDraft, restated: boolean): Particulars {
+  const kept = before.origin ?? { kind: 'apart' };
+  const chosen = kept.kind !== 'apart';
+  return {
+    shared: false,
+    origin: restated ? { kind: 'apart' } : kept,
+    reason: reason ?? (restated && chosen ? '' : before.reason),
+  };
+}
+
+/**
+ * The record's line of a set. What a member keeps to themselves stands in no record: of an own set only how it was
+ * set and whether it was shared.
+ */
+export function recorded(before: Weights, after: Weights) {
+  if (after.weights === 'study')
+    return { object: 'weights', action: 'change', from: wholeOf(before), to: wholeOf(after) };
+  const shownOf = (set: Weights) => (set.shared ? wholeOf(set) : { method: set.method, shared: false });
+  return { object: 'own-weights', action: 'change', from: shownOf(before), to: shownOf(after) };
+}
+
+const wholeOf = (set: Weights) => ({
+  ...statementOf(set),
+  ...(set.weights === 'study' ? { origin: set.origin, reason: set.reason } : { shared: set.shared }),
+});
