@@ -1,12 +1,21 @@
-import { references, weighingReferences } from '#core/references.ts';
+import { references, studyReferences, weighingReferences } from '#core/references.ts';
 import { ConcordanceInput, ConcordanceOutput, PairwiseInput, PairwiseOutput } from '../compare.ts';
 import { DecideInput, DecideOutput } from '../decide.ts';
+import { Sensitivity, SensitivityQuery } from '../sensitivity.ts';
 import type { Operations } from './operation.ts';
 
 const { saaty, kendall, ...ofDecide } = weighingReferences;
 const stateless = (...sources: string[]): string => `Stateless. Sources: ${sources.join('; ')}.`;
 
 export const weighingOperations: Operations = {
+  '/api/v1/studies/{studyId}/sensitivity': {
+    get: {
+      summary: 'Whether a study’s ranking holds: one weight, one figure, and all of them at once',
+      description: `Ranked sites alone; the acceptability of the best hundred. The same study, query and seed give the same figures to the last digit. Sources: ${[references.keeneyRaiffa, studyReferences.clemen, ...Object.values(ofDecide)].join('; ')}.`,
+      query: SensitivityQuery,
+      answer: Sensitivity,
+    },
+  },
   '/api/v1/decide': {
     post: {
       summary: 'Criteria, weights and alternatives in; ranking, and whether it holds, out',
