@@ -49,14 +49,14 @@ async function makeStudy(tx: Db, study: DemoStudy, people: ReadonlyMap<string, s
       role,
       addedBy: createdBy,
     });
-  const { contents, keyed } = scenarioContents(study, await scenarioVehicle(tx, study.vehicleCode));
-  const { pointsByIds } = await writeContents(tx, { studyId, contents });
+  const { contents, saying } = scenarioContents(study, await scenarioVehicle(tx, study.vehicleCode));
+  const { weightsByIds } = await writeContents(tx, { studyId, contents });
   for (const { login, points } of study.ownPoints)
     await writeWeights(tx, {
       studyId,
       userId: idOf(people, login),
       id: null,
-      points: pointsByIds(keyed(points)),
+      values: weightsByIds(saying(points)),
     });
   const to = { title: study.title, origin: 'demo', sites: study.sites.length, orbits: study.orbits.length };
   await writeRecord(tx, { studyId, userId: createdBy, revision: 1 }, [

@@ -7,6 +7,7 @@ import type { MemoModel, MemoTable } from '#contract/memo.ts';
 import { OrbitInput } from '#contract/requirement.ts';
 import { SiteInput, type SiteDraft } from '#contract/site.ts';
 import { VehicleInput } from '#contract/vehicle.ts';
+import { addGroup } from '#server/criteria/groups/add-group.ts';
 import { addCriterion } from '#server/criteria/add-criterion.ts';
 import type { Member } from '#server/member.ts';
 import { buildMemo } from '#server/memo/build-memo.ts';
@@ -160,6 +161,52 @@ describe('the inputs', () => {
     expect((await inputsOf(one)).checksum).toBe((await inputsOf(other)).checksum);
     await put(other, { name: 'Third Bank', latitudeDeg: 5, longitudeDeg: 5 });
     expect((await inputsOf(one)).checksum).not.toBe((await inputsOf(other)).checksum);
+  });
+
+  test('tell shape, group, steps, what is known of figures and how the weights were said, by name', async () => {
+    const member = await smallStudy();
+    const { id: groupId } = await addGroup(db, { member, name: 'Ground' });
+    const road = await add(member, { source: 'rating', name: 'Road', groupId });
+    const wind = await add(member, {
+      source: 'entered',
+      name: 'Wind',
+      direction: 'less',
+      groupId,
+      shape: { kind: 'exponential', curvature: 2 },
+    });
+    await put(member, {
+      name: 'Third Bank',
+      latitudeDeg: 5,
+      longitudeDeg: 5,
+      values: { [wind.id]: 12 },
+      particulars: { [wind.id]: { low: 10, high: 15, source: 'Mast, one year', confidence: 'high' } },
+    });
+    await saveWeights(db, {
+      member,
+      weights: 'study',
+      version: 1,
+      input: { method: 'points', points: { [groupId]: 40, [road.id]: 30, [wind.id]: 10 } },
+    });
+    const inputs = JSON.parse((await inputsOf(member)).text) as {
+      criteria: { name: string }[];
+      weights: unknown;
+      particulars: Record<string, unknown>;
+    };
+    expect(inputs.criteria.filter(({ name }) => name === 'Road' || name === 'Wind')).toMatchObject([
+      { group: 'Ground', steps: ['Very poor', 'Poor', 'Fair', 'Good', 'Very good'] },
+      { group: 'Ground', steps: null, shape: { kind: 'exponential', curvature: 2 } },
+    ]);
+    expect(inputs.weights).toEqual({
+      method: 'points',
+      points: [
+        { of: { criterion: 'Road' }, points: 30 },
+        { of: { criterion: 'Wind' }, points: 10 },
+        { of: { group: 'Ground' }, points: 40 },
+      ],
+    });
+    expect(Object.values(inputs.particulars)).toContainEqual({
+      Wind: { low: 10, high: 15, source: 'Mast, one year', confidence: 'high' },
+    });
   });
 
   test('hold an evaluation that can be posted as it is and gives the printed figures', async () => {

@@ -1,7 +1,7 @@
 import { eq } from 'drizzle-orm';
 import { describe, expect, test } from 'vitest';
 import { StudyListQuery, StudyPatch } from '#contract/study.ts';
-import { criterion, weightSet } from '#db/schema/criterion.ts';
+import { criterion, criterionGroup, weightSet } from '#db/schema/criterion.ts';
 import { record } from '#db/schema/record.ts';
 import { site } from '#db/schema/site.ts';
 import { member as memberTable, study, studyVehicle, targetOrbit } from '#db/schema/study.ts';
@@ -119,12 +119,13 @@ describe('editing', () => {
   });
 });
 
-/** A study with an orbit, a criterion of it, one entered, a site with a figure, weights and a vehicle. */
+/** A study with an orbit, a criterion of it, one entered in a group, a rating, a site with a figure, weights and a vehicle. */
 async function furnished(): Promise<Member> {
   const member = await studyWith(db, 'lead', { question: 'Where from?', turnSpeedFraction: 0.7 });
   const { studyId, userId } = member;
   const orbitId = newId();
-  const entered = newId();
+  const [entered, rating, groupId] = [newId(), newId(), newId()];
+  await db.insert(criterionGroup).values({ id: groupId, studyId, name: 'Time', nameKey: 'time' });
   await db.insert(targetOrbit).values({
     id: orbitId,
     studyId,
@@ -145,7 +146,25 @@ async function furnished(): Promise<Member> {
       quantity: 'payload',
       orbitId,
     },
-    { ...common, id: entered, position: 1, name: 'Days', nameKey: 'days', source: 'entered' },
+    {
+      ...common,
+      id: entered,
+      position: 1,
+      name: 'Days',
+      nameKey: 'days',
+      source: 'entered',
+      groupId,
+      shape: { kind: 'exponential', curvature: 2 },
+    },
+    {
+      ...common,
+      id: rating,
+      position: 2,
+      name: 'Road',
+      nameKey: 'road',
+      source: 'rating',
+      ratingSteps: ['Track', 'Gravel', 'Two lanes', 'Trunk road', 'Motorway'],
+    },
   ]);
   await db.insert(site).values([
     {
@@ -156,6 +175,7 @@ async function furnished(): Promise<Member> {
       latitudeDeg: 1,
       longitudeDeg: 2,
       values: { [entered]: 240 },
+      particulars: { [entered]: { low: 200, high: 260 } },
     },
     {
       studyId,
@@ -168,7 +188,16 @@ async function furnished(): Promise<Member> {
     },
   ]);
   await db.insert(weightSet).values([
-    { studyId, points: { [entered]: 30 } },
+    {
+      studyId,
+      method: 'pairwise',
+      points: { [entered]: 30, [groupId]: 5 },
+      order: [rating, groupId],
+      judgements: [
+        [groupId, rating, 3],
+        [newId(), rating, 5],
+      ],
+    },
     { studyId, userId, points: { [entered]: 99 } },
   ]);
   await db.insert(studyVehicle).values({ studyId, spec: { name: 'Trial lifter' } });
@@ -204,14 +233,39 @@ describe('making', () => {
     const days = criteria.find(({ name }) => name === 'Days')?.id ?? '';
     expect(orbit).toMatchObject({ code: 'POL', inclinationDeg: 90 });
     expect(payload).toMatchObject({ quantity: 'payload', orbitId: orbit?.id });
-    expect(sites).toMatchObject([{ code: 'TH', values: { [days]: 240 } }]);
-    expect(sets).toMatchObject([{ userId: null, points: { [days]: 30 } }]);
+    const road = criteria.find(({ name }) => name === 'Road');
+    const [group] = await db.select().from(criterionGroup).where(eq(criterionGroup.studyId, where.studyId));
+    expect(group).toMatchObject({ name: 'Time', nameKey: 'time' });
+    expect(criteria.find(({ name }) => name === 'Days')).toMatchObject({
+      groupId: group?.id,
+      shape: { kind: 'exponential', curvature: 2 },
+    });
+    expect(road).toMatchObject({
+      groupId: null,
+      ratingSteps: ['Track', 'Gravel', 'Two lanes', 'Trunk road', 'Motorway'],
+    });
+    expect(sites).toMatchObject([
+      { code: 'TH', values: { [days]: 240 }, particulars: { [days]: { low: 200, high: 260 } } },
+    ]);
+    // The judgement against what was removed before still says that the road has been judged.
+    expect(sets).toMatchObject([
+      {
+        userId: null,
+        method: 'pairwise',
+        points: { [days]: 30, [group?.id ?? '']: 5 },
+        order: [road?.id, group?.id],
+        judgements: [
+          [group?.id, road?.id, 3],
+          [expect.any(String), road?.id, 5],
+        ],
+      },
+    ]);
     expect(vehicle).toMatchObject({ spec: { name: 'Trial lifter' } });
     expect(head).toMatchObject({ turnSpeedFraction: 0.7 });
     const [theirs] = await db.select().from(targetOrbit).where(eq(targetOrbit.studyId, source.studyId));
     expect(orbit?.id).not.toBe(theirs?.id);
     expect(await linesOf(made.id)).toMatchObject([
-      { to: { origin: 'copy', studyId: source.studyId, revision: 1, orbits: 1, sites: 1, criteria: 2 } },
+      { to: { origin: 'copy', studyId: source.studyId, revision: 1, orbits: 1, sites: 1, criteria: 3 } },
     ]);
   });
 

@@ -1,7 +1,7 @@
 import { and, asc, eq, isNull } from 'drizzle-orm';
 import type { Db } from '../client.ts';
 import { newId } from '../columns.ts';
-import { criterion, weightSet } from '../schema/criterion.ts';
+import { criterion, criterionGroup, weightSet } from '../schema/criterion.ts';
 import { site } from '../schema/site.ts';
 import { study, studyVehicle, targetOrbit } from '../schema/study.ts';
 
@@ -11,21 +11,34 @@ type Insert<T extends { $inferInsert: object }, Dropped extends string> = Omit<
 >;
 type Spec = Record<string, unknown>;
 
+/** What a set of weights says, by keys or ids of criteria and groups. */
+export interface WeightSaying {
+  method: (typeof weightSet.$inferSelect)['method'];
+  points: Record<string, number>;
+  order: string[];
+  judgements: [string, string, number][];
+}
+
 /**
  * All that makes a study what it is, without its people and its history: what a copy takes and what a scenario
- * brings. Orbits and criteria go by keys of their own, which figures, points and computed criteria refer to.
+ * brings. Orbits, groups and criteria go by keys of their own, which figures, weights and computed criteria refer to.
  */
 export interface StudyContents {
   head: { organisation: string; question: string; decideBy: string | null; turnSpeedFraction: number };
   vehicle: { spec: Spec; libraryVehicleId: string | null } | null;
   orbits: (Insert<typeof targetOrbit, never> & { key: string })[];
-  criteria: (Insert<typeof criterion, 'orbitId'> & { key: string; orbitKey: string | null })[];
-  /** `values` by criterion key. */
+  groups: (Insert<typeof criterionGroup, never> & { key: string })[];
+  criteria: (Insert<typeof criterion, 'orbitId' | 'groupId'> & {
+    key: string;
+    orbitKey: string | null;
+    groupKey: string | null;
+  })[];
+  /** `values` and `particulars` by criterion key. */
   sites: (Insert<typeof site, 'values' | 'uploadId' | 'createdAt' | 'updatedAt' | 'deletedAt'> & {
     values: Record<string, number | string>;
   })[];
-  /** The study's weights by criterion key; null where none were ever set. */
-  points: Record<string, number> | null;
+  /** The study's weights by criterion and group key; null where none were ever set. */
+  weights: WeightSaying | null;
 }
 
 /** A study's contents at one moment: its row is locked against changes until the transaction ends. */
@@ -49,16 +62,22 @@ export async function readContents(
     .from(studyVehicle)
     .where(eq(studyVehicle.studyId, studyId));
   const [weights] = await tx
-    .select({ points: weightSet.points })
+    .select({
+      method: weightSet.method,
+      points: weightSet.points,
+      order: weightSet.order,
+      judgements: weightSet.judgements,
+    })
     .from(weightSet)
     .where(and(eq(weightSet.studyId, studyId), isNull(weightSet.userId)));
   return {
     head,
     vehicle: vehicle ?? null,
     orbits: await readOrbits(tx, studyId),
+    groups: await readGroups(tx, studyId),
     criteria: await readCriteria(tx, studyId),
     sites: await readSites(tx, studyId),
-    points: weights?.points ?? null,
+    weights: weights ?? null,
   };
 }
 
@@ -81,11 +100,20 @@ function readOrbits(tx: Db, studyId: string): Promise<StudyContents['orbits']> {
     .orderBy(asc(targetOrbit.position), asc(targetOrbit.id));
 }
 
+function readGroups(tx: Db, studyId: string): Promise<StudyContents['groups']> {
+  return tx
+    .select({ key: criterionGroup.id, name: criterionGroup.name, nameKey: criterionGroup.nameKey })
+    .from(criterionGroup)
+    .where(eq(criterionGroup.studyId, studyId))
+    .orderBy(asc(criterionGroup.id));
+}
+
 function readCriteria(tx: Db, studyId: string): Promise<StudyContents['criteria']> {
   return tx
     .select({
       key: criterion.id,
       orbitKey: criterion.orbitId,
+      groupKey: criterion.groupId,
       name: criterion.name,
       nameKey: criterion.nameKey,
       unit: criterion.unit,
@@ -137,6 +165,10 @@ class Renamed {
     if (id === undefined) throw new RangeError(`writeContents: nothing has the key ${key}`);
     return id;
   }
+  /** The same where there may be no key. */
+  orNull(key: string | null): string | null {
+    return key === null ? null : this.of(key);
+  }
   /** A record's keys made ids; figures of criteria that are gone fall away. */
   record<V>(values: Readonly<Record<string, V>>): Record<string, V> {
     return Object.fromEntries(
@@ -146,18 +178,33 @@ class Renamed {
       }),
     );
   }
+  /**
+   * What a set of weights says, by ids; what it says of criteria and groups that are gone falls away. A judgement
+   * against one that is gone stays, since it still says that the other has been judged.
+   */
+  saying({ method, points, order, judgements }: WeightSaying): WeightSaying {
+    const ids = this.#ids;
+    return {
+      method,
+      points: this.record(points),
+      order: order.flatMap((key) => ids.get(key) ?? []),
+      judgements: judgements.flatMap(([a, b, times]): WeightSaying['judgements'] => {
+        return ids.has(a) || ids.has(b) ? [[ids.get(a) ?? a, ids.get(b) ?? b, times]] : [];
+      }),
+    };
+  }
 }
 
 /**
  * Fills an empty study with contents, in their order.
- * @returns how a criterion's key became its id, for whoever writes members' own weights
+ * @returns how keys of criteria and groups became ids, for whoever writes members' own weights
  */
 export async function writeContents(
   tx: Db,
   { studyId, contents }: { studyId: string; contents: StudyContents },
-): Promise<{ pointsByIds: (points: Record<string, number>) => Record<string, number> }> {
+): Promise<{ weightsByIds: (weights: WeightSaying) => WeightSaying }> {
   const orbits = new Renamed(contents.orbits);
-  const criteria = new Renamed(contents.criteria);
+  const weighed = new Renamed([...contents.criteria, ...contents.groups]);
   await tx.update(study).set(contents.head).where(eq(study.id, studyId));
   if (contents.vehicle) await tx.insert(studyVehicle).values({ studyId, ...contents.vehicle });
   if (contents.orbits.length > 0)
@@ -169,12 +216,17 @@ export async function writeContents(
         position,
       })),
     );
+  if (contents.groups.length > 0)
+    await tx
+      .insert(criterionGroup)
+      .values(contents.groups.map(({ key, ...values }) => ({ ...values, id: weighed.of(key), studyId })));
   if (contents.criteria.length > 0)
     await tx.insert(criterion).values(
-      contents.criteria.map(({ key, orbitKey, ...values }, position) => ({
+      contents.criteria.map(({ key, orbitKey, groupKey, ...values }, position) => ({
         ...values,
-        id: criteria.of(key),
-        orbitId: orbitKey === null ? null : orbits.of(orbitKey),
+        id: weighed.of(key),
+        orbitId: orbits.orNull(orbitKey),
+        groupId: weighed.orNull(groupKey),
         studyId,
         position,
       })),
@@ -183,12 +235,11 @@ export async function writeContents(
     await tx.insert(site).values(
       contents.sites.slice(i, i + ROWS_A_STATEMENT).map((row) => ({
         ...row,
-        values: criteria.record(row.values),
-        particulars: criteria.record(row.particulars ?? {}),
+        values: weighed.record(row.values),
+        particulars: weighed.record(row.particulars ?? {}),
         studyId,
       })),
     );
-  if (contents.points)
-    await tx.insert(weightSet).values({ studyId, points: criteria.record(contents.points) });
-  return { pointsByIds: (points) => criteria.record(points) };
+  if (contents.weights) await tx.insert(weightSet).values({ studyId, ...weighed.saying(contents.weights) });
+  return { weightsByIds: (weights) => weighed.saying(weights) };
 }

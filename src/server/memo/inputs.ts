@@ -2,14 +2,23 @@ import { createHash } from 'node:crypto';
 import canonicalize from 'canonicalize';
 import type { EvaluateInput } from '#contract/evaluate.ts';
 import type { RankingSnapshot } from '#server/ranking/read-snapshot.ts';
+import { weightsByName } from './inputs-weights.ts';
 
 /**
  * Everything a memo's figures follow from, without the study's own ids and in an order of its own, so that the same
  * inputs are the same text wherever they were entered. `evaluate` may be posted to the interface as it is.
  */
-function inputsOf({ inputs, criteria, entered, study }: RankingSnapshot) {
+function inputsOf({ inputs, criteria, groups, entered, study }: RankingSnapshot) {
   const orbitCode = new Map(inputs.orbits.map(({ orbitId, code }) => [orbitId, code]));
   const nameOf = new Map(criteria.map(({ id, name }) => [id, name]));
+  const groupName = new Map(groups.map(({ id, name }) => [id, name]));
+  const byName = <V>(held: Readonly<Record<string, V>> | undefined): Record<string, V> =>
+    Object.fromEntries(
+      Object.entries(held ?? {}).flatMap(([id, value]) => {
+        const name = nameOf.get(id);
+        return name === undefined ? [] : [[name, value]];
+      }),
+    );
   const evaluate: Omit<EvaluateInput, 'vehicle'> & { vehicle?: EvaluateInput['vehicle'] } = {
     sites: inputs.sites.map(({ siteId: _, ...site }) => site),
     orbits: inputs.orbits.map(({ orbitId: _, ...orbit }) => orbit),
@@ -19,27 +28,27 @@ function inputsOf({ inputs, criteria, entered, study }: RankingSnapshot) {
   };
   return {
     evaluate,
-    criteria: criteria.map(({ id, name, unit, direction, source, quantity, orbitId, levels, limit }) => ({
-      name,
-      unit,
-      direction,
-      source,
-      quantity,
-      orbit: orbitId === null ? null : (orbitCode.get(orbitId) ?? null),
-      levels,
-      limit,
-      points: study.points[id] ?? 0,
-    })),
+    criteria: criteria.map(
+      ({ name, unit, direction, source, quantity, orbitId, levels, shape, groupId, steps, limit }) => ({
+        name,
+        unit,
+        direction,
+        source,
+        quantity,
+        orbit: orbitId === null ? null : (orbitCode.get(orbitId) ?? null),
+        levels,
+        shape,
+        group: groupId === null ? null : (groupName.get(groupId) ?? null),
+        steps,
+        limit,
+      }),
+    ),
+    weights: weightsByName(study, { criteria, groups }),
     figures: Object.fromEntries(
-      inputs.sites.map(({ siteId, code }) => [
-        code,
-        Object.fromEntries(
-          Object.entries(entered.get(siteId)?.values ?? {}).flatMap(([id, value]) => {
-            const name = nameOf.get(id);
-            return name === undefined ? [] : [[name, value]];
-          }),
-        ),
-      ]),
+      inputs.sites.map(({ siteId, code }) => [code, byName(entered.get(siteId)?.values)]),
+    ),
+    particulars: Object.fromEntries(
+      inputs.sites.map(({ siteId, code }) => [code, byName(entered.get(siteId)?.particulars)]),
     ),
   };
 }

@@ -1,10 +1,11 @@
-import type { Criterion } from '#contract/criterion.ts';
+import type { Criterion, CriterionGroup } from '#contract/criterion.ts';
 import type { FigureParticulars } from '#contract/site.ts';
 import type { StudyInputs } from '#contract/study-inputs.ts';
 import type { Weights } from '#contract/weights.ts';
 import type { PooledDb } from '#db/client.ts';
 import { listEnteredValues } from '#db/queries/criterion.ts';
 import { inOneMoment, selectStudyInputs } from '#db/queries/study-inputs.ts';
+import { readGroups } from '#server/criteria/groups/read-groups.ts';
 import { readCriteria } from '#server/criteria/read-criteria.ts';
 import { notFound } from '#server/errors.ts';
 import { presentStudyInputs } from '#server/evaluate/study-inputs.ts';
@@ -20,6 +21,7 @@ export interface RankingSnapshot {
   inputs: StudyInputs;
   /** Text criteria too. */
   criteria: Criterion[];
+  groups: CriterionGroup[];
   /** Entered figures and what is known of them, by site id, then by criterion id. */
   entered: ReadonlyMap<string, Entered>;
   study: Weights;
@@ -34,6 +36,7 @@ export async function readSnapshot(
   const { rows, ...rest } = await inOneMoment(db, async (tx) => ({
     rows: await selectStudyInputs(tx, { studyId }),
     criteria: await readCriteria(tx, { studyId }),
+    groups: await readGroups(tx, { studyId }),
     entered: new Map(
       (await listEnteredValues(tx, { studyId })).map(({ siteId, ...entered }) => [siteId, entered]),
     ),

@@ -1,11 +1,12 @@
 import { CriterionInput } from '#contract/criterion.ts';
+import { pointsStatement } from '#contract/weights.ts';
 import { QUANTITIES, quantityName } from '#contract/quantity.ts';
 import { OrbitInput } from '#contract/requirement.ts';
 import { SiteInput } from '#contract/site.ts';
 import { DEFAULT_TURN_SPEED_FRACTION } from '#contract/evaluate.ts';
 import { foldName } from '#core/csv/codes.ts';
 import { newId } from '#db/columns.ts';
-import type { StudyContents } from '#db/queries/contents.ts';
+import type { StudyContents, WeightSaying } from '#db/queries/contents.ts';
 import { levelColumns, limitColumns } from '#server/criteria/present.ts';
 import { inputFields, orbitColumns } from '#server/requirement/orbit-values.ts';
 import type { DemoCriterion, DemoSite, DemoStudy } from '#seed/demo/shape.ts';
@@ -27,17 +28,19 @@ class Ids {
 }
 
 function criterionOf(
-  { key: name, orbitCode, ...draft }: DemoCriterion,
-  ids: { criteria: Ids; orbits: Ids },
+  { key: name, orbitCode, group, ...draft }: DemoCriterion,
+  ids: { weighed: Ids; orbits: Ids },
   orbitNames: ReadonlyMap<string, string>,
 ): StudyContents['criteria'][number] {
-  const key = ids.criteria.of(name);
+  const key = ids.weighed.of(name);
+  const groupKey = group === undefined ? null : ids.weighed.of(group);
   const orbitKey = orbitCode === undefined ? null : ids.orbits.of(orbitCode);
   const input = CriterionInput.parse(draft.source === 'computed' ? { ...draft, orbitId: orbitKey } : draft);
   const settings = { ...levelColumns(input.levels), shape: input.shape, ...limitColumns(input.limit) };
   if (input.source === 'rating')
     return {
       key,
+      groupKey,
       orbitKey: null,
       name: input.name,
       nameKey: foldName(input.name),
@@ -50,6 +53,7 @@ function criterionOf(
   if (input.source !== 'computed')
     return {
       key,
+      groupKey,
       orbitKey: null,
       name: input.name,
       nameKey: foldName(input.name),
@@ -62,6 +66,7 @@ function criterionOf(
   const shown = input.name ?? quantityName(input.quantity, orbitName);
   return {
     key,
+    groupKey,
     orbitKey,
     name: shown,
     nameKey: foldName(shown),
@@ -73,24 +78,30 @@ function criterionOf(
   };
 }
 
-function siteOf({ values = {}, ...draft }: DemoSite, criteria: Ids): StudyContents['sites'][number] {
-  const site = SiteInput.parse({ ...draft, values: criteria.keyed(values) });
+function siteOf(
+  { values = {}, particulars = {}, ...draft }: DemoSite,
+  criteria: Ids,
+): StudyContents['sites'][number] {
+  const keyed = { values: criteria.keyed(values), particulars: criteria.keyed(particulars) };
+  const site = SiteInput.parse({ ...draft, ...keyed });
   return { ...site, code: draft.code, nameKey: foldName(site.name) };
 }
 
 /**
  * A study of a scenario as contents to write, checked by the interface's own schemas.
- * @returns the contents, and how a scenario's points are keyed in them
+ * @returns the contents, and what a scenario's points, by criterion key and group name, say in them
  * @throws ZodError, RangeError where the scenario does not hold together
  */
 export function scenarioContents(
   study: DemoStudy,
   vehicle: StudyContents['vehicle'],
-): { contents: StudyContents; keyed: (points: Record<string, number>) => Record<string, number> } {
+): { contents: StudyContents; saying: (points: Record<string, number>) => WeightSaying } {
+  const groups = [...new Set(study.criteria.flatMap(({ group }) => group ?? []))];
   const ids = {
     orbits: new Ids(study.orbits.map(({ code }) => code)),
-    criteria: new Ids(study.criteria.map(({ key }) => key)),
+    weighed: new Ids([...study.criteria.map(({ key }) => key), ...groups]),
   };
+  const saying = (points: Record<string, number>) => pointsStatement(ids.weighed.keyed(points));
   const orbitNames = new Map(study.orbits.map(({ code, name }) => [code, name ?? code]));
   const contents: StudyContents = {
     head: {
@@ -104,9 +115,10 @@ export function scenarioContents(
       const input = OrbitInput.parse(draft);
       return { key: ids.orbits.of(draft.code), ...orbitColumns(inputFields(input, draft.code)) };
     }),
+    groups: groups.map((name) => ({ key: ids.weighed.of(name), name, nameKey: foldName(name) })),
     criteria: study.criteria.map((draft) => criterionOf(draft, ids, orbitNames)),
-    sites: study.sites.map((draft) => siteOf(draft, ids.criteria)),
-    points: ids.criteria.keyed(study.points),
+    sites: study.sites.map((draft) => siteOf(draft, ids.weighed)),
+    weights: saying(study.points),
   };
-  return { contents, keyed: (points) => ids.criteria.keyed(points) };
+  return { contents, saying };
 }
