@@ -25,16 +25,34 @@ export function concordance(rankings: readonly (readonly number[])[]): Concordan
   return most === 0 ? { kind: 'undefined' } : { kind: 'agreement', w: (12 * deviation) / most };
 }
 
+/**
+ * Mean ranks 1, 2.5, 2.5, 4: tied things share the mean of the ranks they take up.
+ * @param row a figure a thing, lowest is first.
+ */
+export function meanRanks(row: readonly number[]): Float64Array {
+  const ranks = new Float64Array(row.length);
+  for (const tied of tiesOf(row)) for (const thing of tied.things) ranks[thing] = tied.rank;
+  return ranks;
+}
+
 /** Adds one judge's mean ranks. @returns Σ(t³ − t) over the ties */
 function addMeanRanks(sums: Float64Array, row: readonly number[]): number {
-  const order = row.map((_, thing) => thing).sort((a, b) => (row[a] ?? 0) - (row[b] ?? 0));
-  const sorted = order.map((thing) => row[thing] ?? 0);
   let ties = 0;
-  for (let first = 0, end = 0; first < order.length; first = end) {
-    end = endOfTie(sorted, first);
-    const length = end - first;
-    ties += length ** 3 - length;
-    for (const thing of order.slice(first, end)) sums[thing] = (sums[thing] ?? 0) + (first + 1 + end) / 2;
+  for (const { things, rank } of tiesOf(row)) {
+    ties += things.length ** 3 - things.length;
+    for (const thing of things) sums[thing] = (sums[thing] ?? 0) + rank;
   }
   return ties;
+}
+
+/** Things in order, tied ones together with their mean rank. */
+function tiesOf(row: readonly number[]): { things: number[]; rank: number }[] {
+  const order = row.map((_, thing) => thing).sort((a, b) => (row[a] ?? 0) - (row[b] ?? 0));
+  const sorted = order.map((thing) => row[thing] ?? 0);
+  const tied: { things: number[]; rank: number }[] = [];
+  for (let first = 0, end = 0; first < order.length; first = end) {
+    end = endOfTie(sorted, first);
+    tied.push({ things: order.slice(first, end), rank: (first + 1 + end) / 2 });
+  }
+  return tied;
 }
