@@ -68,3 +68,21 @@ export const WhatIfAdoption = z
   })
   .meta({ id: 'WhatIfAdoption' });
 export type WhatIfAdoption = z.infer<typeof WhatIfAdoption>;
+
+/** What an adoption did. */
+export const WhatIfAdopted = z
+  .object({
+    weights: z.boolean().meta({ description: 'Whether the study’s weights were written' }),
+    limits: z.array(z.uuid()).meta({ description: 'Criteria whose limit changed' }),
+    figures: z.array(z.object({ siteId: z.uuid(), criterionId: z.uuid() })),
+    /** Low and high figures that no longer held beside the adopted figure. */
+    dropped: z.array(
+      z.object({ siteId: z.uuid(), criterionId: z.uuid(), parts: z.array(z.enum(['low', 'high'])) }),
+    ),
+    removed: z.array(z.uuid()).meta({ description: 'Sites removed; they can be restored' }),
+    ignored: z.int().meta({ description: 'Entries whose site or criterion has gone' }),
+    revision: z.int(),
+    savedAt: z.iso.datetime(),
+  })
+  .meta({ id: 'WhatIfAdopted' });
+export type WhatIfAdopted = z.infer<typeof WhatIfAdopted>;

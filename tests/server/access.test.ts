@@ -31,10 +31,16 @@ const PUBLIC = new Set([
 const API = '/api/v1/studies/[studyId]';
 /** Beyond reading: every role may leave; the members' list says who may do more. */
 const ANY_MEMBER = new Set([`DELETE ${API}/members/[memberId]`]);
-const OWN_WEIGHTS = new Set([`PUT ${API}/weights`]);
+const OWN_WEIGHTS = new Set([
+  `PUT ${API}/weights`,
+  `POST ${API}/what-ifs`,
+  `PATCH ${API}/what-ifs/[whatIfId]`,
+  `DELETE ${API}/what-ifs/[whatIfId]`,
+]);
 const LEAD_ALONE = new Set([
   `DELETE ${API}`,
   `POST ${API}/weights/choice`,
+  `POST ${API}/what-ifs/[whatIfId]/adopt`,
   `POST ${API}/members`,
   `PATCH ${API}/members/[memberId]`,
 ]);

@@ -8,8 +8,8 @@ import type { Ranking, RankingFigures, RankingStart } from '#contract/ranking.ts
 import type { WeightsOf } from '#contract/weights.ts';
 import { useWeightSet, type WeightSet } from './use-weight-set.ts';
 
-/** Changes that move no figure: who is a member, and weights, which are read on their own. */
-const APART = new Set(['weights', 'own-weights', 'member', 'study']);
+/** Changes that move no figure: who is a member, weights, which are read on their own, and what-ifs. */
+const APART = new Set(['weights', 'own-weights', 'what-if', 'member', 'study']);
 
 /** Rows drawn as plain HTML; the same number the page drew. */
 const DRAWN_ROWS = 50;

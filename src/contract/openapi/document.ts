@@ -5,6 +5,7 @@ import { peopleOperations } from './people.ts';
 import { siteOperations } from './sites.ts';
 import { studyOperations } from './study.ts';
 import { weighingOperations } from './weighing.ts';
+import { whatIfOperations } from './what-ifs.ts';
 
 /** Every address of the interface, described by the schemas that check its requests. */
 export const operations: Operations = {
@@ -18,6 +19,7 @@ export const operations: Operations = {
   },
   ...weighingOperations,
   ...studyOperations,
+  ...whatIfOperations,
   ...siteOperations,
   ...peopleOperations,
   '/api/v1/openapi.json': {
