@@ -10,6 +10,17 @@ export interface Quantity {
   overManifest: string;
 }
 
+/** A line of the Δv budget: less of it is better, and the worst orbit stands for the manifest. */
+const budgetLine = (name: string) =>
+  ({
+    name,
+    unit: 'm/s',
+    direction: 'less',
+    decimals: 0,
+    scope: 'either',
+    overManifest: 'greatest of the orbits',
+  }) as const satisfies Quantity;
+
 export const QUANTITIES = {
   'payload-per-year': {
     name: 'Payload a year',
@@ -35,6 +46,21 @@ export const QUANTITIES = {
     scope: 'either',
     overManifest: 'greatest of the orbits',
   },
+  'required-speed': budgetLine('Required speed'),
+  losses: budgetLine('Losses'),
+  'turn-cost': budgetLine('Cost of the turn'),
+  dogleg: budgetLine('Dogleg'),
+  'plane-change': budgetLine('Plane change'),
+  transfer: budgetLine('Transfer'),
+  shortfall: budgetLine('Δv shortfall'),
+  'rotation-speed': {
+    name: 'Rotation speed of the site',
+    unit: 'm/s',
+    direction: 'more',
+    decimals: 1,
+    scope: 'manifest',
+    overManifest: 'the site’s own speed due east, whatever it flies to',
+  },
   'rotation-gain': {
     name: 'Rotation gain',
     unit: 'm/s',
@@ -58,6 +84,14 @@ export const QUANTITIES = {
     decimals: 1,
     scope: 'manifest',
     overManifest: 'from the permitted azimuths, into a circular orbit at 185 km',
+  },
+  'orbits-fallen-short': {
+    name: 'Orbits without payload',
+    unit: 'orbits',
+    direction: 'less',
+    decimals: 0,
+    scope: 'manifest',
+    overManifest: 'number of orbits out of reach or fallen short of',
   },
   'orbits-out-of-reach': {
     name: 'Orbits out of reach',

@@ -65,19 +65,58 @@ function perOrbit(
   return figures.length === 0 ? MISSING : { cell: worst(...figures) };
 }
 
+/** How many orbits give no payload; without a vehicle none of those within reach can be told. */
+function fallenShort(orbits: readonly OrbitResult[]): ComputedFigure {
+  const untold = orbits.some((orbit) => failing(orbit) === null && orbit.payloadKg === null);
+  return untold ? NO_VEHICLE : { cell: orbits.filter((orbit) => failing(orbit) !== null).length };
+}
+
+/** What a site lacks to reach an orbit: none where it brings payload there. An orbit fallen short has a figure here. */
+function shortfall(orbits: readonly OrbitResult[]): ComputedFigure {
+  const far = orbits.find(({ way }) => way === 'out-of-reach');
+  if (far) return { cell: 'worst', note: orbits.length === 1 ? 'out of reach' : `${far.code} out of reach` };
+  if (orbits.some(({ payloadKg, shortfallMps }) => payloadKg === null && shortfallMps === null))
+    return NO_VEHICLE;
+  return { cell: Math.max(...orbits.map(({ shortfallMps }) => shortfallMps ?? 0)) };
+}
+
+type Line = keyof OrbitResult['deltaVMps'];
+
+/** The greatest sum of some lines of the Δv budget over the orbits. */
+const budget =
+  (...lines: readonly Line[]) =>
+  (_: SiteFlight, orbits: readonly OrbitResult[]): ComputedFigure =>
+    perOrbit(
+      orbits,
+      ({ deltaVMps }) => lines.reduce((sum, line) => sum + (deltaVMps[line] ?? 0), 0),
+      Math.max,
+    );
+
 const READERS: Record<QuantityKey, (flight: SiteFlight, orbits: readonly OrbitResult[]) => ComputedFigure> = {
   'payload-per-year': payloadPerYear,
   payload: (_, [orbit]) => (orbit ? payload(orbit) : MISSING),
-  'delta-v': (_, orbits) => perOrbit(orbits, (orbit) => orbit.deltaVMps.total, Math.max),
+  'delta-v': budget('total'),
+  'required-speed': budget('required'),
+  losses: budget('losses'),
+  'turn-cost': budget('dogleg', 'planeChange'),
+  dogleg: budget('dogleg'),
+  'plane-change': budget('planeChange'),
+  transfer: budget('transfer'),
+  shortfall: (_, orbits) => shortfall(orbits),
+  'rotation-speed': ({ result }) => ({ cell: result.rotationSpeedMps }),
   'rotation-gain': (_, orbits) => perOrbit(orbits, (orbit) => orbit.rotationGainMps, Math.min),
   turn: (_, orbits) => perOrbit(orbits, turnOf, Math.max),
   'lowest-inclination': ({ lowestInclinationDeg }) => ({ cell: lowestInclinationDeg }),
+  'orbits-fallen-short': (_, orbits) => fallenShort(orbits),
   'orbits-out-of-reach': (_, orbits) => ({ cell: orbits.filter(({ way }) => way === 'out-of-reach').length }),
 };
 
+/** Quantities that need no target orbit. */
+const OF_THE_SITE: ReadonlySet<QuantityKey> = new Set<QuantityKey>(['lowest-inclination', 'rotation-speed']);
+
 /**
  * A computed criterion's figure for a site, in the criterion's unit. An orbit out of reach or fallen short is no
- * missing value: payload 0; Δv, turn and gain `worst`.
+ * missing value: payload 0; Δv and its lines, turn and gain `worst`.
  * @param orbitIndex place of the criterion's orbit in the manifest; null for all of it
  */
 export function computedFigure(
@@ -88,6 +127,6 @@ export function computedFigure(
   const { orbits } = flight.result;
   const asked = orbitIndex === null ? orbits : orbits.slice(orbitIndex, orbitIndex + 1);
   if (quantity === null) return MISSING;
-  if (asked.length === 0 && quantity !== 'lowest-inclination') return MISSING;
+  if (asked.length === 0 && !OF_THE_SITE.has(quantity)) return MISSING;
   return READERS[quantity](flight, asked);
 }
