@@ -56,12 +56,15 @@ export const pointsStatement = (points: Readonly<Record<string, number>>): Weigh
 
 const Person = z.object({ userId: z.string(), name: z.string() });
 
+/** The lead who set or chose them; sets of before this was kept have none. */
+const by = Person.optional();
+
 /** Where the study's weights come from: set apart, one member's own, or the mean of several. */
 export const WeightOrigin = z
   .discriminatedUnion('kind', [
-    z.object({ kind: z.literal('apart') }),
-    z.object({ kind: z.literal('member'), ...Person.shape }),
-    z.object({ kind: z.literal('mean'), members: z.array(Person) }),
+    z.object({ kind: z.literal('apart'), by }),
+    z.object({ kind: z.literal('member'), ...Person.shape, by }),
+    z.object({ kind: z.literal('mean'), members: z.array(Person), by }),
   ])
   .meta({ id: 'WeightOrigin' });
 export type WeightOrigin = z.infer<typeof WeightOrigin>;

@@ -88,10 +88,11 @@ export const criterion = pgTable(
 export const weightMethod = pgEnum('weight_method', ['points', 'swing', 'pairwise', 'centroid']);
 
 /** Where the study's weights come from. */
-export type WeightOriginColumn =
+export type WeightOriginColumn = { by?: { userId: string; name: string } | undefined } & (
   | { kind: 'apart' }
   | { kind: 'member'; userId: string; name: string }
-  | { kind: 'mean'; members: { userId: string; name: string }[] };
+  | { kind: 'mean'; members: { userId: string; name: string }[] }
+);
 
 /** A statement of weights: the study's (no person) or a member's own. */
 export const weightSet = pgTable(

@@ -38,6 +38,7 @@ export async function chooseWeights(
     const before = await readWeights(tx, { studyId, userId, weights: 'study' });
     if (before.version !== version) throw stale(before);
     const { items } = await readWeighed(tx, { studyId });
+    const by = { userId, name: member.name };
     const shared = await sharedSets(tx, items, studyId);
     const { statement, origin } =
       choice.from.kind === 'mean' ? meanOf(items, shared) : setOf(shared, choice.from.userId);
@@ -45,7 +46,7 @@ export async function chooseWeights(
       studyId,
       userId: null,
       id: kept?.id ?? null,
-      values: { ...statement, shared: false, origin, reason: choice.reason },
+      values: { ...statement, shared: false, origin: { ...origin, by }, reason: choice.reason },
     });
     const after = presentWeights({ weights: 'study', items, set: row, version: row.version });
     return { result: after, entries: [{ ...recorded(before, after), action: 'choose', objectId: row.id }] };

@@ -37,7 +37,9 @@ export async function saveWeights(
     const statement = statementOf(input);
     const restated = !same(statement, statementOf(before));
     if (restated) checkStatement(statement, { items, names, before });
-    const particulars = mine ? ownParticulars(before, input) : studyParticulars(before, input, restated);
+    const particulars = mine
+      ? ownParticulars(before, input)
+      : studyParticulars(before, input, restated ? member : null);
     const unchanged = kept && !restated && same(particulars, particularsOf(before));
     if (unchanged) return { result: before, entries: [] };
     const values = { ...(restated || !kept ? statement : statementOf(kept)), ...particulars };
@@ -78,14 +80,17 @@ const ownParticulars = (before: Weights, { shared }: WeightsDraft): Particulars 
   reason: '',
 });
 
-/** Points moved by hand set the study's weights apart, and the reason for an earlier choice is none for these. */
-function studyParticulars(before: Weights, { reason }: WeightsDraft, restated: boolean): Particulars {
+/**
+ * Weights moved by hand stand apart, and the reason for an earlier choice is none for these.
+ * @param by who states them anew; null where they stay as they are.
+ */
+function studyParticulars(before: Weights, { reason }: WeightsDraft, by: Member | null): Particulars {
   const kept = before.origin ?? { kind: 'apart' };
-  const chosen = kept.kind !== 'apart';
+  if (!by) return { shared: false, origin: kept, reason: reason ?? before.reason };
   return {
     shared: false,
-    origin: restated ? { kind: 'apart' } : kept,
-    reason: reason ?? (restated && chosen ? '' : before.reason),
+    origin: { kind: 'apart', by: { userId: by.userId, name: by.name } },
+    reason: reason ?? (kept.kind === 'apart' ? before.reason : ''),
   };
 }
 
