@@ -13,7 +13,11 @@ export const UploadColumn = z
     unit: z.string().nullable().meta({ description: 'Elevation: m or ft. A criterion: its unit, or empty' }),
     criterion: z.string().nullable().meta({ description: 'Name of the entered criterion that it fills' }),
     criterionId: z.uuid().nullable().meta({ description: 'Null for a criterion that the commit will make' }),
-    kind: z.enum(['number', 'text']).nullable(),
+    kind: z.enum(['number', 'rating', 'text']).nullable(),
+    part: z
+      .enum(['likely', 'low', 'high'])
+      .nullable()
+      .meta({ description: 'Which part of the criterion’s figure: x, x_low or x_high' }),
   })
   .meta({ id: 'UploadColumn' });
 
@@ -41,6 +45,9 @@ const ReadSite = z.object({
   values: z
     .record(z.string(), z.union([z.number(), z.string()]))
     .meta({ description: 'Figures by criterion name' }),
+  particulars: z
+    .record(z.string(), z.object({ low: z.number().optional(), high: z.number().optional() }))
+    .meta({ description: 'Low and high of those figures, by criterion name' }),
 });
 
 export const UploadRow = z

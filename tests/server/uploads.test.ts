@@ -240,6 +240,66 @@ describe('commit', () => {
   });
 });
 
+describe('low and high', () => {
+  const idOf = async (member: Member) => Object.keys((await sitesOf(member))[0]?.values ?? {})[0] ?? '';
+
+  test('are committed, written over, and come back with an undo; what the file has no column for stays', async () => {
+    const member = await studyWith(db, 'engineer');
+    const read = await preview(member, 'name,lat,lon,Cost,Cost_low,Cost_high\nEssery Bank,8,-59,12,10,15\n');
+    expect(read.rows[0]?.site.particulars).toEqual({ Cost: { low: 10, high: 15 } });
+    await commit(member, read);
+    const [made] = await sitesOf(member);
+    if (!made) throw new Error('no site');
+    const id = await idOf(member);
+    expect(made.particulars).toEqual({ [id]: { low: 10, high: 15 } });
+    const known = { low: 10, high: 15, source: 'Port office' };
+    await changeSite(db, { member, siteId: made.id, version: 1, patch: { particulars: { [id]: known } } });
+
+    const lower = await preview(member, 'name,lat,lon,Cost,cost low\nEssery Bank,8,-59,13,\n');
+    await commit(member, lower, { duplicates: 'update' });
+    expect((await sitesOf(member))[0]).toMatchObject({ values: { [id]: 13 } });
+    expect((await sitesOf(member))[0]?.particulars).toEqual({ [id]: { high: 15, source: 'Port office' } });
+    await undoUpload(db, { member, uploadId: lower.uploadId });
+    expect((await sitesOf(member))[0]).toMatchObject({ values: { [id]: 12 }, particulars: { [id]: known } });
+
+    const gone = await preview(member, 'name,lat,lon,Cost\nEssery Bank,8,-59,\n');
+    await commit(member, gone, { duplicates: 'update' });
+    expect((await sitesOf(member))[0]).toMatchObject({ values: {}, particulars: {} });
+  });
+
+  test('an update that would leave a low or high behind is refused whole', async () => {
+    const member = await studyWith(db, 'engineer');
+    await commit(member, await preview(member, 'name,lat,lon,Cost,Cost_low\nEssery Bank,8,-59,12,10\n'));
+    const read = await preview(member, 'name,lat,lon,Cost\nEssery Bank,8,-59,9\nNew,20,20,1\n');
+    const fault = await faultOf(commit(member, read, { duplicates: 'update' }));
+    expect(fault).toMatchObject({
+      status: 422,
+      errors: [{ path: 'lines', message: 'Line 2, Cost: Low 10 is above the figure, 9.' }],
+    });
+    expect(await sitesOf(member)).toMatchObject([{ values: { [await idOf(member)]: 12 } }]);
+    expect(await commit(member, read)).toMatchObject({ added: 1, skipped: 1 });
+  });
+
+  test('a rating’s column gives its steps; sites.csv written over the study changes nothing', async () => {
+    const member = await studyWith(db, 'engineer');
+    const rating = await addCriterion(db, {
+      member,
+      input: CriterionInput.parse({ source: 'rating', name: 'Standing' }),
+    });
+    await commit(
+      member,
+      await preview(member, 'name,lat,lon,Standing,Standing_high\nA,1,2,poor,Good\nB,9,9,4,\n'),
+    );
+    expect((await sitesOf(member)).map(({ values, particulars }) => [values, particulars])).toEqual([
+      [{ [rating.id]: 1 }, { [rating.id]: { high: 3 } }],
+      [{ [rating.id]: 4 }, {}],
+    ]);
+    const again = await preview(member, await (await exportCsv(db, member)).text());
+    expect(again.counts).toEqual({ new: 0, duplicate: 2, refused: 0 });
+    expect(await commit(member, again, { duplicates: 'update' })).toMatchObject({ updated: 0, skipped: 2 });
+  });
+});
+
 describe('undo', () => {
   test('removes what was added, restores what was updated and drops the criteria it made', async () => {
     const member = await studyWith(db, 'engineer');
@@ -348,12 +408,16 @@ describe('exports', () => {
       member: from,
       input: SiteInput.parse({ name: '=1+1', latitudeDeg: -1, longitudeDeg: 180, notes: '-a\n"b"' }),
     });
+    await commit(
+      from,
+      await preview(from, 'name,lat,lon,Nearest port (km),Nearest port_low (km)\nPort,3,3,7.5,0.25\n'),
+    );
     const text = await (await exportCsv(db, from)).text();
     expect(text.split('\r\n')[0]).toMatch(
-      /^code,name,latitude_deg,longitude_deg,elevation_m,permitted_azimuths,notes,Nearest port \(km\)/,
+      /^code,name,latitude_deg,longitude_deg,elevation_m,permitted_azimuths,notes,Nearest port \(km\),Nearest port_low \(km\),Nearest port_high \(km\)/,
     );
     const read = await preview(to, text);
-    expect(read.counts).toEqual({ new: 501, duplicate: 0, refused: 0 });
+    expect(read.counts).toEqual({ new: 502, duplicate: 0, refused: 0 });
     await commit(to, read);
     expect(await (await exportCsv(db, to)).text()).toBe(text);
   });
@@ -365,14 +429,19 @@ describe('exports', () => {
       member,
       input: CriterionInput.parse({ source: 'entered', name: 'Cost', direction: 'less' }),
     });
-    await addSite(db, { member, input: { ...essery, values: { [cost.id]: 12 } } });
+    const particulars = { [cost.id]: { low: 10, source: 'Port office' } };
+    await addSite(db, { member, input: { ...essery, values: { [cost.id]: 12 }, particulars } });
     expect(await (await exportGeoJson(db, member)).json()).toMatchObject({
       type: 'FeatureCollection',
       features: [
         {
           type: 'Feature',
           geometry: { type: 'Point', coordinates: [-58.5, 7.33, 6] },
-          properties: { code: 'ES', values: { Cost: 12 } },
+          properties: {
+            code: 'ES',
+            values: { Cost: 12 },
+            particulars: { Cost: { low: 10, source: 'Port office' } },
+          },
         },
       ],
     });

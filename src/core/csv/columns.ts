@@ -9,6 +9,7 @@ import {
   type SiteField,
 } from './headings.ts';
 import { CriterionNamer, type ExistingCriterion, type FigureKind } from './criterion-columns.ts';
+import { belongsTo, partHeading, type ColumnPart } from './figure-parts.ts';
 import { MAX_COLUMNS } from './limits.ts';
 
 /** A column of the file and what it is read as. */
@@ -25,6 +26,8 @@ export interface Column {
   readonly criterionId: string | null;
   /** Whether that criterion's cells are numbers or texts; null for other columns. */
   readonly kind: FigureKind | null;
+  /** Which part of that criterion's figure its cells are; null for other columns. */
+  readonly part: ColumnPart | null;
 }
 
 /** A changed match: by the column's place from 0, or by its heading. */
@@ -141,15 +144,42 @@ function describe(
   criteria: readonly ExistingCriterion[],
 ): Column[] {
   const namer = new CriterionNamer(criteria);
-  return headings.map((heading, index) => {
+  const isPart = (heading: string, index: number): boolean =>
+    fields[index] === 'criterion' && !namer.knows(heading) && partHeading(heading) !== undefined;
+  // Lows and highs come after all figures: each is looked for among them.
+  const columns = headings.map((heading, index) => {
     const field = fields[index] ?? 'unused';
-    if (field === 'criterion') {
-      const { id, name, unit, kind } = namer.name(heading, index);
-      return { index, heading, field, unit, criterion: name, criterionId: id, kind };
-    }
+    if (field === 'criterion') return isPart(heading, index) ? null : figureColumn(namer, heading, index);
     const unit = field === 'elevationM' ? (recognised[index]?.unit ?? feetOrMetres(heading)) : null;
-    return { index, heading, field, unit, criterion: null, criterionId: null, kind: null };
+    return { index, heading, field, unit, criterion: null, criterionId: null, kind: null, part: null };
   });
+  const mains = columns.filter((column) => column?.part === 'likely').filter((column) => column !== null);
+  const taken = new Set<string>();
+  return headings.map(
+    (heading, index) =>
+      columns[index] ?? partColumn(heading, index, mains, taken) ?? figureColumn(namer, heading, index),
+  );
+}
+
+function figureColumn(namer: CriterionNamer, heading: string, index: number): Column {
+  const { id, name, unit, kind } = namer.name(heading, index);
+  return { index, heading, field: 'criterion', unit, criterion: name, criterionId: id, kind, part: 'likely' };
+}
+
+/** The low or high of a column of figures; undefined where there is no such column, or it has one already. */
+function partColumn(
+  heading: string,
+  index: number,
+  mains: readonly Column[],
+  taken: Set<string>,
+): Column | undefined {
+  const read = partHeading(heading);
+  if (read === undefined) return undefined;
+  const main = mains.find((one) => one.kind !== 'text' && belongsTo(read, one.heading, one.unit ?? ''));
+  const place = main && `${main.index} ${read.part}`;
+  if (place === undefined || taken.has(place)) return undefined;
+  taken.add(place);
+  return main && { ...main, index, heading, part: read.part };
 }
 
 function feetOrMetres(heading: string): 'm' | 'ft' {

@@ -1,8 +1,8 @@
 import { foldName } from './codes.ts';
 import { lengthOf, MAX_CRITERION_LENGTH, MAX_UNIT_LENGTH } from './limits.ts';
 
-/** What the figures of an entered criterion are. */
-export type FigureKind = 'number' | 'text';
+/** What the figures of an entered criterion are; a rating’s are its steps, 0 to 4. */
+export type FigureKind = 'number' | 'rating' | 'text';
 
 /** A criterion that the study already has; a computed one takes no figures from a file. */
 export interface ExistingCriterion {
@@ -10,6 +10,8 @@ export interface ExistingCriterion {
   readonly name: string;
   readonly unit: string;
   readonly kind: FigureKind | 'computed';
+  /** Names of a rating's steps 0 to 4. */
+  readonly steps?: readonly string[] | null | undefined;
 }
 
 /** The criterion that a column fills: one of the study's, or one to be made. */
@@ -52,6 +54,12 @@ export class CriterionNamer {
     return { id: null, name: this.#unused(cut(bare || `Column ${index + 1}`)), unit, kind: null };
   }
 
+  /** Whether a heading names a criterion of the study that a column may fill. */
+  knows(heading: string): boolean {
+    const found = this.#existing.get(foldName(heading));
+    return found !== undefined && found.kind !== 'computed';
+  }
+
   #find(name: string, unit: string): ExistingCriterion | undefined {
     const found = this.#existing.get(foldName(name));
     if (found === undefined || found.kind === 'computed' || this.#filled.has(found.id)) return undefined;
@@ -68,7 +76,7 @@ export class CriterionNamer {
 }
 
 /** The last brackets of a heading are its unit, where they are as short as one. */
-function splitUnit(heading: string): { bare: string; unit: string } {
+export function splitUnit(heading: string): { bare: string; unit: string } {
   const [, bare, round, square] = /^(.*\S)\s*(?:\(([^()]+)\)|\[([^[\]]+)\])$/.exec(heading) ?? [];
   const unit = (round ?? square ?? '').trim();
   return bare === undefined || unit === '' || lengthOf(unit) > MAX_UNIT_LENGTH

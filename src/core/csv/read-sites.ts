@@ -67,7 +67,7 @@ export function readSites(bytes: Uint8Array, options: ReadOptions): SitesFile | 
   }
   const decimalComma = hasDecimalComma(records, matched.columns, delimiter);
   const read = records.map((record) => readRecord(record, cells.length, matched.columns, decimalComma));
-  const columns = settleFigures(read, matched.columns);
+  const columns = settleFigures(read, matched.columns, { criteria: options.criteria ?? [], decimalComma });
   const rows = settleRows(read, options.existing);
   const { encoding } = decoded;
   return { kind: 'read', encoding, delimiter, decimalComma, columns, counts: count(rows), rows };

@@ -11,6 +11,7 @@ export type ReasonCode =
   | 'code-taken'
   | 'sector'
   | 'text-figure'
+  | 'low-high'
   | 'duplicate-in-file'
   | 'duplicate'
   | 'too-many-columns'

@@ -19,6 +19,14 @@ export interface SiteReading {
   notes: string;
   /** By criterion name: a number, or text as it was given. No entry where the cell is empty. */
   values: Record<string, number | string>;
+  /** Low and high of those figures, by criterion name; no entry where neither is given. */
+  particulars: Record<string, FigureBounds>;
+}
+
+/** Between what a figure is thought to lie, in the criterion's unit. */
+export interface FigureBounds {
+  low?: number | undefined;
+  high?: number | undefined;
 }
 
 const METRES_A_FOOT = 0.3048;
@@ -45,6 +53,7 @@ export function readRow(
     notes: '',
     // Without a prototype, so that no heading can name one of an object's own members.
     values: Object.create(null) as SiteReading['values'],
+    particulars: Object.create(null) as SiteReading['particulars'],
   };
   for (const column of columns) {
     if (column.field === 'unused') continue;
@@ -121,7 +130,8 @@ function readValue(
   decimalComma: boolean,
   reasons: Reason[],
 ): void {
-  if (text === '' || column.criterion === null) return;
+  // Lows and highs are read once it is known what the criterion's figures are.
+  if (text === '' || column.criterion === null || column.part !== 'likely') return;
   site.values[column.criterion] = readNumber(text, decimalComma) ?? text;
   refuseLong(text, MAX_TEXT_LENGTH, { field: column.criterion, called: column.criterion }, reasons);
 }

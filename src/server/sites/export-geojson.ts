@@ -5,7 +5,7 @@ import { listAllSites } from '#db/queries/upload.ts';
 
 /**
  * A study's sites as a GeoJSON FeatureCollection of points, longitude first, with the height over the ellipsoid as
- * third coordinate and entered figures by criterion name.
+ * third coordinate; entered figures, and what is known of them, by criterion name.
  * @see RFC 7946
  */
 export async function exportGeoJson(db: Db, { studyId }: { studyId: string }): Promise<Response> {
@@ -23,12 +23,8 @@ export async function exportGeoJson(db: Db, { studyId }: { studyId: string }): P
         elevationM,
         permittedAzimuthsDeg: site.permittedAzimuthsDeg,
         notes: site.notes,
-        values: Object.fromEntries(
-          entered.flatMap((criterion) => {
-            const value = site.values[criterion.id];
-            return value === undefined ? [] : [[criterion.name, value]];
-          }),
-        ),
+        values: byName(entered, site.values),
+        particulars: byName(entered, site.particulars),
       },
     })),
   };
@@ -39,4 +35,16 @@ export async function exportGeoJson(db: Db, { studyId }: { studyId: string }): P
       'cache-control': 'private, no-store',
     },
   });
+}
+
+function byName<T>(
+  criteria: readonly { id: string; name: string }[],
+  byId: Readonly<Record<string, T>>,
+): Record<string, T> {
+  return Object.fromEntries(
+    criteria.flatMap(({ id, name }) => {
+      const value = byId[id];
+      return value === undefined ? [] : [[name, value] as const];
+    }),
+  );
 }

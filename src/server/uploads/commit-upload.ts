@@ -10,6 +10,7 @@ import { fillCriteria } from './criteria.ts';
 import { Reading, type Effect } from './kept.ts';
 import { planCommit } from './plan-commit.ts';
 import { readStudyFile, type StudyFile } from './read-file.ts';
+import { refuseUnheld } from './refuse-unheld.ts';
 import { fieldsOf, newFields, updatedFields, type WrittenFields } from './site-fields.ts';
 
 interface CommitRequest {
@@ -37,20 +38,18 @@ export async function commitUpload(
       rows: [...plan.add, ...plan.update].map(({ row }) => row),
       existing: read.criteria,
     });
+    const updates = plan.update.map(({ row, before }) => ({
+      line: row.line,
+      before,
+      fields: updatedFields({ row, before }, read.file.columns, filled.columns),
+    }));
+    refuseUnheld(updates, filled.columns);
     const added = await addRows(
       tx,
       { studyId, uploadId },
       plan.add.map((add) => ({ line: add.row.line, fields: newFields(add, filled.columns) })),
     );
-    const changed = await writeChanged(
-      tx,
-      studyId,
-      plan.update.map(({ row, before }) => ({
-        line: row.line,
-        before,
-        fields: updatedFields({ row, before }, read.file.columns, filled.columns),
-      })),
-    );
+    const changed = await writeChanged(tx, studyId, updates);
     const effect: Effect = { added: added.effect, updated: changed.effect, criteria: filled.made };
     await markCommitted(tx, { studyId, uploadId, effect });
     return {

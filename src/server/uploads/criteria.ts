@@ -6,6 +6,7 @@ import { insertCriterion, type CriterionRow } from '#db/queries/criterion.ts';
 import type { RecordEntry } from '#server/change-study.ts';
 import { presentCriterion } from '#server/criteria/present.ts';
 import { AppError } from '#server/errors.ts';
+import type { Figures, FiguresPatch } from '#server/sites/entered-figures.ts';
 
 /** As for criteria added one by one. */
 const MOST_CRITERIA = 100;
@@ -16,6 +17,9 @@ export interface FilledColumn {
   name: string;
   criterionId: string;
   text: boolean;
+  /** Whether the file has a column of the figures' lows, and of their highs. */
+  low: boolean;
+  high: boolean;
 }
 
 export interface MadeCriteria {
@@ -40,10 +44,13 @@ export async function fillCriteria(
   }: { studyId: string; columns: readonly Column[]; rows: readonly Row[]; existing: readonly CriterionRow[] },
 ): Promise<MadeCriteria> {
   const result: MadeCriteria = { columns: [], made: [], entries: [] };
-  for (const { criterion: name, criterionId, unit, kind } of columns) {
-    if (name === null) continue;
+  for (const { criterion: name, criterionId, unit, kind, part } of columns) {
+    if (name === null || part !== 'likely') continue;
+    const has = (one: Column['part']): boolean =>
+      columns.some((column) => column.criterion === name && column.part === one);
     const text = kind === 'text';
-    if (criterionId !== null) result.columns.push({ name, criterionId, text });
+    const filled = { name, text, low: has('low'), high: has('high') };
+    if (criterionId !== null) result.columns.push({ ...filled, criterionId });
     else if (rows.some((row) => name in row.site.values)) {
       if (existing.length + result.made.length >= MOST_CRITERIA)
         throw new AppError('invalid', `A study has up to ${MOST_CRITERIA} criteria. Nothing was added.`);
@@ -55,7 +62,7 @@ export async function fillCriteria(
         source: text ? ('text' as const) : ('entered' as const),
       };
       const row = await insertCriterion(tx, { studyId, values });
-      result.columns.push({ name, criterionId: row.id, text });
+      result.columns.push({ ...filled, criterionId: row.id });
       result.made.push({ id: row.id, version: row.version });
       result.entries.push({
         object: 'criterion',
@@ -68,16 +75,27 @@ export async function fillCriteria(
   return result;
 }
 
-/** A row's figures by criterion id; an empty cell of a column in the file is null. */
-export function figuresOf(
+/**
+ * What a row makes of a site's figures: an empty cell of a column in the file takes its figure, low or high away;
+ * what the file has no column for, stays.
+ */
+export function figuresPatch(
   row: Row,
   columns: readonly FilledColumn[],
-): Record<string, number | string | null> {
-  return Object.fromEntries(
-    columns.map(({ name, criterionId, text }) => {
-      const value = row.site.values[name];
-      if (value === undefined) return [criterionId, null];
-      return [criterionId, text ? String(value) : value];
-    }),
-  );
+  before: Figures,
+): Required<FiguresPatch> {
+  const values: Required<FiguresPatch>['values'] = {};
+  const particulars: Required<FiguresPatch>['particulars'] = {};
+  for (const { name, criterionId, text, low, high } of columns) {
+    const value = row.site.values[name];
+    values[criterionId] = value === undefined ? null : text ? String(value) : value;
+    if (value === undefined || !(low || high)) continue;
+    const { low: lowRead, high: highRead } = row.site.particulars[name] ?? {};
+    particulars[criterionId] = {
+      ...before.particulars[criterionId],
+      ...(low ? { low: lowRead } : {}),
+      ...(high ? { high: highRead } : {}),
+    };
+  }
+  return { values, particulars };
 }

@@ -13,7 +13,7 @@ export interface StudyFile {
   criteria: CriterionRow[];
 }
 
-const KINDS = { entered: 'number', rating: 'number', text: 'text', computed: 'computed' } as const;
+const KINDS = { entered: 'number', rating: 'rating', text: 'text', computed: 'computed' } as const;
 
 /**
  * Reads a file by the same code as the browser, against the study as it is now.
@@ -27,7 +27,13 @@ export async function readStudyFile(
   const criteria = await listCriteria(db, { studyId });
   const file = readSites(bytes, {
     existing: sites,
-    criteria: criteria.map(({ id, name, unit, source }) => ({ id, name, unit, kind: KINDS[source] })),
+    criteria: criteria.map(({ id, name, unit, source, ratingSteps }) => ({
+      id,
+      name,
+      unit,
+      kind: KINDS[source],
+      steps: ratingSteps,
+    })),
     ...options,
   });
   if (file.kind === 'read') return { file, sites, criteria };

@@ -2,7 +2,8 @@ import { foldName } from '#core/csv/codes.ts';
 import type { Column } from '#core/csv/columns.ts';
 import type { Row } from '#core/csv/outcomes.ts';
 import type { SiteFields, SiteRow } from '#db/queries/site.ts';
-import { figuresOf, type FilledColumn } from './criteria.ts';
+import { patchedFigures, type Figures } from '#server/sites/entered-figures.ts';
+import { figuresPatch, type FilledColumn } from './criteria.ts';
 
 /** A site's own columns, without what links it to an upload. */
 export type WrittenFields = Required<Omit<SiteFields, 'uploadId'>>;
@@ -24,8 +25,7 @@ export function newFields(
     elevationM: elevationM ?? 0,
     permittedAzimuthsDeg: permittedAzimuthsDeg.map(([from, to]) => [from, to]),
     notes,
-    values: withoutEmpty(figuresOf(row, filled)),
-    particulars: {},
+    ...filledFigures(row, filled, { values: {}, particulars: {} }),
   };
 }
 
@@ -47,8 +47,7 @@ export function updatedFields(
       ? read.permittedAzimuthsDeg
       : before.permittedAzimuthsDeg,
     notes: has('notes') ? read.notes : before.notes,
-    values: withoutEmpty({ ...before.values, ...figuresOf(row, filled) }),
-    particulars: before.particulars,
+    ...filledFigures(row, filled, before),
   };
 }
 
@@ -57,8 +56,5 @@ export function fieldsOf({ id: _id, studyId: _study, version: _version, ...row }
   return { ...row, nameKey: foldName(row.name) };
 }
 
-function withoutEmpty(values: Record<string, number | string | null>): Record<string, number | string> {
-  return Object.fromEntries(
-    Object.entries(values).filter((entry): entry is [string, number | string] => entry[1] !== null),
-  );
-}
+const filledFigures = (row: Row, filled: readonly FilledColumn[], before: Figures): Figures =>
+  patchedFigures(before, figuresPatch(row, filled, before));

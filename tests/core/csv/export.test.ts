@@ -3,6 +3,7 @@ import Papa from 'papaparse';
 import { describe, expect, test } from 'vitest';
 import { writeCsv, writeSites, type ExportedSite } from '#core/csv/export.ts';
 import { readSites } from '#core/csv/read-sites.ts';
+import type { FigureBounds } from '#core/csv/row.ts';
 import { writeRefused } from '#core/csv/refused.ts';
 
 const CRITERIA = [
@@ -55,6 +56,16 @@ describe('writeSites', () => {
     ]);
   });
 
+  test('low and high follow their figure where any site has one, and keep clear of a criterion of such a name', () => {
+    const bounded = { ...SITE, particulars: { c1: { low: -340 } } };
+    const heading = (criteria: typeof CRITERIA) => writeSites([SITE, bounded], criteria).split('\r\n')[0];
+    expect(heading(CRITERIA)).toContain(
+      'notes,Cost to first launch (M€),Cost to first launch_low (M€),Cost to first launch_high (M€)',
+    );
+    const named = [...CRITERIA, { id: 'c4', name: 'cost to first launch_High', unit: '' }];
+    expect(heading(named)).toContain('Cost to first launch low (M€),Cost to first launch high (M€)');
+  });
+
   test('any sites come back as they were', () => {
     const word = fc.string({
       unit: fc.constantFrom('a', 'B', ' ', '=', '-', "'", '"', ',', ';', '@', 'é', '北'),
@@ -81,20 +92,34 @@ describe('writeSites', () => {
       ),
       notes: text,
       values: fc.record({ c1: figure, c2: text }),
+      less: fc.option(fc.nat(1000), { nil: undefined }),
+      more: fc.option(fc.nat(1000), { nil: undefined }),
     });
     fc.assert(
       fc.property(
         fc.uniqueArray(site, { minLength: 1, maxLength: 8, selector: ({ name }) => name.toLowerCase() }),
         (drawn) => {
-          const sites = drawn.map((one, i) => ({ ...one, code: `S${i}` }));
+          const sites = drawn.map(({ less, more, ...one }, i) => {
+            const bounds = {
+              ...(less === undefined ? {} : { low: one.values.c1 - less }),
+              ...(more === undefined ? {} : { high: one.values.c1 + more }),
+            };
+            const bounded = Object.keys(bounds).length > 0;
+            const particulars: Record<string, FigureBounds> = bounded ? { c1: bounds } : {};
+            return { ...one, code: `S${i}`, particulars };
+          });
           const file = readSites(new TextEncoder().encode(writeSites(sites, CRITERIA.slice(0, 2))), {
             existing: [],
           });
           if (file.kind === 'refused') throw new Error(file.message);
           expect(file.rows.map(({ outcome, site: back }) => ({ outcome, back }))).toEqual(
-            sites.map(({ values, ...rest }) => ({
+            sites.map(({ values, particulars, ...rest }) => ({
               outcome: 'new',
-              back: { ...rest, values: { 'Cost to first launch': values.c1, '=Owner': values.c2 } },
+              back: {
+                ...rest,
+                values: { 'Cost to first launch': values.c1, '=Owner': values.c2 },
+                particulars: particulars['c1'] ? { 'Cost to first launch': particulars['c1'] } : {},
+              },
             })),
           );
         },

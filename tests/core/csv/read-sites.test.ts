@@ -191,6 +191,7 @@ describe('the file as a whole', () => {
         criterion: 'Cost',
         criterionId: null,
         kind: 'number',
+        part: 'likely',
       },
       {
         index: 4,
@@ -200,6 +201,7 @@ describe('the file as a whole', () => {
         criterion: 'Owner',
         criterionId: null,
         kind: 'text',
+        part: 'likely',
       },
       {
         index: 5,
@@ -209,8 +211,18 @@ describe('the file as a whole', () => {
         criterion: 'Lease',
         criterionId: null,
         kind: 'text',
+        part: 'likely',
       },
-      { index: 6, heading: '', field: 'unused', unit: null, criterion: null, criterionId: null, kind: null },
+      {
+        index: 6,
+        heading: '',
+        field: 'unused',
+        unit: null,
+        criterion: null,
+        criterionId: null,
+        kind: null,
+        part: null,
+      },
       {
         index: 7,
         heading: 'Cost [k$]',
@@ -219,6 +231,7 @@ describe('the file as a whole', () => {
         criterion: 'Cost (2)',
         criterionId: null,
         kind: 'number',
+        part: 'likely',
       },
     ]);
     expect(file.rows.map((row) => row.site.values)).toEqual([
@@ -260,6 +273,112 @@ describe('the file as a whole', () => {
       'Turn (2)': 6,
       'Fence (old)': 7,
     });
+  });
+
+  describe('low and high', () => {
+    test.each([
+      ['Cost (M€)', 'Cost_low (M€)', 'Cost_high (M€)'],
+      ['Cost (M€)', 'cost LOW [m€]', 'Cost (M€)_high'],
+      ['cost_m', 'cost_m_low', 'cost_m-high'],
+      ['Sea (calm) (d)', 'Sea (calm) low', 'Sea (calm)_high (d)'],
+    ])('%s takes %s and %s', (x, low, high) => {
+      const file = read(
+        `name,lat,lon,${high},${x},${low}\nA,1,2,360,300,250\nB,10,20,,300,\nC,-10,20,310,300,\n`,
+      );
+      if (file.kind === 'refused') throw new Error(file.message);
+      const name = file.columns[4]?.criterion ?? '';
+      expect(file.columns.slice(3).map(({ criterion, part }) => [criterion, part])).toEqual([
+        [name, 'high'],
+        [name, 'likely'],
+        [name, 'low'],
+      ]);
+      expect(file.rows.map(({ site }) => site.values)).toEqual(Array(3).fill({ [name]: 300 }));
+      expect(file.rows.map(({ site }) => site.particulars)).toEqual([
+        { [name]: { high: 360, low: 250 } },
+        {},
+        { [name]: { high: 310 } },
+      ]);
+    });
+
+    test('without such a figure, in another unit, twice or as a criterion of the study it is a figure itself', () => {
+      const file = read(
+        'name,lat,lon,Tide low (m),Cost (M€),Cost_low (k€),Fog,Fog_low,fog low,Wind,Wind low\nA,1,2,1,2,3,4,3,5,6,7\n',
+        {
+          criteria: [{ id: 'w', name: 'Wind low', unit: '', kind: 'number' }],
+        },
+      );
+      if (file.kind === 'refused') throw new Error(file.message);
+      expect(file.columns.slice(3).map(({ criterion, part }) => [criterion, part])).toEqual([
+        ['Tide low', 'likely'],
+        ['Cost', 'likely'],
+        ['Cost_low', 'likely'],
+        ['Fog', 'likely'],
+        ['Fog', 'low'],
+        ['fog low', 'likely'],
+        ['Wind', 'likely'],
+        ['Wind low', 'likely'],
+      ]);
+    });
+
+    test('a row whose low and high do not hold its figure is refused, and says why', () => {
+      const rows = rowsOf(
+        'name;lat;lon;x;x_low;x_high\nA;1;2;3,5;4;3\nB;10;20;;4;\nC;-10;20;3;n/a;\nD;-20;20;tbd;;9\nE;-30;20;3;3;3\n',
+      );
+      expect(
+        rows.map(({ outcome, reasons }) => [
+          outcome,
+          ...reasons.map(({ code, field, message }) => [code, field, message]),
+        ]),
+      ).toEqual([
+        [
+          'refused',
+          ['low-high', 'x', 'x: low 4 is above the figure, 3.5.'],
+          ['low-high', 'x', 'x: high 3 is below the figure, 3.5.'],
+        ],
+        ['refused', ['low-high', 'x', 'x: low 4 has no figure to belong to.']],
+        ['refused', ['not-a-number', 'x', 'x low: “n/a” is no number.']],
+        [
+          'refused',
+          ['text-figure', 'x', 'x: “tbd” is no number and counts as no figure.'],
+          ['low-high', 'x', 'x: high 9 has no figure to belong to.'],
+        ],
+        ['new'],
+      ]);
+    });
+
+    test('a text’s low is left out with a warning', () => {
+      const rows = rowsOf('name,lat,lon,Owner,Owner low\nA,1,2,Kustverk,4\n');
+      expect(rows[0]).toMatchObject({
+        outcome: 'new',
+        site: { values: { Owner: 'Kustverk' }, particulars: {} },
+        reasons: [{ code: 'low-high', severity: 'warning' }],
+      });
+    });
+  });
+
+  test('a rating takes the numbers of its steps or their names', () => {
+    const steps = ['Very poor', 'Poor', 'Fair', 'Good', 'Very good'];
+    const criteria = [{ id: 'r', name: 'Standing', unit: '', kind: 'rating', steps }] as const;
+    const rows = rowsOf(
+      'name,lat,lon,Standing,Standing_low\nA,1,2,very  GOOD,Fair\nB,10,20,0,\nC,-10,20,5,\nD,-20,20,2.5,\nE,-30,20,Godo,\nF,-40,20,1,Good\n',
+      { criteria },
+    );
+    expect(rows.map(({ outcome, site }) => [outcome, site.values, site.particulars])).toEqual([
+      ['new', { Standing: 4 }, { Standing: { low: 2 } }],
+      ['new', { Standing: 0 }, {}],
+      ['refused', { Standing: 5 }, {}],
+      ['refused', { Standing: 2.5 }, {}],
+      ['new', { Standing: 'Godo' }, {}],
+      ['refused', { Standing: 1 }, { Standing: { low: 3 } }],
+    ]);
+    expect(rows.map(({ reasons }) => reasons[0]?.message)).toEqual([
+      undefined,
+      undefined,
+      'Standing: 5 is none of the steps 0 to 4.',
+      'Standing: 2.5 is none of the steps 0 to 4.',
+      'Standing: “Godo” is none of its steps and counts as no figure.',
+      'Standing: low 3 is above the figure, 1.',
+    ]);
   });
 
   test('the match can be changed', () => {

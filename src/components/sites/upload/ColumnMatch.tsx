@@ -4,7 +4,7 @@ import { ENCODINGS, type Encoding } from '#core/csv/encoding.ts';
 import { COLUMN_FIELDS, type ColumnField } from '#core/csv/headings.ts';
 import { DELIMITERS, type Delimiter } from '#core/csv/tokenise.ts';
 import { chooseField, type Choices } from './choices.ts';
-import { DELIMITER_NAMES, ENCODING_NAMES, FIELD_NAMES, unitOf } from './words.ts';
+import { criterionWords, DELIMITER_NAMES, ENCODING_NAMES, FIELD_NAMES, unitOf } from './words.ts';
 
 interface ColumnMatchProps {
   columns: readonly Column[];
@@ -70,7 +70,7 @@ export function ColumnMatch({ columns, found, choices, onChoose }: ColumnMatchPr
 }
 
 function ColumnRow({ column, onChoose }: { column: Column; onChoose: (field: ColumnField) => void }) {
-  const { heading, index, field, criterion, criterionId } = column;
+  const { heading, index, field, criterion } = column;
   const title = heading || `Column ${index + 1}`;
   return (
     <tr data-set-aside={field === 'unused' ? '' : undefined}>
@@ -88,9 +88,7 @@ function ColumnRow({ column, onChoose }: { column: Column; onChoose: (field: Col
             if (chosen) onChoose(chosen);
           }}
         />
-        {criterion !== null && (
-          <span className="sub">{`${criterion}, ${criterionId === null ? 'a new criterion' : 'of this study'}`}</span>
-        )}
+        {criterion !== null && <span className="sub">{criterionWords(column)}</span>}
       </td>
       <td className="upload-unit">{unitOf(column)}</td>
     </tr>

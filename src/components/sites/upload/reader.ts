@@ -18,7 +18,7 @@ interface SiteFeature {
   properties: { code: string; name: string };
 }
 
-const KINDS = { entered: 'number', rating: 'number', text: 'text', computed: 'computed' } as const;
+const KINDS = { entered: 'number', rating: 'rating', text: 'text', computed: 'computed' } as const;
 
 /** The study's sites, all in one answer, and its criteria. */
 export async function readContents(studyId: string): Promise<StudyContents> {
@@ -32,7 +32,13 @@ export async function readContents(studyId: string): Promise<StudyContents> {
       const [longitudeDeg, latitudeDeg] = geometry.coordinates;
       return { id, code, name, latitudeDeg, longitudeDeg };
     }),
-    criteria: criteria.items.map(({ id, name, unit, source }) => ({ id, name, unit, kind: KINDS[source] })),
+    criteria: criteria.items.map(({ id, name, unit, source, steps }) => ({
+      id,
+      name,
+      unit,
+      kind: KINDS[source],
+      steps,
+    })),
   };
 }
 

@@ -40,8 +40,15 @@ export const DELIMITER_NAMES = { ',': 'Comma', ';': 'Semicolon', '\t': 'Tab' } a
 export function unitOf({ field, unit, kind }: Column): string {
   if (field === 'unused') return '';
   if (field === 'elevationM') return unit === 'ft' ? 'ft → m' : 'm';
-  if (field === 'criterion') return kind === 'text' ? 'text' : unit || (kind ?? '');
+  if (field === 'criterion')
+    return kind === 'text' ? 'text' : kind === 'rating' ? 'steps 0 to 4' : unit || (kind ?? '');
   return field === 'name' || field === 'code' || field === 'notes' ? 'text' : '°';
+}
+
+/** What a column of figures fills: "Cost, of this study", "low of Cost". */
+export function criterionWords({ criterion, criterionId, part }: Column): string {
+  if (part === 'low' || part === 'high') return `${part} of ${criterion ?? ''}`;
+  return `${criterion ?? ''}, ${criterionId === null ? 'a new criterion' : 'of this study'}`;
 }
 
 /** "12 rows read: 8 accepted, 1 changed, 3 refused." */
