@@ -44,4 +44,23 @@ export const studyReferences = {
     'Clemen, Making Hard Decisions (1996), chapter 5: one uncertain figure at a time, drawn as a tornado',
 } as const;
 
+/** Sources of the flown ascent and of impact points. */
+export const ascentReferences = {
+  standardAtmosphere:
+    'U.S. Standard Atmosphere 1976 (NOAA-S/T 76-1562): layers to 86 km, Table I to 1,000 km',
+  pointMass:
+    'Curtis, Orbital Mechanics for Engineering Students, chapter 13: rocket dynamics over a round Earth, gravity turn',
+  oblateGravity:
+    'Vallado, Fundamentals of Astrodynamics and Applications, 4th ed., chapter 8: acceleration from J₂',
+  rungeKutta:
+    'Hairer, Nørsett and Wanner, Solving Ordinary Differential Equations I, chapter II.1: order four',
+  linearTangent: 'Bryson and Ho, Applied Optimal Control (1975), section 2.4: linear-tangent steering',
+  reducedHessian:
+    'Nocedal and Wright, Numerical Optimization, 2nd ed., chapters 6 and 18: BFGS, reduced-Hessian methods',
+  ascentBenchmark:
+    'Betts, Practical Methods for Optimal Control (2010), example 6.15: four-phase ascent to a transfer ellipse',
+  impactPoint:
+    '14 CFR Part 420, Appendix B, equations B46 to B69: impact point on the ellipsoid along a Keplerian arc',
+} as const;
+
 export type ReferenceKey = keyof typeof references;
