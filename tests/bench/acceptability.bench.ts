@@ -2,21 +2,13 @@ import { acceptability } from '#core/decision/acceptability.ts';
 import type { Criterion } from '#core/decision/criterion.ts';
 import { figureTable } from '#core/decision/figures.ts';
 import { prepare } from '#core/decision/prepare.ts';
+import { uniforms } from './invented-study.ts';
 import { plainAcceptability, type PlainSite } from './plain-acceptability.ts';
 
 const SITES = 40;
 const CRITERIA = 12;
 const SAMPLES = 10_000;
 const ROUNDS = 5;
-
-/** Numerical Recipes' 32-bit linear congruential step: figures that are the same each time, no more. */
-function uniforms(seed: number): () => number {
-  let state = seed;
-  return () => {
-    state = (state * 1_664_525 + 1_013_904_223) >>> 0;
-    return state / 2 ** 32;
-  };
-}
 
 function invented(spread: number): PlainSite[] {
   const next = uniforms(42);

@@ -19,7 +19,11 @@ function triangular({ low, likely, high }: PlainSite['figures'][number], u: numb
 export function plainAcceptability(sites: readonly PlainSite[], samples: number, next: () => number) {
   const criteria = sites[0]?.figures.length ?? 0;
   const uncertain = sites.some(({ figures }) => figures.some(({ low, high }) => low !== high));
-  const tally = sites.map(() => ({ ranks: sites.map(() => 0), weights: Array<number>(criteria).fill(0) }));
+  const tally = sites.map(() => ({
+    ranks: sites.map(() => 0),
+    wins: sites.map(() => 0),
+    weights: Array<number>(criteria).fill(0),
+  }));
   const draw = () => sites.map(({ figures }) => figures.map((figure) => triangular(figure, next()) / 100));
   const valueOf = (weights: number[], values: number[]) =>
     weights.reduce((sum, w, j) => sum + w * (values[j] ?? 0), 0);
@@ -32,6 +36,8 @@ export function plainAcceptability(sites: readonly PlainSite[], samples: number,
     order.forEach(({ site }, rank) => {
       const ranks = tally[site]?.ranks ?? [];
       ranks[rank] = (ranks[rank] ?? 0) + 1;
+      const wins = tally[site]?.wins ?? [];
+      for (const below of order.slice(rank + 1)) wins[below.site] = (wins[below.site] ?? 0) + 1;
     });
     const leader = tally[order[0]?.site ?? 0];
     if (leader) leader.weights = leader.weights.map((sum, j) => sum + (weights[j] ?? 0));
