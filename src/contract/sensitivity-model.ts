@@ -5,7 +5,7 @@ import {
   type Acceptability,
   type AcceptabilityQuestion,
 } from '#core/decision/acceptability.ts';
-import { dominators } from '#core/decision/dominance.ts';
+import { firstDominators } from '#core/decision/dominance.ts';
 import { leaderChanges, type Change } from '#core/decision/leader-change.ts';
 import { endOfTie } from '#core/decision/ties.ts';
 import { closeness } from '#core/decision/topsis.ts';
@@ -78,10 +78,11 @@ export function secondOpinionOf(subject: Subject): SecondOpinion {
   return answer;
 }
 
-/** Sites that another is at least as good as on every criterion and better on one, each with the best ranked such. */
+/** Sites that another is at least as good as on every criterion and better on one, each with the best ranked such that none dominates. */
 export function dominanceOf(subject: Subject): Dominance {
-  const dominated = dominators(subject.table).flatMap(([by], site) =>
-    by === undefined ? [] : [{ siteId: siteIdAt(subject, site), by: siteIdAt(subject, by) }],
+  const best = subject.sites.map((_, site) => site);
+  const dominated = firstDominators(subject.table, best).flatMap((by, site) =>
+    by === null ? [] : [{ siteId: siteIdAt(subject, site), by: siteIdAt(subject, by) }],
   );
   return { nonDominated: subject.sites.length - dominated.length, dominated };
 }

@@ -31,7 +31,14 @@ export interface RankingView {
 export const GRID = 'grid';
 
 /** Every other view, in the order of the tabs; each one's code is fetched when it is first opened. */
-export const VIEWS: readonly RankingView[] = [];
+export const VIEWS: readonly RankingView[] = [
+  {
+    value: 'compare',
+    name: 'Compare',
+    needsRanks: true,
+    load: () => import('./compare/CompareView.tsx'),
+  },
+];
 
 /** The view an address asks for; the ranking itself where it asks for none that exists. */
 export const viewOf = (param: string | null): RankingView | undefined =>
