@@ -1,5 +1,9 @@
 /* Invented facts of any size for the memo's tests: figures are arbitrary, sums are true sums. */
-import { pointsStatement } from '#contract/weights.ts';
+import { agreementOf } from '#contract/agreement-model.ts';
+import { DrawQuery } from '#contract/sensitivity.ts';
+import { sensitivityOf } from '#contract/sensitivity-model.ts';
+import { weighing } from '#contract/weighing.ts';
+import { pointsStatement, type MemberWeights, type Weights } from '#contract/weights.ts';
 import type { Criterion } from '#contract/criterion.ts';
 import type { FlownOrbit, OrbitResult, OutOfReachOrbit, SiteResult } from '#contract/evaluate.ts';
 import { prepareFigures, rankFigures } from '#contract/ranking-model.ts';
@@ -27,6 +31,10 @@ export interface Invented {
   /** Sites that lack a figure, and sites whose figure fails a limit. */
   incomplete?: number;
   setAside?: number;
+  /** Sets that members share. */
+  members?: MemberWeights[];
+  /** Sites whose first figure has a low, a high and a source. */
+  uncertain?: number;
 }
 
 const uuid = (kind: number, index: number): string =>
@@ -205,8 +213,25 @@ function figuresOf(wanted: Invented, inputs: StudyInputs, r: Random): RankingFig
       }),
     ),
     notes: wanted.sites > 3 && count > 1 ? [[3, 1, 'O2 out of reach']] : [],
-    particulars: [],
+    particulars: Array.from({ length: wanted.uncertain ?? 0 }, (_, site) => [
+      site,
+      0,
+      { low: -1e4, high: 1e4, source: 'Desk study', date: '2026-10-01', confidence: 'medium' as const },
+    ]),
     evidence: [],
+  };
+}
+
+function weightsOf({ criteria }: RankingFigures, points: Record<string, number>): Weights {
+  const statement = pointsStatement(points);
+  return {
+    weights: 'study',
+    ...statement,
+    ...weighing(criteria, statement),
+    shared: false,
+    origin: { kind: 'apart' },
+    reason: '',
+    version: 1,
   };
 }
 
@@ -237,6 +262,8 @@ export function inventedFacts(wanted: Invented): MemoFacts {
   const points = Object.fromEntries(
     figures.criteria.map(({ id }, at) => [id, wanted.weighed === false ? 0 : 30 - 2 * at]),
   );
+  const ready = prepareFigures(figures);
+  const model = rankFigures(ready, pointsStatement(points));
   return {
     paper: wanted.paper ?? 'a4',
     date: '2026-12-01',
@@ -252,7 +279,12 @@ export function inventedFacts(wanted: Invented): MemoFacts {
     inputs,
     results,
     decimals: figures.criteria.map((_, place) => decimalsOf(figures, place)),
-    ranking: presentRanking(rankFigures(prepareFigures(figures), pointsStatement(points)), 'study'),
+    ranking: presentRanking(model, 'study'),
+    figures,
+    groups: [],
+    weights: weightsOf(figures, points),
+    sensitivity: sensitivityOf(model, 'study', DrawQuery.parse({ samples: 500 })),
+    members: agreementOf(ready, wanted.members ?? []),
     checksum: 'ab'.repeat(32),
   };
 }

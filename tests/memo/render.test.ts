@@ -125,7 +125,7 @@ describe('the pages', () => {
     ],
     ['no vehicle', { sites: 3, orbits: 2, vehicle: false }, 'No vehicle is chosen yet'],
     ['no orbits', { sites: 3, orbits: 0 }, 'The manifest has no target orbits yet'],
-    ['one site', { sites: 1, orbits: 1 }, 'the only candidate ranked'],
+    ['one site', { sites: 1, orbits: 1 }, 'is the only site ranked'],
     [
       'all incomplete',
       { sites: 3, orbits: 1, incomplete: 3 },

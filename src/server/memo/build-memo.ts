@@ -8,8 +8,12 @@ import { findMemoHead } from '#db/queries/memo.ts';
 import { env, publicOrigin } from '#server/env.ts';
 import { notFound } from '#server/errors.ts';
 import { evaluateStudy } from '#server/evaluate/evaluate-study.ts';
+import { agreementOf } from '#contract/agreement-model.ts';
+import { DrawQuery, type Sensitivity } from '#contract/sensitivity.ts';
 import { rankingFigures } from '#server/ranking/figures.ts';
+import { runSensitivity, type RunSensitivity } from '#server/ranking/read-sensitivity.ts';
 import { readSnapshot } from '#server/ranking/read-snapshot.ts';
+import { readMemberWeights } from '#server/weights/member-weights.ts';
 import { composeMemo } from './compose.ts';
 import type { MemoFacts } from './facts.ts';
 import { canonicalInputs } from './inputs.ts';
@@ -25,12 +29,20 @@ interface Asked {
 export async function loadMemoFacts(
   db: PooledDb,
   { paper, now, ...asked }: Asked & { paper: MemoPaper; now: Date },
+  run: RunSensitivity = runSensitivity,
 ): Promise<MemoFacts> {
-  const [study, snapshot] = await Promise.all([findMemoHead(db, asked), readSnapshot(db, asked)]);
+  const [study, snapshot, { items: members }] = await Promise.all([
+    findMemoHead(db, asked),
+    readSnapshot(db, asked),
+    readMemberWeights(db, asked),
+  ]);
   if (!study) throw notFound();
   const { inputs } = snapshot;
   const figures = rankingFigures(snapshot);
-  const ranking = presentRanking(rankFigures(prepareFigures(figures), snapshot.study), 'study');
+  const ready = prepareFigures(figures);
+  const ranking = presentRanking(rankFigures(ready, snapshot.study), 'study');
+  const query = DrawQuery.parse({});
+  const drawn = await run({ figures, statement: snapshot.study, weights: 'study', query });
   const sites = listedSites({ ranking, inputs }).map(({ site }) => site);
   const flights = evaluateStudy({ ...inputs, sites });
   return {
@@ -42,6 +54,11 @@ export async function loadMemoFacts(
     results: new Map(sites.flatMap(({ siteId }, at) => (flights[at] ? [[siteId, flights[at]]] : []))),
     decimals: figures.criteria.map((_, place) => decimalsOf(figures, place)),
     ranking,
+    figures,
+    groups: snapshot.groups,
+    weights: snapshot.study,
+    sensitivity: JSON.parse(new TextDecoder().decode(drawn)) as Sensitivity,
+    members: agreementOf(ready, members),
     checksum: canonicalInputs(snapshot).checksum,
   };
 }
@@ -50,6 +67,7 @@ export async function loadMemoFacts(
 export async function buildMemo(
   db: PooledDb,
   asked: Asked & { paper: MemoPaper; now: Date },
+  run: RunSensitivity = runSensitivity,
 ): Promise<MemoModel> {
-  return composeMemo(await loadMemoFacts(db, asked));
+  return composeMemo(await loadMemoFacts(db, asked, run));
 }

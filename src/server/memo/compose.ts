@@ -1,15 +1,20 @@
 import type { MemoBlock, MemoModel, MemoSection } from '#contract/memo.ts';
 import { listInWords } from '#contract/format.ts';
+import { acceptabilityBlocks } from './acceptability.ts';
+import { agreementBlocks } from './agreement.ts';
 import { candidateBlocks } from './candidates.ts';
 import { attributionBlocks, cautionBlocks, ESTIMATES, recomputeBlocks } from './closing-sections.ts';
 import { criteriaBlocks } from './criteria.ts';
 import type { MemoFacts } from './facts.ts';
 import { flightBlocks } from './flight.ts';
+import { holdBlocks } from './holds.ts';
 import { methodBlocks } from './method.ts';
 import { opening } from './opening.ts';
 import { printedSites } from './printed-sites.ts';
 import { rankingBlocks, rankingDetail } from './ranking-blocks.ts';
+import { recommendation } from './recommendation.ts';
 import { requirementBlocks } from './requirement.ts';
+import { weightBlocks } from './weights.ts';
 
 /** Numbers tables and figures through the memo, in the order they are read. */
 function numbered(sections: readonly MemoSection[]): MemoSection[] {
@@ -26,16 +31,33 @@ function sectionsOf(facts: MemoFacts): MemoSection[] {
   const printed = printedSites(facts);
   const detail = rankingDetail(facts);
   return numbered([
-    { id: 'recommendation', heading: null, blocks: [...rankingBlocks(facts), ESTIMATES] },
+    {
+      id: 'recommendation',
+      heading: null,
+      blocks: [...rankingBlocks(facts), ...changeBlocks(facts), ESTIMATES],
+    },
     { id: 'candidates', heading: 'Candidate sites', blocks: candidateBlocks(facts, printed) },
     { id: 'requirement', heading: 'Requirement and assumptions', blocks: requirementBlocks(facts) },
     { id: 'criteria', heading: 'Criteria and ranking', blocks: [...criteriaBlocks(facts), ...detail] },
+    { id: 'weights', heading: 'Weights and how they were set', blocks: weightBlocks(facts) },
+    { id: 'agreement', heading: 'Agreement among members', blocks: agreementBlocks(facts) },
+    { id: 'sensitivity', heading: 'Does the ranking hold?', blocks: holdBlocks(facts) },
+    { id: 'acceptability', heading: 'Rank acceptability', blocks: acceptabilityBlocks(facts) },
     { id: 'flight', heading: 'Flight: Δv and payload', blocks: [ESTIMATES, ...flightBlocks(facts, printed)] },
     { id: 'method', heading: 'Method and constants', blocks: methodBlocks() },
     { id: 'cautions', heading: 'Cautions', blocks: cautionBlocks() },
     { id: 'recompute', heading: 'How to recompute it', blocks: recomputeBlocks(facts) },
     { id: 'attributions', heading: 'Data and type', blocks: attributionBlocks() },
   ]);
+}
+
+/** What the recommendation rests on and what would change it, in plain words. */
+function changeBlocks(facts: MemoFacts): MemoBlock[] {
+  if (facts.ranking.state !== 'ranked') return [];
+  const { holds } = recommendation(facts);
+  return holds.length === 0
+    ? []
+    : [{ kind: 'paragraph', text: [{ strong: 'What would change it. ' }, holds.join(' ')] }];
 }
 
 /**

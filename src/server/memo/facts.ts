@@ -1,7 +1,12 @@
 import type { SiteResult } from '#contract/evaluate.ts';
 import type { MemoPaper } from '#contract/memo.ts';
 import type { Ranking } from '#contract/ranking.ts';
+import type { MembersAgreement } from '#contract/agreement-model.ts';
+import type { CriterionGroup } from '#contract/criterion.ts';
+import type { RankingFigures } from '#contract/ranking.ts';
+import type { Sensitivity } from '#contract/sensitivity.ts';
 import type { StudyInputs } from '#contract/study-inputs.ts';
+import type { Weights } from '#contract/weights.ts';
 
 /** What a memo is written from: the same inputs, results and ranking that the screens show, of one revision. */
 export interface MemoFacts {
@@ -26,6 +31,15 @@ export interface MemoFacts {
   /** Decimals of every criterion's figures, by its place. */
   decimals: readonly number[];
   ranking: Ranking;
+  /** Every site under every weighed criterion, with what is known of entered figures. */
+  figures: RankingFigures;
+  groups: CriterionGroup[];
+  /** The study's set. */
+  weights: Weights;
+  /** Of the study's set, drawn as the screens draw it by default. */
+  sensitivity: Sensitivity;
+  /** Of the sets that members share. */
+  members: MembersAgreement;
   /** SHA-256 of the canonical inputs, hexadecimal. */
   checksum: string;
 }

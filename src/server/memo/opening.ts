@@ -3,6 +3,7 @@ import type { MemoHeadline, MemoModel, MemoText } from '#contract/memo.ts';
 import type { RankedSite, Ranking } from '#contract/ranking.ts';
 import { letterOf, valueDecimals } from '#contract/ranking-words.ts';
 import type { MemoFacts } from './facts.ts';
+import { recommendation } from './recommendation.ts';
 
 type Opening = Pick<MemoModel, 'finding' | 'question' | 'reasons' | 'headline'>;
 
@@ -73,26 +74,18 @@ function partings(ranking: Ranking, leader: RankedSite, second: RankedSite, valu
   };
 }
 
-function leaderReason(ranking: Ranking): MemoText | null {
+function leaderReason(facts: MemoFacts): MemoText | null {
+  const { ranking } = facts;
   const [leader, second] = ranking.ranked;
   if (!leader) return null;
   const value = (v: number): string => formatNumber(v, valueDecimals(ranking));
-  if (!second)
-    return [
-      { strong: `${leader.name} has an overall value of ${value(leader.value)}` },
-      ' and is the only candidate ranked.',
-    ];
+  const { what } = recommendation(facts);
+  if (!second) return [{ strong: what }];
   const { ahead, behind } = partings(ranking, leader, second, value);
-  const tie = second.rank === 1;
   return [
-    {
-      strong: tie
-        ? `${leader.name} and ${second.name} tie at ${value(leader.value)}`
-        : `${leader.name} leads, ${value(leader.value)} to ${value(second.value)}`,
-    },
-    tie ? '. ' : ` for ${second.name}. `,
-    ahead.length > 0 ? `It is ahead on ${listInWords(ahead)}. ` : '',
-    behind.length > 0 ? `${second.name} is ahead on ${listInWords(behind)}.` : '',
+    { strong: what },
+    ahead.length > 0 ? ` ${leader.name} is ahead of ${second.name} on ${listInWords(ahead)}.` : '',
+    behind.length > 0 ? ` ${second.name} is ahead on ${listInWords(behind)}.` : '',
   ];
 }
 
@@ -177,7 +170,7 @@ export function opening(facts: MemoFacts): Opening {
   const { ranking } = facts;
   const reasons =
     ranking.state === 'ranked'
-      ? [leaderReason(ranking) ?? [whyNone(ranking)], manifestReason(facts)].filter((text) => text !== null)
+      ? [leaderReason(facts) ?? [whyNone(ranking)], manifestReason(facts)].filter((text) => text !== null)
       : [[UNRANKED[ranking.state].why]];
   return { finding: findingOf(ranking), question: questionOf(facts), reasons, headline: headlineOf(facts) };
 }

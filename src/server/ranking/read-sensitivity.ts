@@ -1,4 +1,5 @@
 import type { SensitivityQuery } from '#contract/sensitivity.ts';
+import type { SensitivityTask } from '#worker/sensitivity-thread.ts';
 import type { PooledDb } from '#db/client.ts';
 import { runInThread } from '#server/threads.ts';
 import { rankingFigures } from './figures.ts';
@@ -11,9 +12,9 @@ interface Asked {
 }
 
 /** Works out a sensitivity off the main thread and answers with its JSON text in bytes. */
-export type RunSensitivity = (task: unknown) => Promise<Uint8Array<ArrayBuffer>>;
+export type RunSensitivity = (task: SensitivityTask) => Promise<Uint8Array<ArrayBuffer>>;
 
-const runSensitivity: RunSensitivity = (task) => runInThread('sensitivity-thread', task);
+export const runSensitivity: RunSensitivity = (task) => runInThread('sensitivity-thread', task);
 
 /** Whether a study's ranking holds, as JSON. @throws AppError 'not-found' */
 export async function respondWithSensitivity(
