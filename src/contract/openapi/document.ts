@@ -1,5 +1,6 @@
 import { createDocument, type ZodOpenApiPathsObject } from 'zod-openapi';
 import { EvaluateInput, EvaluateOutput } from '../evaluate.ts';
+import { ascentOperations } from './ascents.ts';
 import { describeOperation, type Operations, type Verb } from './operation.ts';
 import { peopleOperations } from './people.ts';
 import { siteOperations } from './sites.ts';
@@ -17,6 +18,7 @@ export const operations: Operations = {
       answer: EvaluateOutput,
     },
   },
+  ...ascentOperations,
   ...weighingOperations,
   ...studyOperations,
   ...whatIfOperations,
