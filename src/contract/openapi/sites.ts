@@ -1,3 +1,4 @@
+import { EvidenceInput, EvidenceList, EvidenceQuery, EvidenceRemoved, SavedEvidence } from '../evidence.ts';
 import {
   ChangedSite,
   SavedSite,
@@ -28,6 +29,12 @@ const STUDY = '/api/v1/studies/{studyId}';
 const PostedFile = UploadOptions.extend({
   file: z.string().meta({ format: 'binary', description: 'CSV, up to 5 MB and 10,000 rows' }),
 }).meta({ id: 'PostedFile' });
+
+const PostedEvidence = EvidenceInput.extend({
+  file: z
+    .string()
+    .meta({ format: 'binary', description: 'PDF, PNG, JPEG, WebP or CSV by its bytes, up to 10 MB' }),
+}).meta({ id: 'PostedEvidence' });
 
 export const siteOperations: Operations = {
   [`${STUDY}/sites`]: {
@@ -80,6 +87,28 @@ export const siteOperations: Operations = {
   [`${STUDY}/uploads/{uploadId}/file`]: {
     get: {
       summary: 'The original bytes',
+      answer: { type: 'application/octet-stream', description: 'The file as it came' },
+    },
+  },
+  [`${STUDY}/evidence`]: {
+    get: {
+      summary: 'Evidence files of entered figures, newest first',
+      query: EvidenceQuery,
+      answer: EvidenceList,
+    },
+    post: {
+      summary: 'Keep a file that supports an entered figure',
+      form: PostedEvidence,
+      answer: SavedEvidence,
+      status: 201,
+    },
+  },
+  [`${STUDY}/evidence/{evidenceId}`]: {
+    delete: { summary: 'Take an evidence file away', answer: EvidenceRemoved },
+  },
+  [`${STUDY}/evidence/{evidenceId}/file`]: {
+    get: {
+      summary: 'The original bytes, as an attachment',
       answer: { type: 'application/octet-stream', description: 'The file as it came' },
     },
   },

@@ -15,7 +15,7 @@ import type { RankingSnapshot } from './read-snapshot.ts';
 const REFERENCE_ALTITUDE_KM = 185;
 
 /** Figures of every site under every weighed criterion, computed and entered. */
-export function rankingFigures({ inputs, criteria, entered }: RankingSnapshot): RankingFigures {
+export function rankingFigures({ inputs, criteria, entered, evidence }: RankingSnapshot): RankingFigures {
   const weighed = criteria.filter(({ source }) => source !== 'text');
   const flights = weighed.some(({ source }) => source === 'computed') ? flightsOf(inputs) : [];
   const notes: RankingFigures['notes'] = [];
@@ -45,7 +45,30 @@ export function rankingFigures({ inputs, criteria, entered }: RankingSnapshot): 
       return known === undefined ? [] : [[site, place, known]];
     }),
   );
-  return { revision: inputs.revision, criteria: weighed, sites, cells, notes, particulars, evidence: [] };
+  return {
+    revision: inputs.revision,
+    criteria: weighed,
+    sites,
+    cells,
+    notes,
+    particulars,
+    evidence: evidencePlaces(evidence, sites, weighed),
+  };
+}
+
+/** Counts of files by the places of their figures; a site or criterion that is not weighed has none. */
+function evidencePlaces(
+  counts: RankingSnapshot['evidence'],
+  sites: readonly { siteId: string }[],
+  criteria: readonly Criterion[],
+): RankingFigures['evidence'] {
+  const siteAt = new Map(sites.map(({ siteId }, place) => [siteId, place]));
+  const criterionAt = new Map(criteria.map(({ id }, place) => [id, place]));
+  return counts.flatMap(({ siteId, criterionId, files }): RankingFigures['evidence'] => {
+    const site = siteAt.get(siteId);
+    const criterion = criterionAt.get(criterionId);
+    return site === undefined || criterion === undefined ? [] : [[site, criterion, files]];
+  });
 }
 
 /** Text under a criterion that is weighed is kept as it was given and is no figure. */

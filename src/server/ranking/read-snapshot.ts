@@ -4,6 +4,7 @@ import type { StudyInputs } from '#contract/study-inputs.ts';
 import type { Weights } from '#contract/weights.ts';
 import type { PooledDb } from '#db/client.ts';
 import { listEnteredValues } from '#db/queries/criterion.ts';
+import { countEvidence } from '#db/queries/evidence.ts';
 import { inOneMoment, selectStudyInputs } from '#db/queries/study-inputs.ts';
 import { readGroups } from '#server/criteria/groups/read-groups.ts';
 import { readCriteria } from '#server/criteria/read-criteria.ts';
@@ -16,6 +17,12 @@ export interface Entered {
   particulars: Readonly<Record<string, FigureParticulars>>;
 }
 
+export interface EvidenceCount {
+  siteId: string;
+  criterionId: string;
+  files: number;
+}
+
 /** Everything a ranking follows from, of one moment. */
 export interface RankingSnapshot {
   inputs: StudyInputs;
@@ -24,6 +31,8 @@ export interface RankingSnapshot {
   groups: CriterionGroup[];
   /** Entered figures and what is known of them, by site id, then by criterion id. */
   entered: ReadonlyMap<string, Entered>;
+  /** How many evidence files each figure has. */
+  evidence: readonly EvidenceCount[];
   study: Weights;
   mine: Weights;
 }
@@ -40,6 +49,7 @@ export async function readSnapshot(
     entered: new Map(
       (await listEnteredValues(tx, { studyId })).map(({ siteId, ...entered }) => [siteId, entered]),
     ),
+    evidence: await countEvidence(tx, { studyId }),
     study: await readWeights(tx, { studyId, userId, weights: 'study' }),
     mine: await readWeights(tx, { studyId, userId, weights: 'mine' }),
   }));

@@ -2,6 +2,7 @@ import type { UploadList, UploadSummary } from '#contract/upload.ts';
 import type { Db } from '#db/client.ts';
 import { findUpload, findUploadSummary, listUploads } from '#db/queries/upload.ts';
 import { notFound } from '#server/errors.ts';
+import { attachmentHeaders } from '#server/posted-file.ts';
 
 type SummaryRow = NonNullable<Awaited<ReturnType<typeof findUploadSummary>>>;
 
@@ -41,10 +42,6 @@ export async function readUploadedFile(db: Db, scope: OneUpload): Promise<Respon
   const row = await findUpload(db, scope);
   if (!row) throw notFound('There is no such upload in this study.');
   return new Response(new Uint8Array(row.bytes), {
-    headers: {
-      'content-type': 'text/csv',
-      'content-disposition': `attachment; filename*=UTF-8''${encodeURIComponent(row.fileName).replace(/['()*]/g, (c) => `%${c.charCodeAt(0).toString(16)}`)}`,
-      'cache-control': 'private, no-store',
-    },
+    headers: { 'content-type': 'text/csv', ...attachmentHeaders(row.fileName) },
   });
 }
