@@ -20,7 +20,7 @@ export const references = {
     'Goodwin and Wright, Decision Analysis for Management Judgment, chapter 3: points made into weights that sum to 1',
 } as const;
 
-/** Sources of the further weighing methods, which the interface computes and the memo does not use. */
+/** Sources of the weighing methods beyond the additive value. */
 export const weighingReferences = {
   saaty: 'Saaty, The Analytic Hierarchy Process (1980): pairwise comparison, random indices',
   hwangYoon: 'Hwang and Yoon, Multiple Attribute Decision Making (1981): closeness to the ideal (TOPSIS)',

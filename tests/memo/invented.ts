@@ -284,6 +284,7 @@ export function inventedFacts(wanted: Invented): MemoFacts {
     groups: [],
     weights: weightsOf(figures, points),
     sensitivity: sensitivityOf(model, 'study', DrawQuery.parse({ samples: 500 })),
+    evidence: { files: [], total: 0 },
     members: agreementOf(ready, wanted.members ?? []),
     checksum: 'ab'.repeat(32),
   };

@@ -1,9 +1,11 @@
 import { formatDateUtc } from '#contract/format.ts';
+import { MAX_PAGE_SIZE } from '#contract/list.ts';
 import type { MemoModel, MemoPaper } from '#contract/memo.ts';
 import { prepareFigures, rankFigures } from '#contract/ranking-model.ts';
 import { decimalsOf } from '#contract/ranking-words.ts';
 import { presentRanking } from '#contract/ranking-rows.ts';
 import type { PooledDb } from '#db/client.ts';
+import { listEvidence } from '#db/queries/evidence.ts';
 import { findMemoHead } from '#db/queries/memo.ts';
 import { env, publicOrigin } from '#server/env.ts';
 import { notFound } from '#server/errors.ts';
@@ -31,10 +33,11 @@ export async function loadMemoFacts(
   { paper, now, ...asked }: Asked & { paper: MemoPaper; now: Date },
   run: RunSensitivity = runSensitivity,
 ): Promise<MemoFacts> {
-  const [study, snapshot, { items: members }] = await Promise.all([
+  const [study, snapshot, { items: members }, evidence] = await Promise.all([
     findMemoHead(db, asked),
     readSnapshot(db, asked),
     readMemberWeights(db, asked),
+    listEvidence(db, { ...asked, query: '', page: 1, pageSize: MAX_PAGE_SIZE }),
   ]);
   if (!study) throw notFound();
   const { inputs } = snapshot;
@@ -58,6 +61,7 @@ export async function loadMemoFacts(
     groups: snapshot.groups,
     weights: snapshot.study,
     sensitivity: JSON.parse(new TextDecoder().decode(drawn)) as Sensitivity,
+    evidence: { files: evidence.items, total: evidence.total },
     members: agreementOf(ready, members),
     checksum: canonicalInputs(snapshot).checksum,
   };

@@ -1,4 +1,5 @@
 import { formatNumber } from '#contract/format.ts';
+import type { Criterion } from '#contract/criterion.ts';
 import type { MemoCell, MemoColumn, MemoRow, MemoTable } from '#contract/memo.ts';
 import type { PrintedSite } from './printed-sites.ts';
 
@@ -23,6 +24,10 @@ export const figures = (heading: string, unit: string, share: number, first = fa
 /** A figure of a table: zero is "0" whatever the column's decimals, so that it differs from what rounds to it. */
 export const figure = (value: number, decimals: number): string =>
   value === 0 ? '0' : formatNumber(value, decimals);
+
+/** A criterion's unit as a heading shows it; a rating's figures are steps. */
+export const unitOf = ({ source, unit }: Pick<Criterion, 'source' | 'unit'>): string =>
+  source === 'rating' ? 'step 0–4' : unit;
 
 export const cell = (text: string, strong = false): MemoCell => ({ text, strong });
 

@@ -5,6 +5,7 @@ import { agreementBlocks } from './agreement.ts';
 import { candidateBlocks } from './candidates.ts';
 import { attributionBlocks, cautionBlocks, ESTIMATES, recomputeBlocks } from './closing-sections.ts';
 import { criteriaBlocks } from './criteria.ts';
+import { enteredBlocks } from './entered.ts';
 import type { MemoFacts } from './facts.ts';
 import { flightBlocks } from './flight.ts';
 import { holdBlocks } from './holds.ts';
@@ -44,6 +45,7 @@ function sectionsOf(facts: MemoFacts): MemoSection[] {
     { id: 'sensitivity', heading: 'Does the ranking hold?', blocks: holdBlocks(facts) },
     { id: 'acceptability', heading: 'Rank acceptability', blocks: acceptabilityBlocks(facts) },
     { id: 'flight', heading: 'Flight: Δv and payload', blocks: [ESTIMATES, ...flightBlocks(facts, printed)] },
+    { id: 'entered', heading: 'Entered figures, sources and evidence', blocks: enteredBlocks(facts) },
     { id: 'method', heading: 'Method and constants', blocks: methodBlocks() },
     { id: 'cautions', heading: 'Cautions', blocks: cautionBlocks() },
     { id: 'recompute', heading: 'How to recompute it', blocks: recomputeBlocks(facts) },

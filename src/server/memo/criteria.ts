@@ -1,10 +1,10 @@
 import { decimalsNeeded } from '#core/printed/figure.ts';
-import { formatNumber } from '#contract/format.ts';
+import { formatNumber, listInWords } from '#contract/format.ts';
 import type { MemoBlock, MemoTable } from '#contract/memo.ts';
 import { QUANTITIES } from '#contract/quantity.ts';
 import type { WeighedCriterion } from '#contract/ranking.ts';
 import { letterOf } from '#contract/ranking-words.ts';
-import { cell, figure, figures, row, table, words } from './cells.ts';
+import { cell, figure, figures, row, table, unitOf, words } from './cells.ts';
 import type { MemoFacts } from './facts.ts';
 
 /** Figures of levels and limits need no fewer decimals than the column they bound. */
@@ -20,11 +20,38 @@ function levels({ span, levels: { mode } }: WeighedCriterion, decimals: number):
 }
 
 function sourceOf(facts: MemoFacts, { source, quantity, orbitId }: WeighedCriterion): string {
+  if (source === 'rating') return 'rating, five steps';
   if (source !== 'computed' || quantity === null) return 'entered';
   const orbit = facts.inputs.orbits.find((one) => one.orbitId === orbitId);
   const over = orbit ? `for ${orbit.name || orbit.code}` : QUANTITIES[quantity].overManifest;
   return over === '' ? 'computed' : `computed: ${over}`;
 }
+
+/** How values run between the levels, where not straight. */
+function shapeNotes({ ranking: { criteria }, decimals }: MemoFacts): string[] {
+  const bent = criteria.flatMap(({ shape, span }, place) => {
+    const letter = letterOf(place);
+    if (shape.kind === 'exponential')
+      return [`${letter} as (1 − e^(−c s))/(1 − e^(−c)), c ${formatNumber(shape.curvature, 2)}`];
+    if (shape.kind === 'straight' || span.kind !== 'span') return [];
+    const points = shape.knots.map(
+      ([s, v]) =>
+        `${figure(span.worst + s * (span.best - span.worst), Math.max(decimals[place] ?? 0, 1))} → ${formatNumber(v, 3)}`,
+    );
+    return [`${letter} straight between ${listInWords(points)}`];
+  });
+  return bent.length === 0
+    ? ['Every value function is straight.']
+    : [`Straight between the levels, but for ${bent.join('; ')}. s is the way from worst to best, 0 to 1.`];
+}
+
+/** What the steps of ratings are called. */
+const stepNotes = ({ ranking: { criteria } }: MemoFacts): string[] =>
+  criteria.flatMap(({ steps, name }, place) =>
+    steps === null
+      ? []
+      : [`${letterOf(place)} ${name}: ${steps.map((step, at) => `${at} ${step}`).join(', ')}.`],
+  );
 
 function criteriaTable(facts: MemoFacts): MemoTable {
   return table(
@@ -48,7 +75,7 @@ function criteriaTable(facts: MemoFacts): MemoTable {
       return row([
         cell(letterOf(place), true),
         cell(criterion.name),
-        cell(criterion.unit === '' ? '–' : criterion.unit),
+        cell(unitOf(criterion) || '–'),
         cell(criterion.direction),
         cell(sourceOf(facts, criterion)),
         cell(worst),
@@ -61,7 +88,9 @@ function criteriaTable(facts: MemoFacts): MemoTable {
       ]);
     }),
     [
-      'A value runs straight from 0 at the worst level to 1 at the best and stays there beyond.',
+      'A value runs from 0 at the worst level to 1 at the best and stays there beyond.',
+      ...shapeNotes(facts),
+      ...stepNotes(facts),
       ...(facts.ranking.criteria.some(({ span }) => span.kind === 'flat')
         ? ['Where all candidates are equal the criterion tells none apart: its value is 0 for all.']
         : []),

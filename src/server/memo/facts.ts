@@ -2,6 +2,7 @@ import type { SiteResult } from '#contract/evaluate.ts';
 import type { MemoPaper } from '#contract/memo.ts';
 import type { Ranking } from '#contract/ranking.ts';
 import type { MembersAgreement } from '#contract/agreement-model.ts';
+import type { Evidence } from '#contract/evidence.ts';
 import type { CriterionGroup } from '#contract/criterion.ts';
 import type { RankingFigures } from '#contract/ranking.ts';
 import type { Sensitivity } from '#contract/sensitivity.ts';
@@ -38,6 +39,8 @@ export interface MemoFacts {
   weights: Weights;
   /** Of the study's set, drawn as the screens draw it by default. */
   sensitivity: Sensitivity;
+  /** Files that support figures, the latest first, and how many there are. */
+  evidence: { files: Pick<Evidence, 'siteId' | 'criterionId' | 'fileName' | 'sha256'>[]; total: number };
   /** Of the sets that members share. */
   members: MembersAgreement;
   /** SHA-256 of the canonical inputs, hexadecimal. */

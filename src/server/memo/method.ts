@@ -1,5 +1,5 @@
 import { constants } from '#core/constants.ts';
-import { references } from '#core/references.ts';
+import { references, studyReferences, weighingReferences } from '#core/references.ts';
 import { formatNumber } from '#contract/format.ts';
 import type { MemoBlock, MemoFormulas, MemoTable } from '#contract/memo.ts';
 import { cell, figures, row, table, words } from './cells.ts';
@@ -56,10 +56,45 @@ const FLIGHT: MemoFormulas['items'] = [
 const DECISION: MemoFormulas['items'] = [
   {
     formula: 'v = (x − worst) / (best − worst)',
-    meaning: 'Value of a figure x, 0 to 1 and clamped there (Keeney and Raiffa 1976, straight).',
+    meaning: 'Place s of a figure x between the levels, 0 to 1 and clamped there (Keeney and Raiffa 1976).',
   },
-  { formula: 'w = points / Σ points', meaning: 'Weight of a criterion; the weights sum to 1.' },
+  {
+    formula: 'v = s;  v = (1 − e^(−c s)) / (1 − e^(−c))',
+    meaning: 'Value: straight, exponential with curvature c, or straight between up to five points.',
+  },
+  {
+    formula: 'w = points / Σ points',
+    meaning:
+      'Weight by points or swings, within a level; a grouped criterion’s is its group’s times its own.',
+  },
+  {
+    formula: 'A w = λmax w;  (λmax − n) / ((n − 1) RI)',
+    meaning: 'Weights by pairwise comparison and their consistency ratio; RI the random index of Saaty 1980.',
+  },
+  {
+    formula: 'w_k = (1/n) Σ 1/i, i = k … n',
+    meaning: 'Rank-order centroid weight of the k-th of n.',
+  },
   { formula: 'V = Σ w v', meaning: 'Overall value. Values within 1e-12 tie and share a rank.' },
+  {
+    formula: 'w* = (R₂ − R₁) / ((v₁ − R₁) − (v₂ − R₂))',
+    meaning:
+      'Weight of one criterion at which two sites tie; v their values on it, R = (V − w v)/(1 − w) the rest, whose proportions stay.',
+  },
+  {
+    formula: 'r = v / √Σ v²;  C = d₋ / (d₊ + d₋)',
+    meaning:
+      'TOPSIS on values and weights (Hwang and Yoon 1981): closeness C to the ideal, from distances in w r.',
+  },
+  {
+    formula: 'b(site, rank) = share of draws',
+    meaning:
+      'SMAA-2 (Lahdelma and Salminen 2001): weights uniform in their part of the simplex, uncertain figures triangular on low, likely and high; the generator is xoshiro128**, seeded.',
+  },
+  {
+    formula: 'W = 12 S / (m² (n³ − n) − m Σ (t³ − t))',
+    meaning: 'Kendall’s coefficient of concordance of m judges on n sites, ties t corrected.',
+  },
   {
     formula: 'payload a year = Σ flights × payload',
     meaning: 'Over the manifest; an orbit out of reach or fallen short counts 0.',
@@ -96,7 +131,9 @@ function sources(): MemoTable {
   return table(
     'Sources of the method',
     [words('Source', 100, true)],
-    Object.values(references).map((source) => row([cell(source)])),
+    Object.values({ ...references, ...weighingReferences, ...studyReferences }).map((source) =>
+      row([cell(source)]),
+    ),
   );
 }
 

@@ -3,7 +3,7 @@ import { formatCount, formatNumber, listInWords } from '#contract/format.ts';
 import type { MemoBlock, MemoContributions, MemoPart, MemoTable } from '#contract/memo.ts';
 import type { Contribution, RankedSite, Ranking, WeighedCriterion } from '#contract/ranking.ts';
 import { letterOf, missingInWords, rankRange, valueDecimals } from '#contract/ranking-words.ts';
-import { cell, figure, figures, row, runsOf, table, words } from './cells.ts';
+import { cell, figure, figures, row, runsOf, table, unitOf, words } from './cells.ts';
 import { MOST_OTHERS, MOST_RANKED, type MemoFacts } from './facts.ts';
 import { leftOut } from './printed-sites.ts';
 
@@ -40,7 +40,7 @@ const worstNotes = (rows: readonly { contributions: Contribution[] }[]): string[
     : [];
 
 const criterionColumn = ({ criterion, place }: Placed) =>
-  figures(`${letterOf(place)} ${criterion.name}`, criterion.unit, 10);
+  figures(`${letterOf(place)} ${criterion.name}`, unitOf(criterion), 10);
 
 /** Short notes as one. */
 const together = (notes: readonly string[]): string[] => (notes.length === 0 ? [] : [notes.join(' ')]);
