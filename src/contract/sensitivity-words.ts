@@ -53,12 +53,23 @@ export function nearestChange(
   return all[0] ?? null;
 }
 
+/** The least move of one weight that changes the leader, without its full stop. */
+export function nearestChangeInWords(changes: readonly LeaderChangeOf[], names: Names): string {
+  const nearest = nearestChange(changes);
+  if (!nearest) return 'No weight alone changes the leader';
+  const { criterionId, now, at, siteId } = nearest;
+  const name = names.criterion(criterionId);
+  return isNow({ weight: at }, now)
+    ? `The lead is shared now with ${names.site(siteId)}`
+    : `Nearest change: ${name} from ${weightFigure(now)} to ${weightFigure(at)}, where ${names.site(siteId)} leads`;
+}
+
 interface Ranked {
   siteId: string;
   rank: number;
 }
 
-/** A fact and what stands behind it. */
+/** A fact, without its full stop, and what stands behind it. */
 export interface Finding {
   fact: string;
   behind: string;
@@ -99,7 +110,7 @@ export function secondOpinionInWords(
       ? `Closeness ${formatNumber(first.closeness, 3)} against ${formatNumber(second.closeness, 3)} for ${names.site(second.siteId)}. `
       : '';
   if (moved.length === 0)
-    return { fact: 'TOPSIS gives the same order.', behind: `${figures}Every site keeps its rank.` };
+    return { fact: 'TOPSIS gives the same order', behind: `${figures}Every site keeps its rank.` };
   const leads = new Set(ranked.filter(({ rank }) => rank === 1).map(({ siteId }) => siteId));
   const agree = ranked.length - moved.length;
   const others =
@@ -109,7 +120,7 @@ export function secondOpinionInWords(
   const words = moved.map(({ siteId, ...ranks }) => ({ name: names.site(siteId), ...ranks }));
   return {
     fact: first
-      ? `TOPSIS ${leads.has(first.siteId) ? 'too puts' : 'puts'} ${names.site(first.siteId)} first${leads.has(first.siteId) ? ', and differs further down' : ''}.`
+      ? `TOPSIS ${leads.has(first.siteId) ? 'too puts' : 'puts'} ${names.site(first.siteId)} first${leads.has(first.siteId) ? ', and differs further down' : ''}`
       : '',
     behind: `${figures}It ranks ${movesInWords(words)}; ${others}.`,
   };
@@ -119,12 +130,12 @@ export function secondOpinionInWords(
 export function dominanceInWords({ nonDominated, dominated }: Dominance): Finding {
   if (dominated.length === 0)
     return {
-      fact: 'No ranked site is dominated.',
+      fact: 'No ranked site is dominated',
       behind: `Each of ${formatNumber(nonDominated)} is better than every other on at least one criterion, or level with it on all.`,
     };
   const total = nonDominated + dominated.length;
   return {
-    fact: `${formatNumber(dominated.length)} of ${formatCount(total, 'ranked site')} ${dominated.length === 1 ? 'is' : 'are'} dominated.`,
+    fact: `${formatNumber(dominated.length)} of ${formatCount(total, 'ranked site')} ${dominated.length === 1 ? 'is' : 'are'} dominated`,
     behind: `Another site is at least as good on every criterion and better on one. ${formatNumber(nonDominated)} ${nonDominated === 1 ? 'is' : 'are'} not dominated, whatever the weights.`,
   };
 }
@@ -156,9 +167,9 @@ export function acceptabilityInWords(answer: AcceptabilityOf, names: Names): Fin
   const error = `standard error ${errorFigure(share, samples)}${share > 0 && share < 1 ? ' percentage points' : ''}`;
   const drawn = `With ${drawnInWords(answer)}; ${error}.`;
   if (best === 0)
-    return { fact: `${name(0)} is first in ${shareInWords(share, samples)} of ${draws}.`, behind: drawn };
+    return { fact: `${name(0)} is first in ${shareInWords(share, samples)} of ${draws}`, behind: drawn };
   return {
-    fact: `${name(0)} leads now, but ${name(best)} is first more often: in ${shareInWords(share, samples)} of ${draws} against ${shareInWords(shareOf(0), samples)}.`,
+    fact: `${name(0)} leads now, but ${name(best)} is first more often: in ${shareInWords(share, samples)} of ${draws} against ${shareInWords(shareOf(0), samples)}`,
     behind: drawn,
   };
 }

@@ -38,6 +38,12 @@ export const VIEWS: readonly RankingView[] = [
     needsRanks: true,
     load: () => import('./compare/CompareView.tsx'),
   },
+  {
+    value: 'holds',
+    name: 'Does it hold',
+    needsRanks: true,
+    load: () => import('./holds/HoldsView.tsx'),
+  },
 ];
 
 /** The view an address asks for; the ranking itself where it asks for none that exists. */

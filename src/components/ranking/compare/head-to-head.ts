@@ -1,4 +1,4 @@
-import { formatCount, formatSigned, listInWords } from '#contract/format.ts';
+import { formatNumber, formatSigned, listInWords } from '#contract/format.ts';
 import type { RankingModel } from '#contract/ranking-model.ts';
 import type { RankingRow } from '#contract/ranking-rows.ts';
 import { headToHead } from '#core/decision/head-to-head.ts';
@@ -98,11 +98,11 @@ export function boutInWords(
   const margin = margins[0] ?? 0;
   const steps = differences[0] ?? [];
   const signed = (value: number): string => formatSigned(value, decimals);
-  const say = (places: readonly number[]): string =>
-    listInWords(places.slice(0, NAMED).map((j) => `${criteria[j]?.name ?? ''} ${signed(steps[j] ?? 0)}`)) +
-    (places.length > NAMED
-      ? ` and ${formatCount(places.length - NAMED, 'more criterion', 'more criteria')}`
-      : '');
+  const say = (places: readonly number[]): string => {
+    const named = places.slice(0, NAMED).map((j) => `${criteria[j]?.name ?? ''} ${signed(steps[j] ?? 0)}`);
+    const rest = places.length - named.length;
+    return listInWords(rest > 0 ? [...named, `${formatNumber(rest)} more`] : named);
+  };
   const forIt = order.filter((j) => (steps[j] ?? 0) > 0);
   const against = order.filter((j) => (steps[j] ?? 0) < 0);
   const stands =
