@@ -51,12 +51,12 @@ async function makeStudy(tx: Db, study: DemoStudy, people: ReadonlyMap<string, s
     });
   const { contents, saying } = scenarioContents(study, await scenarioVehicle(tx, study.vehicleCode));
   const { weightsByIds } = await writeContents(tx, { studyId, contents });
-  for (const { login, points } of study.ownPoints)
+  for (const { login, points, shared = false } of study.ownPoints)
     await writeWeights(tx, {
       studyId,
       userId: idOf(people, login),
       id: null,
-      values: weightsByIds(saying(points)),
+      values: { ...weightsByIds(saying(points)), shared },
     });
   const to = { title: study.title, origin: 'demo', sites: study.sites.length, orbits: study.orbits.length };
   await writeRecord(tx, { studyId, userId: createdBy, revision: 1 }, [

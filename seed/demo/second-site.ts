@@ -85,13 +85,17 @@ const criteria: DemoCriterion[] = [
   },
   {
     key: 'access',
-    source: 'entered',
+    source: 'rating',
     name: 'Access',
-    unit: 'rating 0–4',
-    direction: 'more',
-    levels: { mode: 'fixed', worst: 0, best: 4 },
+    steps: ['Sea only', 'Track', 'Road in season', 'Road all year', 'Road and airfield'],
   },
 ];
+
+/* Where the invented figures are said to come from; distances to ports and some ratings have no source yet. */
+const COST_MODEL = 'Ground-works cost model, issue 3';
+const SCHEDULE = 'Permits and works schedule, issue 2';
+const WEATHER = 'Weather desk study, ten years of hourly data';
+const VISIT = 'Site visit, September 2026';
 
 const sites: DemoSite[] = [
   {
@@ -103,6 +107,12 @@ const sites: DemoSite[] = [
     permittedAzimuthsDeg: [[325, 92]],
     notes: 'Brazil, north-east coast',
     values: { port: 160, cost: 344, time: 50, days: 288, access: 3 },
+    particulars: {
+      cost: { low: 320, high: 382, source: COST_MODEL, date: '2026-10-02', confidence: 'medium' },
+      time: { low: 46, high: 58, source: SCHEDULE, date: '2026-10-16', confidence: 'medium' },
+      days: { source: WEATHER, date: '2026-08-21', confidence: 'high' },
+      access: { source: VISIT, date: '2026-09-14', confidence: 'high' },
+    },
   },
   {
     code: 'ES',
@@ -113,6 +123,12 @@ const sites: DemoSite[] = [
     permittedAzimuthsDeg: [[342, 95]],
     notes: 'Guyana, Atlantic coast',
     values: { port: 75, cost: 334, time: 52, days: 231, access: 2 },
+    particulars: {
+      cost: { low: 314, high: 379, source: COST_MODEL, date: '2026-10-02', confidence: 'medium' },
+      time: { low: 48, high: 61, source: SCHEDULE, date: '2026-10-16', confidence: 'medium' },
+      days: { source: WEATHER, date: '2026-08-21', confidence: 'high' },
+      access: { source: VISIT, date: '2026-09-14', confidence: 'high' },
+    },
   },
   {
     code: 'TH',
@@ -123,6 +139,12 @@ const sites: DemoSite[] = [
     permittedAzimuthsDeg: [[46, 112]],
     notes: 'Australia, Coral Sea',
     values: { port: 215, cost: 341, time: 47, days: 262, access: 3 },
+    particulars: {
+      cost: { low: 323, high: 371, source: COST_MODEL, date: '2026-10-02', confidence: 'high' },
+      time: { low: 44, high: 53, source: SCHEDULE, date: '2026-10-16', confidence: 'high' },
+      days: { source: WEATHER, date: '2026-08-21', confidence: 'high' },
+      access: { source: VISIT, date: '2026-09-14', confidence: 'high' },
+    },
   },
   {
     code: 'PR',
@@ -133,6 +155,11 @@ const sites: DemoSite[] = [
     permittedAzimuthsDeg: [[40, 190]],
     notes: 'Madagascar, east coast',
     values: { port: 58, cost: 259, time: 58, days: 226, access: 1 },
+    particulars: {
+      cost: { low: 237, high: 329, source: COST_MODEL, date: '2026-10-02', confidence: 'low' },
+      time: { low: 53, high: 72, source: SCHEDULE, date: '2026-10-16', confidence: 'low' },
+      days: { source: WEATHER, date: '2026-08-21', confidence: 'high' },
+    },
   },
   {
     code: 'RD',
@@ -143,6 +170,11 @@ const sites: DemoSite[] = [
     permittedAzimuthsDeg: [[75, 152]],
     notes: 'Kenya, north coast',
     values: { port: 225, cost: 305, time: 50, days: 276, access: 3 },
+    particulars: {
+      cost: { low: 280, high: 357, source: COST_MODEL, date: '2026-10-02', confidence: 'low' },
+      time: { low: 46, high: 60, source: SCHEDULE, date: '2026-10-16', confidence: 'low' },
+      days: { source: WEATHER, date: '2026-08-21', confidence: 'high' },
+    },
   },
   {
     code: 'PL',
@@ -153,6 +185,10 @@ const sites: DemoSite[] = [
     permittedAzimuthsDeg: [[62, 132]],
     notes: 'Philippines, east Luzon. The cost estimate is due in January.',
     values: { port: 120, time: 49, days: 203, access: 3 },
+    particulars: {
+      time: { low: 45, high: 58, source: SCHEDULE, date: '2026-10-16', confidence: 'medium' },
+      days: { source: WEATHER, date: '2026-08-21', confidence: 'high' },
+    },
   },
   {
     code: 'MP',
@@ -166,6 +202,11 @@ const sites: DemoSite[] = [
     ],
     notes: 'Micronesia, Kosrae',
     values: { port: 12, cost: 388, time: 57, days: 219, access: 1 },
+    particulars: {
+      cost: { low: 358, high: 448, source: COST_MODEL, date: '2026-10-02', confidence: 'low' },
+      time: { low: 51, high: 69, source: SCHEDULE, date: '2026-10-16', confidence: 'low' },
+      days: { source: WEATHER, date: '2026-08-21', confidence: 'high' },
+    },
   },
   {
     code: 'AR',
@@ -176,6 +217,12 @@ const sites: DemoSite[] = [
     permittedAzimuthsDeg: [[10, 265]],
     notes: 'Portugal, western Azores',
     values: { port: 9, cost: 268, time: 44, days: 182, access: 2 },
+    particulars: {
+      cost: { low: 254, high: 292, source: COST_MODEL, date: '2026-10-02', confidence: 'high' },
+      time: { low: 42, high: 49, source: SCHEDULE, date: '2026-10-16', confidence: 'high' },
+      days: { source: WEATHER, date: '2026-08-21', confidence: 'high' },
+      access: { source: VISIT, date: '2026-09-14', confidence: 'high' },
+    },
   },
   {
     code: 'PB',
@@ -186,6 +233,11 @@ const sites: DemoSite[] = [
     permittedAzimuthsDeg: [],
     notes: 'New Zealand, Chatham Islands',
     values: { port: 24, cost: 372, time: 55, days: 176, access: 1 },
+    particulars: {
+      cost: { low: 352, high: 420, source: COST_MODEL, date: '2026-10-02', confidence: 'medium' },
+      time: { low: 51, high: 64, source: SCHEDULE, date: '2026-10-16', confidence: 'medium' },
+      days: { source: WEATHER, date: '2026-08-21', confidence: 'high' },
+    },
   },
   {
     code: 'CD',
@@ -196,6 +248,12 @@ const sites: DemoSite[] = [
     permittedAzimuthsDeg: [[35, 178]],
     notes: 'Canada, Newfoundland',
     values: { port: 140, cost: 271, time: 39, days: 168, access: 4 },
+    particulars: {
+      cost: { low: 259, high: 297, source: COST_MODEL, date: '2026-10-02', confidence: 'high' },
+      time: { low: 37, high: 44, source: SCHEDULE, date: '2026-10-16', confidence: 'high' },
+      days: { source: WEATHER, date: '2026-08-21', confidence: 'high' },
+      access: { source: VISIT, date: '2026-09-14', confidence: 'high' },
+    },
   },
   {
     code: 'CA',
@@ -206,6 +264,11 @@ const sites: DemoSite[] = [
     permittedAzimuthsDeg: [[350, 170]],
     notes: 'Argentina, Tierra del Fuego',
     values: { port: 185, cost: 296, time: 52, days: 164, access: 0 },
+    particulars: {
+      cost: { low: 276, high: 340, source: COST_MODEL, date: '2026-10-02', confidence: 'medium' },
+      time: { low: 48, high: 62, source: SCHEDULE, date: '2026-10-16', confidence: 'medium' },
+      days: { source: WEATHER, date: '2026-08-21', confidence: 'high' },
+    },
   },
   {
     code: 'SK',
@@ -216,6 +279,12 @@ const sites: DemoSite[] = [
     permittedAzimuthsDeg: [[300, 20]],
     notes: 'Norway, Finnmark coast',
     values: { port: 95, cost: 204, time: 34, days: 149, access: 3 },
+    particulars: {
+      cost: { low: 196, high: 218, source: COST_MODEL, date: '2026-10-02', confidence: 'high' },
+      time: { low: 33, high: 37, source: SCHEDULE, date: '2026-10-16', confidence: 'high' },
+      days: { source: WEATHER, date: '2026-08-21', confidence: 'high' },
+      access: { source: VISIT, date: '2026-09-14', confidence: 'high' },
+    },
   },
 ];
 
@@ -238,10 +307,12 @@ export const secondSite: DemoStudy = {
   ownPoints: [
     {
       login: 'engineer',
+      shared: true,
       points: { payload: 35, turn: 15, port: 5, cost: 20, time: 10, days: 10, access: 5 },
     },
     {
       login: 'reviewer',
+      shared: true,
       points: { payload: 20, turn: 5, port: 10, cost: 30, time: 20, days: 10, access: 5 },
     },
   ],

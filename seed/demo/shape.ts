@@ -45,7 +45,7 @@ export interface DemoStudy {
   /** The study's points by criterion key and group name. */
   points: Record<string, number>;
   /** Members' own sets. */
-  ownPoints: { login: string; points: Record<string, number> }[];
+  ownPoints: { login: string; shared?: boolean; points: Record<string, number> }[];
 }
 
 /** What seed/demo/scenario.ts exports as `scenario`. The first study is the example that new studies can be made from. */

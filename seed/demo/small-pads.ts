@@ -32,16 +32,25 @@ export const smallPads: DemoStudy = {
     },
   ],
   criteria: [
-    { key: 'payload', source: 'computed', quantity: 'payload', orbitCode: 'SSO' },
+    { key: 'payload', group: 'Flight', source: 'computed', quantity: 'payload', orbitCode: 'SSO' },
     {
       key: 'out',
+      group: 'Flight',
       source: 'computed',
       quantity: 'orbits-out-of-reach',
       levels: { mode: 'fixed', worst: 3, best: 0 },
     },
-    { key: 'cost', source: 'entered', name: 'Cost to first launch', unit: 'M€', direction: 'less' },
+    {
+      key: 'cost',
+      group: 'Ground',
+      source: 'entered',
+      name: 'Cost to first launch',
+      unit: 'M€',
+      direction: 'less',
+    },
     {
       key: 'days',
+      group: 'Ground',
       source: 'entered',
       name: 'Launch days a year',
       unit: 'days',
@@ -91,6 +100,8 @@ export const smallPads: DemoStudy = {
       values: { cost: 39, days: 182 },
     },
   ],
-  points: { payload: 40, out: 15, cost: 25, days: 20 },
-  ownPoints: [{ login: 'lead', points: { payload: 30, out: 30, cost: 20, days: 20 } }],
+  points: { Flight: 55, payload: 40, out: 15, Ground: 45, cost: 25, days: 20 },
+  ownPoints: [
+    { login: 'lead', points: { Flight: 60, payload: 30, out: 30, Ground: 40, cost: 20, days: 20 } },
+  ],
 };
