@@ -11,9 +11,17 @@ import {
   TextField,
   useContractForm,
 } from '#components/ui/index.ts';
-import { ComputedInput, EnteredInput, type Criterion, type CriterionDraft } from '#contract/criterion.ts';
+import {
+  ComputedInput,
+  DEFAULT_STEPS,
+  EnteredInput,
+  RatingInput,
+  type Criterion,
+  type CriterionDraft,
+} from '#contract/criterion.ts';
 import type { z } from '#contract/zod.ts';
 import { QUANTITIES, QUANTITY_KEYS, quantityName } from '#contract/quantity.ts';
+import { RatingSteps } from './RatingSteps.tsx';
 
 export interface OrbitChoice {
   id: string;
@@ -27,9 +35,9 @@ interface AddProps {
   onClose: () => void;
 }
 
-/** A new criterion: computed from flight mechanics, or entered for each site. Nothing is saved until it is added. */
+/** A new criterion: computed from flight mechanics, or entered or rated for each site. Nothing is saved until it is added. */
 export function AddCriterion(props: AddProps) {
-  const [source, setSource] = useState<'computed' | 'entered'>('computed');
+  const [source, setSource] = useState<'computed' | 'entered' | 'rating'>('computed');
   return (
     <SideSheet open onClose={props.onClose} title="New criterion">
       <Segmented
@@ -38,10 +46,13 @@ export function AddCriterion(props: AddProps) {
         onChange={setSource}
         segments={[
           { value: 'computed', name: 'Computed' },
-          { value: 'entered', name: 'Entered' },
+          { value: 'entered', name: 'Entered number' },
+          { value: 'rating', name: 'Rating' },
         ]}
       />
-      {source === 'computed' ? <ComputedForm {...props} /> : <EnteredForm {...props} />}
+      {source === 'computed' && <ComputedForm {...props} />}
+      {source === 'entered' && <EnteredForm {...props} />}
+      {source === 'rating' && <RatingForm {...props} />}
     </SideSheet>
   );
 }
@@ -143,7 +154,7 @@ function EnteredForm(props: AddProps) {
       <TextField
         label="Unit"
         optional
-        hint="M€, days, km; for a rating: rating 0–4"
+        hint="M€, days, km"
         error={form.formState.errors.unit}
         {...form.register('unit')}
       />
@@ -161,6 +172,32 @@ function EnteredForm(props: AddProps) {
       </div>
       <p className="caption">
         Its figures are entered in Sites, cell by cell, or come with a CSV of the same heading.
+      </p>
+      <Refusal failure={failure} />
+      <AddButtons busy={busy} onClose={props.onClose} />
+    </form>
+  );
+}
+
+function RatingForm(props: AddProps) {
+  const { add, busy, failure } = useAdding(props);
+  const form = useContractForm(RatingInput, { source: 'rating', name: '', steps: DEFAULT_STEPS });
+  const submit = form.handleSubmit(async (input) => {
+    const refused = await add(input);
+    if (refused) showServerErrors<z.input<typeof RatingInput>>(refused, ['name'], form.setError);
+  });
+  const { errors } = form.formState;
+  return (
+    <form noValidate className="mt-5 grid gap-4" onSubmit={(event) => void submit(event)}>
+      <TextField label="Name" error={errors.name} {...form.register('name')} />
+      <RatingSteps
+        fieldOf={(step) => form.register(`steps.${step}`)}
+        errorOf={(step) => errors.steps?.[step] ?? (step === 0 ? errors.steps?.root : undefined)}
+        worstFirst
+      />
+      <p className="caption">
+        A site takes one of the five steps, 0 to 4; a higher step is better. Its ratings are given in Sites,
+        cell by cell, or come with a CSV of the same heading.
       </p>
       <Refusal failure={failure} />
       <AddButtons busy={busy} onClose={props.onClose} />

@@ -8,7 +8,6 @@ import {
   EstimatesCaution,
   FiguresNotRead,
 } from '#components/ranking/Notices.tsx';
-import { SaveNote } from '#components/ranking/SaveNote.tsx';
 import { useRanking } from '#components/ranking/use-ranking.ts';
 import { PATTERNS } from '#components/ranking/ValueBar.tsx';
 import { inputLockOf, lockOf, type Viewer } from '#components/ranking/viewer.ts';
@@ -22,31 +21,36 @@ import {
   Stale,
   toast,
 } from '#components/ui/index.ts';
-import type { Criterion } from '#contract/criterion.ts';
-import { MOST_POINTS } from '#contract/points.ts';
+import { evenStatement } from '#components/weights/statement.ts';
+import type { Criterion, CriterionGroup } from '#contract/criterion.ts';
 import type { RankingStart } from '#contract/ranking.ts';
 import { AddCriterion, type OrbitChoice } from './AddCriterion.tsx';
-import { CriteriaTable } from './CriteriaTable.tsx';
+import { CriteriaWeights } from './CriteriaWeights.tsx';
 import { CriterionEditor } from './CriterionEditor.tsx';
 import { Effect } from './Effect.tsx';
+import { GroupsPanel } from './GroupsPanel.tsx';
 import { useCriteria } from './use-criteria.ts';
+import { useGroups } from './use-groups.ts';
 import { criteriaFinding, criteriaWhy } from './words.ts';
 
 interface CriteriaScreenProps {
   studyId: string;
   start: RankingStart;
   criteria: Criterion[];
+  groups: CriterionGroup[];
   orbits: OrbitChoice[];
   viewer: Viewer;
   address: { weights: string | null; criterion: string | null };
 }
 
-export function CriteriaScreen({ studyId, start, criteria, orbits, viewer, address }: CriteriaScreenProps) {
+export function CriteriaScreen(props: CriteriaScreenProps) {
+  const { studyId, start, criteria, orbits, viewer, address } = props;
   const [whoseParam, setWhose] = useAddressParam('weights', address.weights);
   const [chosen, setChosen] = useAddressParam('criterion', address.criterion);
   const [adding, setAdding] = useState(false);
   const whose = whoseParam === 'mine' ? 'mine' : 'study';
   const list = useCriteria(studyId, criteria);
+  const groups = useGroups(studyId, props.groups);
   const live = useRanking(studyId, start, whose);
   const { ranking, model, weights } = live;
   const sheet = useMemo(() => sheetOf(ranking, model), [ranking, model]);
@@ -127,7 +131,10 @@ export function CriteriaScreen({ studyId, start, criteria, orbits, viewer, addre
           </div>
           <div className="cr-columns">
             <div>
-              <CriteriaTable
+              <CriteriaWeights
+                key={whose}
+                studyId={studyId}
+                whose={whose}
                 items={list.items}
                 columns={sheet.columns}
                 weights={weights}
@@ -137,21 +144,13 @@ export function CriteriaScreen({ studyId, start, criteria, orbits, viewer, addre
                 onChoose={setChosen}
                 onMove={(criterion, position) => void list.move(criterion, position).then(refresh)}
               />
-              {weightsLocked === undefined && (
-                <div className="mt-3">
-                  <SaveNote
-                    set={weights}
-                    what={whose === 'mine' ? 'your weights' : 'the study’s weights'}
-                    criteria={ranking.criteria}
-                  />
-                </div>
-              )}
               {open && (
                 <div className="mt-9">
                   <CriterionEditor
                     key={open.id}
                     studyId={studyId}
                     criterion={open}
+                    groups={groups}
                     column={sheet.columns.find(({ criterion }) => criterion.id === open.id)}
                     figures={model?.figures ?? null}
                     leader={ranking.ranked[0]?.siteId}
@@ -164,6 +163,18 @@ export function CriteriaScreen({ studyId, start, criteria, orbits, viewer, addre
                   />
                 </div>
               )}
+              <div className="mt-9">
+                <GroupsPanel
+                  groups={groups}
+                  criteria={list.items}
+                  locked={inputsLocked}
+                  onRemoved={({ name }) => {
+                    list.again();
+                    refresh();
+                    toast(`${name} removed.`);
+                  }}
+                />
+              </div>
             </div>
             <div className="cr-effect">
               {ranking.state !== 'ranked' && ranking.state !== 'no-criteria' && (
@@ -172,10 +183,7 @@ export function CriteriaScreen({ studyId, start, criteria, orbits, viewer, addre
                   studyId={studyId}
                   onEven={
                     weightsLocked === undefined
-                      ? () =>
-                          weights.give(
-                            Object.fromEntries(ranking.criteria.map(({ id }) => [id, MOST_POINTS])),
-                          )
+                      ? () => weights.state(evenStatement(ranking.criteria))
                       : undefined
                   }
                 />

@@ -6,8 +6,8 @@ import type { CriterionColumn } from '#components/ranking/columns.ts';
 import { useAutosave } from '#components/requirement/autosave.ts';
 import { SaveTrouble } from '#components/requirement/SaveTrouble.tsx';
 import { useKeptValues } from '#components/requirement/use-kept-values.ts';
-import { Button, ConfirmDialog, Panel } from '#components/ui/index.ts';
-import type { Criterion } from '#contract/criterion.ts';
+import { Button, ConfirmDialog, messageOf, Panel } from '#components/ui/index.ts';
+import type { Criterion, CriterionShape } from '#contract/criterion.ts';
 import { formatCount } from '#contract/format.ts';
 import type { RankingFigures } from '#contract/ranking.ts';
 import {
@@ -15,15 +15,21 @@ import {
   CRITERION_FIELDS,
   fieldsOf,
   readCriterion,
+  settingsNow,
   type CriterionFields,
 } from './criterion-form.ts';
 import { CriterionFieldset } from './CriterionFieldset.tsx';
+import { CriterionSettingsList } from './CriterionSettingsList.tsx';
+import { ShapeFields } from './ShapeFields.tsx';
+import type { Groups } from './use-groups.ts';
+import { useHistory } from './use-history.ts';
 import { ValueFunction } from './ValueFunction.tsx';
-import { directionInWords, figureInWords, limitInWords, numbersOf } from './words.ts';
+import { figureInWords, limitInWords, numbersOf, shapeInWords } from './words.ts';
 
 interface EditorProps {
   studyId: string;
   criterion: Criterion;
+  groups: Groups;
   column: CriterionColumn | undefined;
   figures: RankingFigures | null;
   leader: string | undefined;
@@ -38,42 +44,36 @@ export function CriterionEditor(props: EditorProps) {
   const { criterion, column, figures, locked } = props;
   return (
     <Panel title={criterion.name} caption={locked ?? 'Every change is saved as you leave its field.'}>
-      {criterion.source === 'text' ? (
+      {criterion.source === 'text' && (
         <p className="caption">
           A column of text: it is kept and shown with the sites, and not weighed. Its texts cannot be ranked.
         </p>
-      ) : (
-        column && figures && <ValueFunction column={column} figures={figures} leader={props.leader} />
       )}
-      {locked ? <Settings criterion={criterion} /> : <EditorForm {...props} />}
+      {locked ? (
+        <>
+          {criterion.source !== 'text' && column && figures && (
+            <ValueFunction column={column} figures={figures} shape={criterion.shape} leader={props.leader} />
+          )}
+          <CriterionSettingsList
+            criterion={criterion}
+            span={column?.criterion.span}
+            group={props.groups.items.find(({ id }) => id === criterion.groupId)?.name}
+          />
+        </>
+      ) : (
+        <EditorForm {...props} />
+      )}
     </Panel>
   );
 }
 
-/** The settings in words, for those who may not change them. */
-function Settings({ criterion }: { criterion: Criterion }) {
-  const { levels } = criterion;
-  return (
-    <dl className="cr-settings">
-      <dt>Direction</dt>
-      <dd>{directionInWords(criterion.direction)}</dd>
-      <dt>Levels</dt>
-      <dd>
-        {levels.mode === 'fixed'
-          ? `fixed, worst ${figureInWords(levels.worst)}, best ${figureInWords(levels.best)} ${criterion.unit}`
-          : 'from the candidates'}
-      </dd>
-      <dt>Must-meet limit</dt>
-      <dd>{limitInWords(criterion)}</dd>
-    </dl>
-  );
-}
-
-function EditorForm({ studyId, criterion, column, figures, onKept, onRemove }: EditorProps) {
+function EditorForm(props: EditorProps) {
+  const { studyId, criterion, groups, column, figures, onKept, onRemove } = props;
   const fields = useMemo(() => fieldsOf(criterion), [criterion]);
   const form = useForm<CriterionFields>({ defaultValues: fields });
   const values = useWatch({ control: form.control }) as CriterionFields;
   const [asking, setAsking] = useState(false);
+  const history = useHistory();
   const autosave = useAutosave<Criterion>({
     kept: criterion,
     write: (change, version) =>
@@ -95,19 +95,72 @@ function EditorForm({ studyId, criterion, column, figures, onKept, onRemove }: E
     const change = changesOf(criterion, read.settings);
     if (Object.keys(change).length === 0) return;
     const before = readCriterion(basedOn());
+    history.note(settingsNow(criterion, change), change);
     autosave.save(change, before.ok ? before.settings : {});
+  };
+  const draw = (shape: CriterionShape): void => form.setValue('shape', shape);
+  const undo = (): void => {
+    const step = history.takeLast();
+    if (step) autosave.save(step.before, step.after);
   };
   const held = figures && column ? numbersOf(figures.cells, column.place).length : 0;
   return (
-    <form noValidate className="mt-5" onSubmit={(event) => event.preventDefault()}>
-      <CriterionFieldset
-        form={form}
-        values={values}
-        criterion={criterion}
-        span={column?.criterion.span}
-        onLeave={leave}
+    <form noValidate onSubmit={(event) => event.preventDefault()}>
+      {criterion.source !== 'text' && (
+        <>
+          {column && figures && (
+            <ValueFunction
+              column={column}
+              figures={figures}
+              shape={values.shape}
+              leader={props.leader}
+              edit={{ onDraw: draw, onSettle: leave }}
+            />
+          )}
+          <ShapeFields
+            shape={values.shape}
+            unit={criterion.unit}
+            span={column?.criterion.span}
+            error={messageOf(form.formState.errors.shape as { message?: string } | undefined)}
+            onChange={(shape) => {
+              draw(shape);
+              leave();
+            }}
+          />
+        </>
+      )}
+      <div className="mt-4">
+        <Button
+          size="small"
+          icon="undo"
+          notYet={history.empty ? 'Nothing has been changed here yet.' : undefined}
+          onClick={undo}
+        >
+          Undo last change
+        </Button>
+      </div>
+      <div className="mt-5">
+        <CriterionFieldset
+          form={form}
+          values={values}
+          criterion={criterion}
+          groups={groups}
+          span={column?.criterion.span}
+          onLeave={leave}
+        />
+      </div>
+      <SaveTrouble
+        autosave={autosave}
+        what={criterion.name}
+        describe={(version, changed) =>
+          changed.map((field) => (
+            <span key={field} className="block">
+              <span className="font-sans text-sm">{LABELS[field] ?? field}</span>{' '}
+              {inWords(version, field, groups)}
+            </span>
+          ))
+        }
       />
-      <SaveTrouble autosave={autosave} what={criterion.name} describe={describe} />
       <div className="mt-5">
         <Button kind="destructive" size="small" icon="remove" onClick={() => setAsking(true)}>
           Remove {criterion.name}
@@ -138,21 +191,19 @@ const LABELS: Partial<Record<keyof Criterion, string>> = {
   direction: 'Direction',
   levels: 'Levels',
   limit: 'Limit',
+  shape: 'Value between the levels',
+  groupId: 'Group',
+  steps: 'Steps',
 };
 
-function describe(version: Partial<Criterion>, fields: readonly (keyof Criterion)[]) {
-  return fields.map((field) => (
-    <span key={field} className="block">
-      <span className="font-sans text-sm">{LABELS[field] ?? field}</span> {inWords(version, field)}
-    </span>
-  ));
-}
-
-function inWords(version: Partial<Criterion>, field: keyof Criterion): string {
-  if (field === 'limit') return limitInWords({ limit: version.limit ?? null, unit: version.unit ?? '' });
-  if (field === 'direction') return version.direction ?? '';
+function inWords(version: Partial<Criterion>, field: keyof Criterion, groups: Groups): string {
+  const { limit = null, unit = '', steps = null, shape, levels, groupId } = version;
+  if (field === 'limit') return limitInWords({ limit, unit, steps });
+  if (field === 'shape') return shape ? shapeInWords(shape) : '';
+  if (field === 'steps') return (steps ?? []).join(', ');
+  if (field === 'groupId') return groups.items.find(({ id }) => id === groupId)?.name ?? 'none';
   if (field !== 'levels') return String(version[field] ?? '');
-  return version.levels?.mode === 'fixed'
-    ? `${figureInWords(version.levels.worst)} to ${figureInWords(version.levels.best)}`
+  return levels?.mode === 'fixed'
+    ? `${figureInWords(levels.worst)} to ${figureInWords(levels.best)}`
     : 'from the candidates';
 }

@@ -2,28 +2,38 @@ import type { UseFormReturn } from 'react-hook-form';
 import { asTypedNumber, NumberField, Segmented, TextField } from '#components/ui/index.ts';
 import type { Criterion } from '#contract/criterion.ts';
 import type { WeighedCriterion } from '#contract/ranking.ts';
-import type { CriterionFields } from './criterion-form.ts';
+import { stepInWords } from '#contract/rating.ts';
+import { keepsUnit, type CriterionFields } from './criterion-form.ts';
+import { GroupField } from './GroupField.tsx';
+import { RatingSteps } from './RatingSteps.tsx';
+import type { Groups } from './use-groups.ts';
 import { figureInWords } from './words.ts';
 
 interface FieldsetProps {
   form: UseFormReturn<CriterionFields>;
   values: CriterionFields;
   criterion: Criterion;
+  groups: Groups;
   /** What its value runs between now; undefined before its figures have been read. */
   span: WeighedCriterion['span'] | undefined;
   /** A field was left, or a choice made. */
   onLeave: () => void;
 }
 
-/** Name, unit, direction, levels and limit of a criterion. */
+/** Name, unit, a rating's steps, group, direction, levels and limit of a criterion. */
 export function CriterionFieldset(props: FieldsetProps) {
   const { form, criterion, onLeave } = props;
   const { errors } = form.formState;
   return (
     <div className="cr-fields">
       <TextField label="Name" error={errors.name} {...form.register('name', { onBlur: onLeave })} />
-      {criterion.source === 'computed' ? (
-        <TextField label="Unit" value={criterion.unit} readOnly hint="Computed: the unit is fixed." />
+      {keepsUnit(criterion) ? (
+        <TextField
+          label="Unit"
+          value={criterion.source === 'rating' ? 'rating, 0 to 4' : criterion.unit}
+          readOnly
+          hint={criterion.source === 'rating' ? 'A rating has its steps.' : 'Computed: the unit is fixed.'}
+        />
       ) : (
         <TextField
           label="Unit"
@@ -34,6 +44,16 @@ export function CriterionFieldset(props: FieldsetProps) {
       )}
       {criterion.source !== 'text' && (
         <>
+          {criterion.source === 'rating' && <StepNames {...props} />}
+          <GroupField
+            groups={props.groups}
+            value={props.values.group}
+            error={errors.group?.message}
+            onChange={(group) => {
+              form.setValue('group', group);
+              onLeave();
+            }}
+          />
           <DirectionChoice {...props} />
           <LevelFields {...props} />
           <LimitFields {...props} />
@@ -41,6 +61,21 @@ export function CriterionFieldset(props: FieldsetProps) {
       )}
     </div>
   );
+}
+
+function StepNames({ form, values, onLeave }: FieldsetProps) {
+  return (
+    <RatingSteps
+      fieldOf={(step) => form.register(`steps.${step}`, { onBlur: onLeave })}
+      errorOf={(step) => form.formState.errors.steps?.[step]}
+      worstFirst={values.direction === 'more'}
+    />
+  );
+}
+
+/** What a typed step of a rating is called. */
+function readingOf({ steps }: Criterion, typed: number | string | undefined): string | undefined {
+  return typeof typed === 'number' ? (stepInWords({ steps }, typed) ?? undefined) : undefined;
 }
 
 function DirectionChoice({ form, values, onLeave }: FieldsetProps) {
@@ -102,12 +137,14 @@ function LevelFields({ form, values, criterion, span, onLeave }: FieldsetProps) 
           <NumberField
             label="Worst level, value 0"
             unit={criterion.unit}
+            reading={readingOf(criterion, values.worst)}
             error={errors.worst}
             {...form.register('worst', { ...asTypedNumber, onBlur: onLeave })}
           />
           <NumberField
             label="Best level, value 1"
             unit={criterion.unit}
+            reading={readingOf(criterion, values.best)}
             error={errors.best}
             {...form.register('best', { ...asTypedNumber, onBlur: onLeave })}
           />
@@ -144,6 +181,7 @@ function LimitFields({ form, values, criterion, onLeave }: FieldsetProps) {
         <NumberField
           label={values.limitKind === 'at-least' ? 'At least' : 'At most'}
           unit={criterion.unit}
+          reading={readingOf(criterion, values.limitValue)}
           error={form.formState.errors.limitValue}
           {...form.register('limitValue', { ...asTypedNumber, onBlur: onLeave })}
         />

@@ -82,7 +82,7 @@ function EffectRow({ row, sheet, earlier, lettered }: EffectRowProps) {
         <span className="sub">
           {leads && <b className="lead-word">Leads </b>}
           {row.kind === 'ranked' && moved(row.rank, earlier)}
-          {row.kind === 'incomplete' && 'incomplete'}
+          {row.kind === 'incomplete' && `Incomplete, rank could be ${rankRange(row)}`}
         </span>
       </th>
       <td>

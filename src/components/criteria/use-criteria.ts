@@ -11,6 +11,7 @@ export interface Criteria {
   take: (criterion: Criterion) => void;
   move: (criterion: Criterion, position: number) => Promise<void>;
   remove: (criterion: Criterion) => Promise<boolean>;
+  again: () => void;
   /** A move or removal that did not go through. */
   failure: ApiError | null;
   forget: () => void;
@@ -26,7 +27,9 @@ export function useCriteria(studyId: string, initial: readonly Criterion[]): Cri
   const [failure, setFailure] = useState<ApiError | null>(null);
   const hear = useCallback(
     (event: LiveEvent) => {
-      if (event.kind === 'gap' || event.change.objects.includes('criterion')) void mutate();
+      // A group that is taken away leaves its criteria in none.
+      const ours = ['criterion', 'criterion-group'];
+      if (event.kind === 'gap' || event.change.objects.some((object) => ours.includes(object))) void mutate();
     },
     [mutate],
   );
@@ -58,6 +61,7 @@ export function useCriteria(studyId: string, initial: readonly Criterion[]): Cri
     },
     remove: ({ id, version }) =>
       attempt(() => send<undefined>('DELETE', `${address}/${id}`, undefined, { ifMatch: `"${version}"` })),
+    again: () => void mutate(),
     failure,
     forget: () => setFailure(null),
   };

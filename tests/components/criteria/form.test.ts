@@ -1,12 +1,29 @@
 import { describe, expect, test } from 'vitest';
-import { changesOf, fieldsOf, readCriterion } from '#components/criteria/criterion-form.ts';
-import { criteriaFinding, criteriaWhy, levelsInWords, limitInWords } from '#components/criteria/words.ts';
+import { changesOf, fieldsOf, readCriterion, settingsNow } from '#components/criteria/criterion-form.ts';
+import {
+  criteriaFinding,
+  criteriaWhy,
+  levelsInWords,
+  limitInWords,
+  shapeInWords,
+  sourceInWords,
+} from '#components/criteria/words.ts';
 import { presentRanking } from '#contract/ranking-rows.ts';
+import type { Criterion } from '#contract/criterion.ts';
 import { COST, criteria, DAYS, four, trialModel } from '../ranking/trial.ts';
 
 const [cost, days] = criteria;
 if (!cost || !days) throw new Error('the trial has two criteria');
 const fields = fieldsOf(cost);
+const rating: Criterion = {
+  ...days,
+  id: '00000000-0000-7000-8000-0000000000c3',
+  name: 'Road',
+  unit: '',
+  source: 'rating',
+  steps: ['Track', 'Gravel', 'Two lanes', 'Trunk road', 'Motorway'],
+  levels: { mode: 'fixed', worst: 0, best: 4 },
+};
 
 describe('a criterion’s form', () => {
   test('reads back what it was filled with, and changes nothing', () => {
@@ -22,6 +39,27 @@ describe('a criterion’s form', () => {
       levels: { mode: 'candidates' },
       limit: null,
     });
+  });
+
+  test('a rating’s form holds its steps, and sends them whole when one is renamed', () => {
+    const form = fieldsOf(rating);
+    const read = readCriterion(form);
+    expect(read.ok && changesOf(rating, read.settings)).toEqual({});
+    const renamed = readCriterion({ ...form, steps: form.steps.with(1, 'Broken gravel'), unit: 'x' });
+    expect(renamed.ok && changesOf(rating, renamed.settings)).toEqual({
+      steps: ['Track', 'Broken gravel', 'Two lanes', 'Trunk road', 'Motorway'],
+    });
+  });
+
+  test('shape and group are sent, and what stood there is kept to go back to', () => {
+    const groupId = '00000000-0000-7000-8000-0000000000d1';
+    const shape = { kind: 'exponential', curvature: 2 } as const;
+    const read = readCriterion({ ...fields, group: groupId, shape });
+    const change = read.ok ? changesOf(cost, read.settings) : {};
+    expect(change).toEqual({ groupId, shape });
+    expect(settingsNow(cost, change)).toEqual({ groupId: null, shape: { kind: 'straight' } });
+    const out = readCriterion({ ...fieldsOf({ ...cost, groupId }), group: '' });
+    expect(out.ok && changesOf({ ...cost, groupId }, out.settings)).toEqual({ groupId: null });
   });
 
   test('a computed criterion keeps its unit whatever the field says', () => {
@@ -57,13 +95,46 @@ describe('in words', () => {
   });
 
   test('levels and limits, and that equal candidates count nothing', () => {
-    expect(levelsInWords({ levels: cost.levels, span: { kind: 'span', worst: 400, best: 200 } })).toBe(
-      'fixed, 400 to 200',
+    const span = { kind: 'span', worst: 400, best: 200 } as const;
+    expect(levelsInWords({ ...cost, span })).toBe('fixed, 400 to 200');
+    expect(levelsInWords({ ...cost, span, shape: { kind: 'exponential', curvature: -1.5 } })).toBe(
+      'fixed, 400 to 200, bent with curvature −1.5',
     );
-    expect(levelsInWords({ levels: { mode: 'candidates' }, span: { kind: 'flat', figure: 3 } })).toBe(
-      'candidates, all equal: value 0 for all',
-    );
+    expect(
+      levelsInWords({ ...cost, levels: { mode: 'candidates' }, span: { kind: 'flat', figure: 3 } }),
+    ).toBe('candidates, all equal: value 0 for all');
     expect(limitInWords(cost)).toBe('≤ 390 M€');
     expect(limitInWords(days)).toBe('none');
   });
+
+  test('a rating’s levels, limit and source by its steps', () => {
+    const fit = { ...rating, limit: { kind: 'at-least', value: 2 } as const };
+    expect(limitInWords(fit)).toBe('≥ Two lanes (2)');
+    expect(levelsInWords({ ...fit, span: { kind: 'span', worst: 0, best: 4 } })).toBe(
+      'fixed, Track (0) to Motorway (4)',
+    );
+    expect(sourceInWords(fit)).toBe('rating, Track to Motorway');
+    expect(criteriaWhy([...criteria, rating])).toMatch('2 entered and 1 rated');
+  });
+
+  test('a shape by where its points lie in the criterion’s unit', () => {
+    const levels = { span: { worst: 400, best: 200 }, unit: 'M€' };
+    expect(shapeInWords({ kind: 'straight' }, levels)).toBe('straight between');
+    expect(shapeInWords({ kind: 'exponential', curvature: 2 }, levels)).toBe('bent with curvature 2');
+    const knots = (...inner: [number, number][]) =>
+      ({ kind: 'piecewise', knots: [[0, 0], ...inner, [1, 1]] as [number, number][] }) as const;
+    expect(shapeInWords(knots([0.25, 0.5], [0.75, 0.9]), levels)).toBe(
+      'through 0.500 at 350 M€ and 0.900 at 250 M€',
+    );
+    expect(shapeInWords(knots([0.25, 0.5]))).toBe('through 3 points');
+    expect(shapeInWords(knots(), levels)).toBe('through 2 points');
+  });
+});
+
+test.each([
+  ['a step without a name', 'steps.3', { steps: ['a', 'b', 'c', '', 'e'] }],
+  ['two steps of one name', 'steps.0', { steps: ['a', 'b', 'c', 'A', 'e'] }],
+])('says beside its field: %s', (_, field, change) => {
+  const read = readCriterion({ ...fieldsOf(rating), ...change });
+  expect(read.ok ? [] : read.errors.map((error) => error.field)).toEqual([field]);
 });
