@@ -6,11 +6,12 @@ import { ChartPatterns } from '#components/ui/chart.tsx';
 import { Finding } from '#components/ui/Finding.tsx';
 import { Segmented } from '#components/ui/Segmented.tsx';
 import { Stale } from '#components/ui/States.tsx';
-import { MOST_POINTS } from '#contract/points.ts';
+import { evenStatement } from '#components/weights/statement.ts';
 import { countsInWords, findingText, rankingFinding, rankingWhy } from '#contract/ranking-words.ts';
 import type { RankingStart, RankingState } from '#contract/ranking.ts';
 import { sheetOf } from './columns.ts';
 import { exportLabel, rankingCsv, saveCsv } from './export.ts';
+import { fileNameOf } from './file-name.ts';
 import { BeforeRanks, ConnectionNote, EstimatesCaution, FiguresNotRead } from './Notices.tsx';
 import { RankingSheets, type RankingAddress } from './RankingSheets.tsx';
 import { RankingViews } from './RankingViews.tsx';
@@ -45,8 +46,7 @@ export function RankingScreen({ studyId, title, start, viewer, address, nonce }:
     const all = model.rows.map(({ site }) => model.figures.sites[site]?.siteId ?? '');
     saveCsv(`${fileNameOf(title)} ranking.csv`, rankingCsv(model, shown.current?.() ?? all));
   };
-  const even = (): void =>
-    weights.give(Object.fromEntries(ranking.criteria.map(({ id }) => [id, MOST_POINTS])));
+  const even = (): void => weights.state(evenStatement(ranking.criteria));
   const onEven = locked === undefined ? even : undefined;
   const beforeRanks = (state: Exclude<RankingState, 'ranked'>) => (
     <BeforeRanks state={state} studyId={studyId} onEven={onEven} />
@@ -85,7 +85,7 @@ export function RankingScreen({ studyId, title, start, viewer, address, nonce }:
           onView={setView}
         >
           {ranking.state !== 'ranked' && beforeRanks(ranking.state)}
-          <RankingSheets {...{ studyId, live, sheet, address, nonce, locked, shown, onShown, whose, bar }} />
+          <RankingSheets {...{ studyId, live, sheet, address, nonce, locked, shown, onShown, bar }} />
         </RankingViews>
       ) : (
         <>
@@ -127,6 +127,3 @@ function RankingHead({ live, onExport }: { live: LiveRanking; onExport: (() => v
     </>
   );
 }
-
-/** A title without what file systems refuse. */
-const fileNameOf = (title: string): string => title.replace(/[^\p{L}\p{N}_-]+/gu, ' ').trim() || 'study';

@@ -2,7 +2,6 @@ import { lazy, Suspense, useDeferredValue, useMemo, useState, type ReactNode, ty
 import { useAddressParam } from '#components/live/address.ts';
 import { useStep } from '#components/live/hooks.ts';
 import { Button } from '#components/ui/Button.tsx';
-import { Panel } from '#components/ui/Finding.tsx';
 import { formatNumber } from '#contract/format.ts';
 import { rowOf, rowsOf, type RankingRow } from '#contract/ranking-rows.ts';
 import { ColumnChooser } from './ColumnChooser.tsx';
@@ -10,10 +9,9 @@ import type { Sheet } from './columns.ts';
 import { Contributions } from './Contributions.tsx';
 import { RankingList } from './RankingList.tsx';
 import { RankingTable } from './RankingTable.tsx';
-import { SaveNote } from './SaveNote.tsx';
 import type { LiveRanking } from './use-ranking.ts';
 import { useBarWidth, useGridFits } from './use-wide.ts';
-import { WeightSliders } from './WeightSliders.tsx';
+import { WeightPanel } from './WeightPanel.tsx';
 
 const RankingGrid = lazy(() => import('./RankingGrid.tsx'));
 
@@ -37,7 +35,6 @@ interface SheetsProps {
   /** Asks the grid for the sites in sight; null without one. */
   shown: RefObject<(() => string[]) | null>;
   onShown: (ask: (() => string[]) | null) => void;
-  whose: 'study' | 'mine';
   /** What stands at the left of the columns and filter buttons. */
   bar: ReactNode;
 }
@@ -46,7 +43,7 @@ const LIST_STEP = 50;
 
 /** The ranking itself, as grid, table or list, with the weights and the chosen site's terms under it. */
 export function RankingSheets(props: SheetsProps) {
-  const { studyId, live, sheet, address, nonce, locked, shown, onShown, whose, bar } = props;
+  const { studyId, live, sheet, address, nonce, locked, shown, onShown, bar } = props;
   const { ranking, weights } = live;
   // The sliders must not wait for a long grid: it follows a moment later.
   const model = useDeferredValue(live.model);
@@ -129,25 +126,7 @@ export function RankingSheets(props: SheetsProps) {
         )}
       </div>
       <div className="rk-panels">
-        <Panel
-          title={whose === 'mine' ? 'Your weights' : 'The study’s weights'}
-          caption={
-            whose === 'mine'
-              ? 'They move this screen alone; nobody else’s ranking changes.'
-              : 'They move everyone’s ranking at once.'
-          }
-        >
-          <WeightSliders columns={sheet.columns} set={weights} locked={locked} />
-          {locked === undefined && (
-            <div className="mt-3">
-              <SaveNote
-                set={weights}
-                what={whose === 'mine' ? 'your weights' : 'the study’s weights'}
-                criteria={ranking.criteria}
-              />
-            </div>
-          )}
-        </Panel>
+        <WeightPanel studyId={studyId} columns={sheet.columns} set={weights} locked={locked} />
         {inView && <Contributions row={inView} sheet={sheet} studyId={studyId} />}
       </div>
     </>

@@ -1,20 +1,66 @@
-import { useId, useState } from 'react';
-import { formatNumber, readTypedNumber } from '#contract/format.ts';
+import { useId, useMemo, useState, type ReactNode } from 'react';
+import { formatFull, formatNumber, readTypedNumber } from '#contract/format.ts';
 import { MOST_POINTS } from '#contract/points.ts';
+import { weighing } from '#contract/weighing.ts';
+import type { WeightsOf } from '#contract/weights.ts';
+import { ButtonLink } from '#components/ui/Button.tsx';
 import { KeyLetter } from '#components/ui/States.tsx';
+import { useNames } from '#components/weights/use-names.ts';
+import { METHOD_WAYS, nameIn, unjudgedInWords } from '#components/weights/words.ts';
 import type { CriterionColumn } from './columns.ts';
 import type { WeightSet } from './use-weight-set.ts';
 
 interface WeightSlidersProps {
+  studyId: string;
   columns: readonly CriterionColumn[];
   set: WeightSet;
   /** Why these weights cannot be changed here; undefined where they can. */
   locked?: string | undefined;
 }
 
-/** Points for every criterion, by slider and by number; the share they come to stands beside them. */
-export function WeightSliders({ columns, set, locked }: WeightSlidersProps) {
+/** Weights beside a ranking: by points with a slider for each; those set another way are shown, and set in Criteria. */
+export function WeightSliders({ studyId, columns, set, locked }: WeightSlidersProps) {
   const note = useId();
+  const weighed = useMemo(() => columns.map(({ criterion }) => criterion), [columns]);
+  const names = useNames(studyId, weighed);
+  const { levels } = useMemo(() => weighing(weighed, set.statement), [weighed, set.statement]);
+  const byPoints = set.statement.method === 'points';
+  const field = (id: string, name: string) => (
+    <PointsField
+      name={name}
+      points={set.points[id] ?? 0}
+      onChange={(points) => set.give({ [id]: points })}
+      locked={locked !== undefined}
+      describedBy={locked ? note : undefined}
+    />
+  );
+  const [top, ...groups] = levels;
+  const rowsOf = (ids: readonly string[], grouped: boolean): ReactNode[] =>
+    ids.flatMap((id) => {
+      const inside = groups.find(({ groupId }) => groupId === id);
+      if (inside) {
+        const row = (
+          <tr key={id} className="cr-group">
+            <th scope="rowgroup">{nameIn(names, id)}</th>
+            {byPoints && <td>{field(id, `the group ${nameIn(names, id)}`)}</td>}
+            <td className="num">{formatNumber(top?.weights?.[id] ?? 0, 2)}</td>
+          </tr>
+        );
+        return [row, ...rowsOf(inside.ids, true)];
+      }
+      const column = columns.find(({ criterion }) => criterion.id === id);
+      if (!column) return [];
+      const { criterion, letter, weight, weightDecimals } = column;
+      return [
+        <tr key={id} className={grouped ? 'cr-grouped' : undefined}>
+          <th scope="row">
+            <KeyLetter letter={letter} /> {criterion.name}
+          </th>
+          {byPoints && <td>{field(id, criterion.name)}</td>}
+          <td className="num">{formatNumber(weight, weightDecimals)}</td>
+        </tr>,
+      ];
+    });
   return (
     <>
       {locked && (
@@ -26,41 +72,35 @@ export function WeightSliders({ columns, set, locked }: WeightSlidersProps) {
         <thead>
           <tr>
             <th scope="col">Criterion</th>
-            <th scope="col">
-              Points<span className="unit">0 to {MOST_POINTS}</span>
-            </th>
+            {byPoints && (
+              <th scope="col">
+                Points<span className="unit">0 to {MOST_POINTS}</span>
+              </th>
+            )}
             <th scope="col" className="num">
               Weight<span className="unit">sum 1</span>
             </th>
           </tr>
         </thead>
-        <tbody>
-          {columns.map(({ criterion, letter, weight, weightDecimals }) => (
-            <tr key={criterion.id}>
-              <th scope="row">
-                <KeyLetter letter={letter} /> {criterion.name}
-              </th>
-              <td>
-                <PointsField
-                  name={criterion.name}
-                  points={set.points[criterion.id] ?? 0}
-                  onChange={(points) => set.give({ [criterion.id]: points })}
-                  locked={locked !== undefined}
-                  describedBy={locked ? note : undefined}
-                />
-              </td>
-              <td className="num">{formatNumber(weight, weightDecimals)}</td>
-            </tr>
-          ))}
-        </tbody>
+        <tbody>{rowsOf(top?.ids ?? [], false)}</tbody>
       </table>
+      <p className="caption pt-2">
+        {unjudgedInWords(levels, names)} {!byPoints && <>Set by {METHOD_WAYS[set.statement.method]}. </>}
+        <ButtonLink kind="text" size="small" href={criteriaAddress(studyId, set.kept.weights)}>
+          {byPoints ? 'Other ways to set weights' : 'Change them in Criteria'}
+        </ButtonLink>
+      </p>
     </>
   );
 }
 
+const criteriaAddress = (studyId: string, whose: WeightsOf): string =>
+  `/studies/${studyId}/criteria${whose === 'mine' ? '?weights=mine' : ''}`;
+
 interface PointsFieldProps {
   name: string;
-  points: number;
+  /** Undefined where none have been given yet. */
+  points: number | undefined;
   onChange: (points: number) => void;
   locked: boolean;
   describedBy?: string | undefined;
@@ -90,7 +130,7 @@ export function PointsField({ name, points, onChange, locked, describedBy }: Poi
           min="0"
           max={MOST_POINTS}
           step="1"
-          value={points}
+          value={points ?? 0}
           aria-disabled={locked || undefined}
           aria-label={`Points for ${name}`}
           aria-describedby={describedBy}
@@ -105,7 +145,9 @@ export function PointsField({ name, points, onChange, locked, describedBy }: Poi
           type="text"
           inputMode="decimal"
           className="wt-number num"
-          value={typed ?? String(points)}
+          value={typed ?? shortly(points)}
+          title={points === undefined ? undefined : formatFull(points)}
+          placeholder={points === undefined ? '–' : undefined}
           readOnly={locked}
           aria-label={`Points for ${name}, as a number`}
           aria-invalid={error !== null || undefined}
@@ -125,3 +167,7 @@ export function PointsField({ name, points, onChange, locked, describedBy }: Poi
     </>
   );
 }
+
+/** Points that came of a mean have many digits: two decimals stand in the field, all of them in its tooltip. */
+const shortly = (points: number | undefined): string =>
+  points === undefined ? '' : String(Math.round(points * 100) / 100);

@@ -11,6 +11,9 @@ import { useWeightSet, type WeightSet } from './use-weight-set.ts';
 /** Changes that move no figure: who is a member, weights, which are read on their own, and what-ifs. */
 const APART = new Set(['weights', 'own-weights', 'what-if', 'member', 'study']);
 
+/** What weights are said of. */
+const WEIGHED = new Set(['criterion', 'criterion-group']);
+
 /** Rows drawn as plain HTML; the same number the page drew. */
 const DRAWN_ROWS = 50;
 
@@ -41,8 +44,9 @@ export function useRanking(studyId: string, start: RankingStart, whose: WeightsO
     (event: LiveEvent) => {
       const objects = event.kind === 'gap' ? null : event.change.objects;
       if (!objects || objects.some((object) => !APART.has(object))) void mutate();
-      if (!objects || objects.includes('weights') || objects.includes('criterion')) refreshStudy();
-      if (!objects || objects.includes('own-weights') || objects.includes('criterion')) refreshMine();
+      const reweighed = !objects || objects.some((object) => WEIGHED.has(object));
+      if (reweighed || objects.includes('weights')) refreshStudy();
+      if (reweighed || objects.includes('weights') || objects.includes('own-weights')) refreshMine();
     },
     [mutate, refreshStudy, refreshMine],
   );

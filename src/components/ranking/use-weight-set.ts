@@ -2,7 +2,7 @@ import { useCallback, useEffect, useMemo, useState } from 'react';
 import { ApiError, send } from '#components/live/api.ts';
 import { useApi } from '#components/live/hooks.ts';
 import { announceKept, announceSaved, announceSaving, type Saved } from '#components/live/saved.ts';
-import type { Weights, WeightStatement } from '#contract/weights.ts';
+import type { WeightMethod, Weights, WeightsDraft, WeightStatement } from '#contract/weights.ts';
 
 export type Points = Readonly<Record<string, number>>;
 
@@ -25,6 +25,13 @@ export interface WeightSet {
   give: (points: Points) => void;
   /** Says the whole set anew, by any method. */
   state: (statement: WeightStatement) => void;
+  /** Statements that lack something yet, one a method: kept on this screen alone and asked for before they are lost. */
+  held: Held;
+  hold: (method: WeightMethod, statement: WeightStatement | null) => void;
+  /** Shows one's own set to the study's members, or hides it again. */
+  share: (shared: boolean) => void;
+  /** Writes why the study's weights are as they are. */
+  explain: (reason: string) => void;
   keepTheirs: () => void;
   putMine: () => void;
   retry: () => void;
@@ -32,9 +39,13 @@ export interface WeightSet {
   refresh: () => void;
 }
 
+export type Held = Readonly<Partial<Record<WeightMethod, WeightStatement>>>;
+
 /** What was typed, and the version of the set it was typed over: a newer one must not be written over unseen. */
 interface Draft {
   statement: WeightStatement;
+  /** What else of the set was changed with it. */
+  also: Pick<WeightsDraft, 'shared' | 'reason'>;
   base: number;
 }
 
@@ -44,21 +55,20 @@ const PAUSE_MS = 600;
 export function useWeightSet(studyId: string, initial: Weights): WeightSet {
   const address = `/api/v1/studies/${studyId}/weights?weights=${initial.weights}`;
   const { data, mutate } = useApi<Weights>(address, { fallbackData: initial });
-  const held = data ?? initial;
+  const kept = data ?? initial;
   const [draft, setDraft] = useState<Draft | null>(null);
   const [saving, setSaving] = useState<Saving>({ kind: 'saved' });
+  const [held, setHeld] = useState<Held>({});
 
   const save = useCallback(
     async (sent: Draft) => {
       setSaving({ kind: 'saving' });
       announceSaving();
       try {
-        const body = { ...sent.statement, version: sent.base };
+        const body: WeightsDraft = { ...sent.statement, ...sent.also, version: sent.base };
         const { revision, savedAt, ...answer } = await send<Weights & Saved>('PUT', address, body);
         await mutate(answer, { revalidate: false });
-        setDraft((now) =>
-          now === sent || now === null ? null : { statement: now.statement, base: answer.version },
-        );
+        setDraft((now) => (now === sent || now === null ? null : { ...now, base: answer.version }));
         setSaving({ kind: 'saved' });
         announceSaved({ revision, savedAt });
       } catch (error) {
@@ -80,20 +90,28 @@ export function useWeightSet(studyId: string, initial: Weights): WeightSet {
     const timer = setTimeout(() => void save(draft), PAUSE_MS);
     return () => clearTimeout(timer);
   }, [draft, idle, save]);
-  useLeaveGuard(draft !== null);
+  useLeaveGuard(draft !== null || Object.keys(held).length > 0);
   const refresh = useCallback(() => void mutate(), [mutate]);
 
-  const heldStatement = useMemo(() => statementOf(held), [held]);
-  const statement = draft?.statement ?? heldStatement;
-  const state = (next: WeightStatement): void =>
-    setDraft((now) => ({ statement: next, base: now?.base ?? held.version }));
+  const keptStatement = useMemo(() => statementOf(kept), [kept]);
+  const statement = draft?.statement ?? keptStatement;
+  const change = (next: WeightStatement, also: Draft['also'] = {}): void =>
+    setDraft((now) => ({
+      statement: next,
+      also: { ...now?.also, ...also },
+      base: now?.base ?? kept.version,
+    }));
   return {
-    kept: held,
+    kept,
     statement,
     points: statement.points,
     saving: draft && saving.kind === 'saved' ? { kind: 'waiting' } : saving,
-    give: (points) => state({ ...statement, points: { ...statement.points, ...points } }),
-    state,
+    give: (points) => change({ ...statement, points: { ...statement.points, ...points } }),
+    state: (next) => change(next),
+    held,
+    hold: (method, next) => setHeld((now) => withHeld(now, method, next)),
+    share: (shared) => change(statement, { shared }),
+    explain: (reason) => change(statement, { reason }),
     keepTheirs: () => {
       if (saving.kind === 'conflict') void mutate(saving.theirs, { revalidate: false });
       setDraft(null);
@@ -116,6 +134,11 @@ const statementOf = ({ method, points, order, judgements }: Weights): WeightStat
   order,
   judgements,
 });
+
+function withHeld(held: Held, method: WeightMethod, statement: WeightStatement | null): Held {
+  const { [method]: _, ...rest } = held;
+  return statement ? { ...rest, [method]: statement } : rest;
+}
 
 /** The browser asks before it leaves a page on which something is not saved yet. */
 function useLeaveGuard(unsaved: boolean): void {
