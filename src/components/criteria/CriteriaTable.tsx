@@ -3,9 +3,12 @@ import type { WeightSet } from '#components/ranking/use-weight-set.ts';
 import { PointsField } from '#components/ranking/WeightSliders.tsx';
 import { IconButton } from '#components/ui/Button.tsx';
 import { KeyLetter } from '#components/ui/States.tsx';
+import { nameIn, type Names } from '#components/weights/words.ts';
 import type { Criterion } from '#contract/criterion.ts';
 import { formatNumber } from '#contract/format.ts';
 import { MOST_POINTS } from '#contract/points.ts';
+import type { WeightLevel } from '#contract/weights.ts';
+import { tableRows, type TableRow } from './table-rows.ts';
 import { directionInWords, levelsInWords, limitInWords, sourceInWords } from './words.ts';
 
 interface CriteriaTableProps {
@@ -13,6 +16,11 @@ interface CriteriaTableProps {
   items: readonly Criterion[];
   columns: readonly CriterionColumn[];
   weights: WeightSet;
+  levels: readonly WeightLevel[];
+  /** Of criteria and groups. */
+  names: Names;
+  /** Whether weights are set by points, here in the table. */
+  pointsShown: boolean;
   weightsLocked: string | undefined;
   inputsLocked: string | undefined;
   chosen: string | null;
@@ -20,9 +28,9 @@ interface CriteriaTableProps {
   onMove: (criterion: Criterion, position: number) => void;
 }
 
-/** Every criterion with its source, levels, limit and points. */
+/** Every criterion, under its group, with its source, levels, limit and weight. */
 export function CriteriaTable(props: CriteriaTableProps) {
-  const { items, columns, weightsLocked } = props;
+  const { items, columns, pointsShown, weightsLocked } = props;
   return (
     <>
       {weightsLocked && (
@@ -41,9 +49,11 @@ export function CriteriaTable(props: CriteriaTableProps) {
               <th scope="col" className="cr-wide-only">
                 Limit
               </th>
-              <th scope="col">
-                Points<span className="unit">0 to {MOST_POINTS}</span>
-              </th>
+              {pointsShown && (
+                <th scope="col">
+                  Points<span className="unit">0 to {MOST_POINTS}</span>
+                </th>
+              )}
               <th scope="col" className="num">
                 Weight<span className="unit">sum 1</span>
               </th>
@@ -53,14 +63,18 @@ export function CriteriaTable(props: CriteriaTableProps) {
             </tr>
           </thead>
           <tbody>
-            {items.map((criterion) => (
-              <CriterionRow
-                key={criterion.id}
-                {...props}
-                criterion={criterion}
-                column={columns.find((one) => one.criterion.id === criterion.id)}
-              />
-            ))}
+            {tableRows(items).map((row) =>
+              row.kind === 'group' ? (
+                <GroupRow key={row.groupId} {...props} groupId={row.groupId} />
+              ) : (
+                <CriterionRow
+                  key={row.criterion.id}
+                  {...props}
+                  row={row}
+                  column={columns.find((one) => one.criterion.id === row.criterion.id)}
+                />
+              ),
+            )}
           </tbody>
         </table>
       </div>
@@ -68,17 +82,48 @@ export function CriteriaTable(props: CriteriaTableProps) {
   );
 }
 
+/** A group's own points and weight; its criteria follow. */
+function GroupRow({ groupId, ...props }: CriteriaTableProps & { groupId: string }) {
+  const { names, levels, weights, pointsShown, weightsLocked } = props;
+  const name = nameIn(names, groupId);
+  const weight = levels[0]?.weights?.[groupId] ?? 0;
+  return (
+    <tr className="cr-group">
+      <th scope="rowgroup">
+        <span className="name">{name}</span>
+        <span className="sub">group; its weight is shared out among its criteria</span>
+      </th>
+      <td className="cr-wide-only" />
+      <td className="cr-wide-only" />
+      {pointsShown && (
+        <td>
+          <PointsField
+            name={`the group ${name}`}
+            points={weights.points[groupId] ?? 0}
+            onChange={(points) => weights.give({ [groupId]: points })}
+            locked={weightsLocked !== undefined}
+            describedBy={weightsLocked ? 'weights-locked' : undefined}
+          />
+        </td>
+      )}
+      <td className="num">{formatNumber(weight, 2)}</td>
+      <td />
+    </tr>
+  );
+}
+
 interface RowProps extends CriteriaTableProps {
-  criterion: Criterion;
+  row: Extract<TableRow, { kind: 'criterion' }>;
   /** Undefined for a text criterion, and for one whose figures have not been read yet. */
   column: CriterionColumn | undefined;
 }
 
-function CriterionRow({ criterion, column, ...props }: RowProps) {
-  const { weights, weightsLocked, chosen, onChoose } = props;
+function CriterionRow({ row, column, ...props }: RowProps) {
+  const { weights, weightsLocked, pointsShown, chosen, onChoose } = props;
+  const { criterion } = row;
   const { id, name, unit } = criterion;
   return (
-    <tr aria-selected={id === chosen}>
+    <tr aria-selected={id === chosen} className={row.grouped ? 'cr-grouped' : undefined}>
       <th scope="row">
         <button type="button" className="cr-open" aria-pressed={id === chosen} onClick={() => onChoose(id)}>
           {column && <KeyLetter letter={column.letter} />}
@@ -94,43 +139,45 @@ function CriterionRow({ criterion, column, ...props }: RowProps) {
       </th>
       <td className="cr-wide-only">{column ? levelsInWords(column.criterion) : '–'}</td>
       <td className="cr-wide-only">{criterion.source === 'text' ? '–' : limitInWords(criterion)}</td>
-      <td>
-        {criterion.source === 'text' ? (
-          '–'
-        ) : (
-          <PointsField
-            name={name}
-            points={weights.points[id] ?? 0}
-            onChange={(points) => weights.give({ [id]: points })}
-            locked={weightsLocked !== undefined}
-            describedBy={weightsLocked ? 'weights-locked' : undefined}
-          />
-        )}
-      </td>
+      {pointsShown && (
+        <td>
+          {criterion.source === 'text' ? (
+            '–'
+          ) : (
+            <PointsField
+              name={name}
+              points={weights.points[id] ?? 0}
+              onChange={(points) => weights.give({ [id]: points })}
+              locked={weightsLocked !== undefined}
+              describedBy={weightsLocked ? 'weights-locked' : undefined}
+            />
+          )}
+        </td>
+      )}
       <td className="num">{column ? formatNumber(column.weight, column.weightDecimals) : '–'}</td>
       <td className="cr-order">
-        <OrderButtons criterion={criterion} {...props} />
+        <OrderButtons row={row} {...props} />
       </td>
     </tr>
   );
 }
 
-function OrderButtons({ criterion, items, inputsLocked, onMove }: Omit<RowProps, 'column'>) {
+function OrderButtons({ row, inputsLocked, onMove }: Omit<RowProps, 'column'>) {
   if (inputsLocked) return null;
-  const place = items.findIndex(({ id }) => id === criterion.id);
+  const { criterion, up, down } = row;
   return (
     <>
       <IconButton
         icon="up"
         label={`Move ${criterion.name} up`}
-        aria-disabled={place === 0 || undefined}
-        onClick={() => place > 0 && onMove(criterion, place - 1)}
+        aria-disabled={up === null || undefined}
+        onClick={() => up !== null && onMove(criterion, up)}
       />
       <IconButton
         icon="down"
         label={`Move ${criterion.name} down`}
-        aria-disabled={place === items.length - 1 || undefined}
-        onClick={() => place < items.length - 1 && onMove(criterion, place + 1)}
+        aria-disabled={down === null || undefined}
+        onClick={() => down !== null && onMove(criterion, down)}
       />
     </>
   );
