@@ -1,6 +1,7 @@
 import { drizzle, type NodePgDatabase, type NodePgTransaction } from 'drizzle-orm/node-postgres';
 import type { ExtractTablesWithRelations } from 'drizzle-orm';
 import pg from 'pg';
+import * as ascent from './schema/ascent.ts';
 import * as auth from './schema/auth.ts';
 import * as criterion from './schema/criterion.ts';
 import * as mail from './schema/mail.ts';
@@ -8,7 +9,7 @@ import * as record from './schema/record.ts';
 import * as site from './schema/site.ts';
 import * as study from './schema/study.ts';
 
-export const schema = { ...auth, ...study, ...site, ...criterion, ...record, ...mail };
+export const schema = { ...auth, ...study, ...site, ...criterion, ...record, ...mail, ...ascent };
 type Schema = typeof schema;
 
 /** What queries take: a pool's database or a transaction, so that the same query serves both. */

@@ -19,6 +19,7 @@ import { user } from './auth.ts';
 export const studyState = pgEnum('study_state', ['draft', 'in-review', 'baselined']);
 export const memberRole = pgEnum('member_role', ['lead', 'engineer', 'reviewer', 'reader']);
 export const injectionProfile = pgEnum('injection_profile', ['auto', 'direct', 'parking']);
+export const lossesSource = pgEnum('losses_source', ['entered', 'flown']);
 
 export const study = pgTable(
   'study',
@@ -39,6 +40,8 @@ export const study = pgTable(
     version: integer('version').notNull().default(1),
     /** Share of the injection speed flown when a dogleg turns early (flight-mechanics setting). */
     turnSpeedFraction: doublePrecision('turn_speed_fraction').notNull().default(0.6),
+    /** Whether the budget takes the vehicle's entered losses or those of flown ascents. */
+    losses: lossesSource('losses').notNull().default('entered'),
     settingsVersion: integer('settings_version').notNull().default(1),
     createdBy: text('created_by')
       .notNull()
