@@ -48,19 +48,23 @@ export function applyWhatIf(
   changes: WhatIfChanges,
 ): AppliedWhatIf {
   const { figures: changed, ignored } = changedFigures(figures, changes);
-  const weighable = new Set(figures.criteria.flatMap(({ id, groupId }) => [id, groupId]));
-  const named = changes.weights ? idsNamedBy(changes.weights) : [];
-  const weights = named.filter((id) => !weighable.has(id));
-  return {
-    figures: changed,
-    statement: changes.weights ?? statement,
-    ignored: { ...ignored, weights },
-    unweighed: changes.weights ? unweighedBy(changes.weights, figures.criteria) : [],
-  };
+  const { gone, ...weighed } = changedWeights(figures.criteria, statement, changes.weights);
+  return { figures: changed, ...weighed, ignored: { ...ignored, weights: gone } };
 }
 
-function unweighedBy(statement: WeightStatement, items: RankingFigures['criteria']): string[] {
-  return weighNow(items, statement).levels.flatMap(({ unjudged }) => unjudged);
+/** The weights alone; `gone` are ids they name that are weighed no more. */
+export function changedWeights(
+  criteria: RankingFigures['criteria'],
+  statement: WeightStatement,
+  weights: WhatIfChanges['weights'],
+): Pick<AppliedWhatIf, 'statement' | 'unweighed'> & { gone: string[] } {
+  if (!weights) return { statement, unweighed: [], gone: [] };
+  const weighable = new Set(criteria.flatMap(({ id, groupId }) => [id, groupId]));
+  return {
+    statement: weights,
+    unweighed: weighNow(criteria, weights).levels.flatMap(({ unjudged }) => unjudged),
+    gone: idsNamedBy(weights).filter((id) => !weighable.has(id)),
+  };
 }
 
 /** Ids that a statement says something of by its own method, each once. */
@@ -180,6 +184,23 @@ export type Standing =
   | { kind: 'incomplete'; bestRank: number; worstRank: number }
   | { kind: 'set-aside' }
   | { kind: 'left-out' };
+
+/** The changes without the entries that count for nothing now. */
+export function withoutIgnored(changes: WhatIfChanges, ignored: Ignored): WhatIfChanges {
+  const { weights } = changes;
+  const known = (id: string): boolean => !ignored.weights.includes(id);
+  return {
+    weights: weights && {
+      method: weights.method,
+      points: Object.fromEntries(Object.entries(weights.points).filter(([id]) => known(id))),
+      order: weights.order.filter(known),
+      judgements: weights.judgements.filter(([a, b]) => known(a) && known(b)),
+    },
+    limits: Object.fromEntries(Object.entries(changes.limits).filter(([id]) => !ignored.limits.includes(id))),
+    figures: changes.figures.filter((one) => !ignored.figures.includes(one)),
+    leftOut: changes.leftOut.filter((id) => !ignored.leftOut.includes(id)),
+  };
+}
 
 /** A site before and after; `place` is its place in the list it is read in, from 0, null where it is left out. */
 export interface RankMove extends Pick<RankingSite, 'siteId' | 'code' | 'name'> {

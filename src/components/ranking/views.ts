@@ -44,6 +44,18 @@ export const VIEWS: readonly RankingView[] = [
     needsRanks: true,
     load: () => import('./holds/HoldsView.tsx'),
   },
+  {
+    value: 'acceptability',
+    name: 'Rank acceptability',
+    needsRanks: true,
+    load: () => import('./acceptability/AcceptabilityView.tsx'),
+  },
+  {
+    value: 'what-if',
+    name: 'What-if',
+    needsRanks: false,
+    load: () => import('../what-if/WhatIfView.tsx'),
+  },
 ];
 
 /** The view an address asks for; the ranking itself where it asks for none that exists. */
