@@ -10,7 +10,7 @@ import { PATTERNS } from '../ValueBar.tsx';
 import { shortened } from './shorten.ts';
 
 const WIDTH = 640;
-const LEFT = 236;
+const LEFT = 252;
 const RIGHT = WIDTH - 16;
 const TOP = 22;
 const ROW = 34;
@@ -27,9 +27,11 @@ interface TornadoChartProps {
 export function TornadoChart({ tornado: { margin, bars }, names, sheet, table }: TornadoChartProps) {
   const ends = [0, margin, ...bars.flatMap(({ atLow, atHigh }) => [atLow, atHigh])];
   const [least, most] = [Math.min(...ends), Math.max(...ends)];
-  const pad = (most - least || 0.1) * 0.1;
+  const pad = (most - least || 0.1) * 0.08;
+  // Where the lead is lost the figure stands left of its bar.
+  const before = least < 0 ? 2.5 * pad : pad;
   const scale = scaleLinear()
-    .domain([least - pad, most + pad])
+    .domain([least - before, most + pad])
     .range([LEFT, RIGHT]);
   const at = (value: number): number => Math.round(scale(value) * 10) / 10;
   const ticks = scale.ticks(5);
