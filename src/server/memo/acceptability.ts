@@ -124,7 +124,7 @@ export function acceptabilityBlocks(facts: MemoFacts): MemoBlock[] {
     return [{ kind: 'paragraph', text: ['With fewer than two ranked sites there is nothing to draw.'] }];
   const { fact, behind } = acceptabilityInWords(acceptability, memoNames(facts));
   return [
-    { kind: 'paragraph', text: [{ strong: fact }, ` ${behind}`] },
+    { kind: 'paragraph', text: [{ strong: `${fact}.` }, ` ${behind}`] },
     ranksTable(facts, acceptability),
     firstRankTable(facts, acceptability),
     ...centralTables(facts, acceptability),

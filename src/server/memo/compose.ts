@@ -32,11 +32,8 @@ function sectionsOf(facts: MemoFacts): MemoSection[] {
   const printed = printedSites(facts);
   const detail = rankingDetail(facts);
   return numbered([
-    {
-      id: 'recommendation',
-      heading: null,
-      blocks: [...rankingBlocks(facts), ...changeBlocks(facts), ESTIMATES],
-    },
+    { id: 'recommendation', heading: null, blocks: [...rankingBlocks(facts), ESTIMATES] },
+    ...changeSection(facts),
     { id: 'candidates', heading: 'Candidate sites', blocks: candidateBlocks(facts, printed) },
     { id: 'requirement', heading: 'Requirement and assumptions', blocks: requirementBlocks(facts) },
     { id: 'criteria', heading: 'Criteria and ranking', blocks: [...criteriaBlocks(facts), ...detail] },
@@ -53,13 +50,12 @@ function sectionsOf(facts: MemoFacts): MemoSection[] {
   ]);
 }
 
-/** What the recommendation rests on and what would change it, in plain words. */
-function changeBlocks(facts: MemoFacts): MemoBlock[] {
+/** What the recommendation rests on and what would change it, in plain words; nothing where nothing is ranked. */
+function changeSection(facts: MemoFacts): MemoSection[] {
   if (facts.ranking.state !== 'ranked') return [];
   const { holds } = recommendation(facts);
-  return holds.length === 0
-    ? []
-    : [{ kind: 'paragraph', text: [{ strong: 'What would change it. ' }, holds.join(' ')] }];
+  const blocks = holds.map((text): MemoBlock => ({ kind: 'paragraph', text: [text] }));
+  return blocks.length === 0 ? [] : [{ id: 'change', heading: 'What would change it', blocks }];
 }
 
 /**

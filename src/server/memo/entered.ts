@@ -42,14 +42,14 @@ function figuresTable(facts: MemoFacts, entered: readonly EnteredFigure[]): Memo
   return table(
     'Entered figures and where they come from',
     [
-      words('Site', 20, true),
-      words('Criterion', 20, true),
-      figures('Figure', 'likely', 10, true),
+      words('Site', 16, true),
+      words('Criterion', 19, true),
+      figures('Figure', 'likely', 11, true),
       figures('Low', '', 8),
       figures('High', '', 8),
-      words('Source', 20),
-      words('Date', 8),
-      words('Confidence', 6),
+      words('Source', 17),
+      words('Date', 11),
+      words('Confidence', 10),
     ],
     listed.map(({ site, criterion, figure, known }) =>
       row([

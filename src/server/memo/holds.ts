@@ -67,6 +67,8 @@ function tornadoTable(facts: MemoFacts): MemoBlock[] {
     ];
   const names = memoNames(facts);
   const decimals = valueDecimals(facts.ranking);
+  const moving = bars.filter(({ atLow, atHigh }) => atLow !== margin || atHigh !== margin);
+  const still = bars.length - moving.length;
   const text = ({ criterionId }: TornadoBarOf, value: number): string => {
     const place = facts.ranking.criteria.findIndex(({ id }) => id === criterionId);
     const criterion = facts.ranking.criteria[place];
@@ -85,7 +87,7 @@ function tornadoTable(facts: MemoFacts): MemoBlock[] {
         figures('Margin', 'at low', 13, true),
         figures('Margin', 'at high', 13, true),
       ],
-      bars
+      moving
         .slice(0, MOST_BARS)
         .map((bar) =>
           row([
@@ -100,15 +102,20 @@ function tornadoTable(facts: MemoFacts): MemoBlock[] {
         ),
       [
         `The margin is ${formatNumber(margin, decimals)} with every figure as it is; below 0 the lead is lost. Widest first; levels stay where the likely figures put them.`,
-        ...(bars.length > MOST_BARS
-          ? [`${formatCount(bars.length - MOST_BARS, 'narrower one')} not listed.`]
+        ...(moving.length > MOST_BARS
+          ? [`${formatCount(moving.length - MOST_BARS, 'narrower one')} not listed.`]
+          : []),
+        ...(still > 0
+          ? [
+              `${formatCount(still, 'further uncertain figure')} ${still === 1 ? 'leaves' : 'leave'} the margin as it is.`,
+            ]
           : []),
       ],
     ),
   ];
 }
 
-const inOne = ({ fact, behind }: Finding): string => `${fact} ${behind}`;
+const inOne = ({ fact, behind }: Finding): string => `${fact}. ${behind}`;
 
 /** TOPSIS and dominance, in words and with their figures. */
 function otherOpinions(facts: MemoFacts): MemoBlock[] {

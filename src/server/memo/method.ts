@@ -82,9 +82,9 @@ const DECISION: MemoFormulas['items'] = [
       'Weight of one criterion at which two sites tie; v their values on it, R = (V − w v)/(1 − w) the rest, whose proportions stay.',
   },
   {
-    formula: 'r = v / √Σ v²;  C = d₋ / (d₊ + d₋)',
+    formula: 'r = v / √Σ v²;  C = d / (d + D)',
     meaning:
-      'TOPSIS on values and weights (Hwang and Yoon 1981): closeness C to the ideal, from distances in w r.',
+      'TOPSIS on values and weights (Hwang and Yoon 1981): closeness C, from the distances D to the ideal and d to the anti-ideal, in w r.',
   },
   {
     formula: 'b(site, rank) = share of draws',

@@ -2,6 +2,7 @@ import { formatCount, formatNumber, listInWords } from '#contract/format.ts';
 import type { MemoHeadline, MemoModel, MemoText } from '#contract/memo.ts';
 import type { RankedSite, Ranking } from '#contract/ranking.ts';
 import { letterOf, valueDecimals } from '#contract/ranking-words.ts';
+import { shareInWords } from '#contract/share-words.ts';
 import type { MemoFacts } from './facts.ts';
 import { recommendation } from './recommendation.ts';
 
@@ -128,7 +129,12 @@ function manifestReason(facts: MemoFacts): MemoText | null {
   ];
 }
 
-function headlineOf({ ranking, results, inputs }: MemoFacts): MemoHeadline[] {
+function headlineOf({
+  ranking,
+  results,
+  inputs,
+  sensitivity: { acceptability: drawn },
+}: MemoFacts): MemoHeadline[] {
   const { counts, margin, ranked } = ranking;
   const leader = ranked[0];
   if (!leader) return [];
@@ -156,12 +162,19 @@ function headlineOf({ ranking, results, inputs }: MemoFacts): MemoHeadline[] {
             leads: false,
           },
         ]),
-    {
-      label: 'Candidates ranked',
-      figure: formatNumber(counts.ranked),
-      note: `of ${formatNumber(all)}`,
-      leads: false,
-    },
+    drawn
+      ? {
+          label: `${leader.name} comes first in`,
+          figure: shareInWords(drawn.sites[0]?.shares[0] ?? 0, drawn.samples),
+          note: `of ${formatNumber(drawn.samples)} draws`,
+          leads: false,
+        }
+      : {
+          label: 'Candidates ranked',
+          figure: formatNumber(counts.ranked),
+          note: `of ${formatNumber(all)}`,
+          leads: false,
+        },
   ];
 }
 

@@ -53,14 +53,19 @@ function Code({ code }: { code: MemoCode }) {
   );
 }
 
+const isHeading = ([first, ...rest]: MemoText): boolean => typeof first === 'object' && rest.length === 0;
+
 /** One block of the memo. @param width of the text, points. */
 export function Block({ block, width }: { block: MemoBlock; width: number }) {
   switch (block.kind) {
     case 'paragraph':
       return (
-        <Text style={s.paragraph}>
-          <Runs text={block.text} />
-        </Text>
+        // A heading of a few words must not stand at the foot of a page.
+        <View {...(isHeading(block.text) ? { minPresenceAhead: 60 } : {})}>
+          <Text style={s.paragraph}>
+            <Runs text={block.text} />
+          </Text>
+        </View>
       );
     case 'caution':
       return <Caution caution={block} />;
