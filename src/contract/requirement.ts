@@ -116,12 +116,22 @@ export const TurnSpeedFraction = z
   .max(1, 'The fraction lies above 0 and is 1 at most.')
   .meta({ description: 'Share of the injection speed flown by the time of a dogleg, up to 7° of arc' });
 
+/** Where the losses of the Δv budget come from. */
+export const LossesSource = z.enum(['entered', 'flown']).meta({
+  description: 'entered: the vehicle’s own losses. flown: those of each site’s flown ascent',
+});
+export type LossesSource = z.infer<typeof LossesSource>;
+
 export const StudySettings = z
-  .object({ turnSpeedFraction: TurnSpeedFraction, version: z.int() })
+  .object({ turnSpeedFraction: TurnSpeedFraction, losses: LossesSource, version: z.int() })
   .meta({ id: 'StudySettings' });
 export type StudySettings = z.infer<typeof StudySettings>;
 
 export const SettingsPatch = z
-  .strictObject({ turnSpeedFraction: TurnSpeedFraction.optional(), version: z.int().optional() })
+  .strictObject({
+    turnSpeedFraction: TurnSpeedFraction.optional(),
+    losses: LossesSource.optional(),
+    version: z.int().optional(),
+  })
   .meta({ id: 'SettingsPatch' });
 export type SettingsPatch = z.infer<typeof SettingsPatch>;

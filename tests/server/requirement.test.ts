@@ -226,7 +226,11 @@ describe('the vehicle', () => {
 describe('settings', () => {
   test('a setting has a version of its own and is recorded from and to', async () => {
     const member = await studyWith(db, 'engineer');
-    expect(await readSettings(db, member)).toEqual({ turnSpeedFraction: 0.6, version: 1 });
+    expect(await readSettings(db, member)).toEqual({
+      turnSpeedFraction: 0.6,
+      losses: 'entered',
+      version: 1,
+    });
     const changed = await changeSettings(db, { member, version: 1, patch: { turnSpeedFraction: 0.7 } });
     expect(changed).toMatchObject({ turnSpeedFraction: 0.7, version: 2, revision: 2 });
     expect(await codeOf(changeSettings(db, { member, version: 1, patch: { turnSpeedFraction: 0.8 } }))).toBe(
@@ -236,6 +240,17 @@ describe('settings', () => {
     expect(row).toMatchObject({ version: 1, settingsVersion: 2 });
     expect(await linesOf(member)).toMatchObject([
       { object: 'settings', from: { turnSpeedFraction: 0.6 }, to: { turnSpeedFraction: 0.7 } },
+    ]);
+  });
+
+  test('losses are entered at first; choosing flown ones is a change of the inputs', async () => {
+    const member = await studyWith(db, 'engineer');
+    const flown = await changeSettings(db, { member, version: 1, patch: { losses: 'flown' } });
+    expect(flown).toMatchObject({ turnSpeedFraction: 0.6, losses: 'flown', version: 2, revision: 2 });
+    const again = await changeSettings(db, { member, version: 2, patch: { losses: 'flown' } });
+    expect(again).toMatchObject({ version: 2, revision: 2 });
+    expect(await linesOf(member)).toMatchObject([
+      { object: 'settings', from: { losses: 'entered' }, to: { losses: 'flown' } },
     ]);
   });
 });

@@ -121,7 +121,11 @@ describe('editing', () => {
 
 /** A study with an orbit, a criterion of it, one entered in a group, a rating, a site with a figure, weights and a vehicle. */
 async function furnished(): Promise<Member> {
-  const member = await studyWith(db, 'lead', { question: 'Where from?', turnSpeedFraction: 0.7 });
+  const member = await studyWith(db, 'lead', {
+    question: 'Where from?',
+    turnSpeedFraction: 0.7,
+    losses: 'flown',
+  });
   const { studyId, userId } = member;
   const orbitId = newId();
   const [entered, rating, groupId] = [newId(), newId(), newId()];
@@ -261,7 +265,7 @@ describe('making', () => {
       },
     ]);
     expect(vehicle).toMatchObject({ spec: { name: 'Trial lifter' } });
-    expect(head).toMatchObject({ turnSpeedFraction: 0.7 });
+    expect(head).toMatchObject({ turnSpeedFraction: 0.7, losses: 'flown' });
     const [theirs] = await db.select().from(targetOrbit).where(eq(targetOrbit.studyId, source.studyId));
     expect(orbit?.id).not.toBe(theirs?.id);
     expect(await linesOf(made.id)).toMatchObject([

@@ -24,7 +24,9 @@ export interface WeightSaying {
  * brings. Orbits, groups and criteria go by keys of their own, which figures, weights and computed criteria refer to.
  */
 export interface StudyContents {
-  head: { organisation: string; question: string; decideBy: string | null; turnSpeedFraction: number };
+  head: Required<
+    Pick<typeof study.$inferInsert, 'organisation' | 'question' | 'turnSpeedFraction' | 'losses'>
+  > & { decideBy: string | null };
   vehicle: { spec: Spec; libraryVehicleId: string | null } | null;
   orbits: (Insert<typeof targetOrbit, never> & { key: string })[];
   groups: (Insert<typeof criterionGroup, never> & { key: string })[];
@@ -52,6 +54,7 @@ export async function readContents(
       question: study.question,
       decideBy: study.decideBy,
       turnSpeedFraction: study.turnSpeedFraction,
+      losses: study.losses,
     })
     .from(study)
     .where(eq(study.id, studyId))

@@ -4,7 +4,10 @@ import { member, study } from '../schema/study.ts';
 
 export type NewStudy = typeof study.$inferInsert;
 type StudyValues = Partial<
-  Pick<NewStudy, 'title' | 'organisation' | 'question' | 'decideBy' | 'archivedAt' | 'turnSpeedFraction'>
+  Pick<
+    NewStudy,
+    'title' | 'organisation' | 'question' | 'decideBy' | 'archivedAt' | 'turnSpeedFraction' | 'losses'
+  >
 >;
 
 const columns = {
@@ -19,6 +22,7 @@ const columns = {
   savedAt: study.savedAt,
   version: study.version,
   turnSpeedFraction: study.turnSpeedFraction,
+  losses: study.losses,
   settingsVersion: study.settingsVersion,
   updatedAt: study.updatedAt,
 };
@@ -101,11 +105,11 @@ export async function updateStudy(db: Db, { studyId, values }: { studyId: string
 /** Writes the settings and moves their version. */
 export async function updateSettings(
   db: Db,
-  { studyId, turnSpeedFraction }: { studyId: string; turnSpeedFraction: number },
+  { studyId, values }: { studyId: string; values: Pick<StudyValues, 'turnSpeedFraction' | 'losses'> },
 ) {
   const [row] = await db
     .update(study)
-    .set({ turnSpeedFraction, settingsVersion: sql`${study.settingsVersion} + 1` })
+    .set({ ...values, settingsVersion: sql`${study.settingsVersion} + 1` })
     .where(eq(study.id, studyId))
     .returning(columns);
   return row;

@@ -4,6 +4,7 @@ import { updateSettings } from '#db/queries/study.ts';
 import { changeStudy, type Saved } from '#server/change-study.ts';
 import { stale } from '#server/errors.ts';
 import type { Member } from '#server/member.ts';
+import { presentSettings } from './present.ts';
 
 interface ChangeRequest {
   member: Member;
@@ -18,22 +19,17 @@ export async function changeSettings(
   { member, version, patch }: ChangeRequest,
 ): Promise<StudySettings & Saved> {
   return changeStudy(db, { member, kind: 'inputs' }, async (tx, row) => {
-    const before = { turnSpeedFraction: row.turnSpeedFraction, version: row.settingsVersion };
+    const before = presentSettings(row);
     if (before.version !== version) throw stale(before);
-    const { turnSpeedFraction = before.turnSpeedFraction } = patch;
-    if (turnSpeedFraction === before.turnSpeedFraction) return { result: before, entries: [] };
-    await updateSettings(tx, { studyId: row.id, turnSpeedFraction });
+    const { turnSpeedFraction = before.turnSpeedFraction, losses = before.losses } = patch;
+    const values = { turnSpeedFraction, losses };
+    const from = { turnSpeedFraction: before.turnSpeedFraction, losses: before.losses };
+    if (turnSpeedFraction === from.turnSpeedFraction && losses === from.losses)
+      return { result: before, entries: [] };
+    await updateSettings(tx, { studyId: row.id, values });
     return {
-      result: { turnSpeedFraction, version: version + 1 },
-      entries: [
-        {
-          object: 'settings',
-          objectId: row.id,
-          action: 'change',
-          from: { turnSpeedFraction: before.turnSpeedFraction },
-          to: { turnSpeedFraction },
-        },
-      ],
+      result: { ...values, version: version + 1 },
+      entries: [{ object: 'settings', objectId: row.id, action: 'change', from, to: values }],
     };
   });
 }

@@ -1,6 +1,7 @@
-import type { LibraryVehicle, StudyOrbit, StudyVehicle } from '#contract/requirement.ts';
+import type { LibraryVehicle, StudyOrbit, StudySettings, StudyVehicle } from '#contract/requirement.ts';
 import { VehicleInput } from '#contract/vehicle.ts';
 import type { OrbitRow } from '#db/queries/orbit.ts';
+import type { StudyRow } from '#server/change-study.ts';
 import type { findStudyVehicle, LibraryVehicleRow } from '#db/queries/vehicle.ts';
 
 /** An orbit as the interface names it: altitudes in kilometres over the equatorial radius. */
@@ -29,6 +30,13 @@ export function presentVehicle(row: Awaited<ReturnType<typeof findStudyVehicle>>
     libraryVehicleId: row.libraryVehicleId,
     version: row.version,
   };
+}
+
+/** A study's settings, with the version of the settings. */
+export function presentSettings(
+  row: Pick<StudyRow, 'turnSpeedFraction' | 'losses' | 'settingsVersion'>,
+): StudySettings {
+  return { turnSpeedFraction: row.turnSpeedFraction, losses: row.losses, version: row.settingsVersion };
 }
 
 export function presentLibraryVehicle(row: LibraryVehicleRow): LibraryVehicle {

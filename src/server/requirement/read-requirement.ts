@@ -12,7 +12,7 @@ import { findOrbit, listOrbits as listAllOrbits, searchOrbits } from '#db/querie
 import { findStudy } from '#db/queries/study.ts';
 import { findLibraryVehicle, findStudyVehicle, listLibraryVehicles } from '#db/queries/vehicle.ts';
 import { notFound } from '#server/errors.ts';
-import { presentLibraryVehicle, presentOrbit, presentVehicle } from './present.ts';
+import { presentLibraryVehicle, presentOrbit, presentSettings, presentVehicle } from './present.ts';
 
 interface InStudy {
   studyId: string;
@@ -45,7 +45,7 @@ export async function readVehicle(db: Db, { studyId }: InStudy): Promise<StudyVe
 export async function readSettings(db: Db, { studyId }: InStudy): Promise<StudySettings> {
   const row = await findStudy(db, { studyId });
   if (!row) throw notFound();
-  return { turnSpeedFraction: row.turnSpeedFraction, version: row.settingsVersion };
+  return presentSettings(row);
 }
 
 /** A page of the vehicles anyone may choose from. */

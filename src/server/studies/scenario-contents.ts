@@ -109,6 +109,7 @@ export function scenarioContents(
       question: study.question,
       decideBy: study.decideBy,
       turnSpeedFraction: DEFAULT_TURN_SPEED_FRACTION,
+      losses: 'entered',
     },
     vehicle,
     orbits: study.orbits.map((draft) => {
