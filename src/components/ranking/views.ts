@@ -51,6 +51,12 @@ export const VIEWS: readonly RankingView[] = [
     load: () => import('./acceptability/AcceptabilityView.tsx'),
   },
   {
+    value: 'agreement',
+    name: 'Agreement',
+    needsRanks: false,
+    load: () => import('../agreement/AgreementView.tsx'),
+  },
+  {
     value: 'what-if',
     name: 'What-if',
     needsRanks: false,

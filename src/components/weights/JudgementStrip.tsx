@@ -28,7 +28,7 @@ export function JudgementStrip({ first, second, ratio, onJudge, locked }: StripP
           <label key={one} title={ratioInWords(one, first, second)} data-middle={one === 1 ? '' : undefined}>
             <input
               type="radio"
-              className="sr-only"
+              className="wt-radio"
               name={name}
               checked={isSame(one, ratio)}
               disabled={locked}

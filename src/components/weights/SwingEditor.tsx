@@ -32,8 +32,9 @@ function SwingLevel({ level, ...props }: EditorProps & { level: Siblings }) {
   const { points } = statement;
   const top = level.ids.find((id) => points[id] === FULL_SWING);
   const give = (id: string, value: number): void => say({ ...statement, points: { ...points, [id]: value } });
-  const weights = top
-    ? weighing(items, onlyWhole(statement, level)).levels.find(({ groupId }) => groupId === level.groupId)
+  const whole = top !== undefined && level.ids.every((id) => Object.hasOwn(points, id));
+  const weights = whole
+    ? weighing(items, onlyOf(statement, level)).levels.find(({ groupId }) => groupId === level.groupId)
         ?.weights
     : null;
   return (
@@ -99,7 +100,7 @@ function SwingLevel({ level, ...props }: EditorProps & { level: Siblings }) {
 }
 
 /** The statement with this level alone, so that its weights can be shown before the others are complete. */
-const onlyWhole = (statement: WeightStatement, { ids }: Siblings): WeightStatement => ({
+const onlyOf = (statement: WeightStatement, { ids }: Siblings): WeightStatement => ({
   ...statement,
   points: Object.fromEntries(Object.entries(statement.points).filter(([id]) => ids.includes(id))),
 });
