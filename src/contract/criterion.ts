@@ -51,10 +51,15 @@ export const DEFAULT_STEPS = ['Very poor', 'Poor', 'Fair', 'Good', 'Very good'];
 const steps = z
   .array(z.string().trim().min(1, 'Name every step.').max(60, 'A step’s name has up to 60 characters.'))
   .length(RATING_STEPS, 'A rating has five steps.')
-  .refine(
-    (names) => new Set(names.map((one) => one.toLowerCase())).size === names.length,
-    'Steps differ in name.',
-  );
+  .check((ctx) => {
+    const names = ctx.value.map((name) => name.toLowerCase());
+    names.forEach((name, step) => {
+      const first = names.indexOf(name);
+      if (first === step) return;
+      const message = `Step ${first} has this name already.`;
+      ctx.issues.push({ code: 'custom', message, path: [step], input: ctx.value });
+    });
+  });
 
 const name = z
   .string()

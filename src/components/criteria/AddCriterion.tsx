@@ -192,7 +192,7 @@ function RatingForm(props: AddProps) {
       <TextField label="Name" error={errors.name} {...form.register('name')} />
       <RatingSteps
         fieldOf={(step) => form.register(`steps.${step}`)}
-        errorOf={(step) => errors.steps?.[step] ?? (step === 0 ? errors.steps?.root : undefined)}
+        errorOf={(step) => errors.steps?.[step]}
         worstFirst
       />
       <p className="caption">

@@ -84,8 +84,8 @@ export function LeaderNote({ candidate, column, x, y }: LeaderNoteProps) {
       <circle className="fill-signal" cx={round(at)} cy={round(y(candidate.value))} r="4" />
       <text
         className="signal-text halo"
-        x={round(at) + (onRight ? 10 : -10)}
-        y={Math.max(round(y(candidate.value)) - 8, TOP)}
+        x={round(at)}
+        y={TOP - 18}
         textAnchor={onRight ? 'start' : 'end'}
       >
         {`${candidate.site.name} ${figure}, value ${formatShare(candidate.value)}`}

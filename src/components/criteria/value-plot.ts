@@ -5,11 +5,12 @@ import type { Shape } from '#core/decision/shape.ts';
 import { figureAt, type Levels } from './shape-editing.ts';
 
 export const WIDTH = 520;
-export const HEIGHT = 250;
+export const HEIGHT = 270;
 export const LEFT = 44;
 export const RIGHT = 12;
-export const TOP = 14;
-export const FLOOR = 168;
+/** Under the leader's note, which stands clear of the line and its handles. */
+export const TOP = 34;
+export const FLOOR = 188;
 /** Room left and right of the outermost figure, as a share of the span. */
 const MARGIN = 0.06;
 const CURVE_STEPS = 60;

@@ -133,7 +133,7 @@ describe('in words', () => {
 
 test.each([
   ['a step without a name', 'steps.3', { steps: ['a', 'b', 'c', '', 'e'] }],
-  ['two steps of one name', 'steps.0', { steps: ['a', 'b', 'c', 'A', 'e'] }],
+  ['two steps of one name', 'steps.3', { steps: ['a', 'b', 'c', 'A', 'e'] }],
 ])('says beside its field: %s', (_, field, change) => {
   const read = readCriterion({ ...fieldsOf(rating), ...change });
   expect(read.ok ? [] : read.errors.map((error) => error.field)).toEqual([field]);
