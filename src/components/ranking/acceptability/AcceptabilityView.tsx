@@ -10,6 +10,7 @@ import { useSubject } from '../use-subject.ts';
 import type { RankingViewProps } from '../views.ts';
 import { acceptabilityCsv } from './acceptability-csv.ts';
 import { CentralWeights } from './CentralWeights.tsx';
+import { ConfidenceTable } from './ConfidenceTable.tsx';
 import { DrawSettings } from './DrawSettings.tsx';
 import { RankMatrix } from './RankMatrix.tsx';
 import { StackedRanks } from './StackedRanks.tsx';
@@ -129,9 +130,10 @@ function Answer({ model, sheet, answer, names, stale, onSave }: AnswerProps) {
       <RankMatrix answer={answer} names={names} />
       <div className="rk-panels">
         <StackedRanks answer={answer} names={names} />
-        <CentralWeights answer={answer} names={names} sheet={sheet} />
+        <ConfidenceTable answer={answer} names={names} />
       </div>
-      <div className="mt-9">
+      <div className="sv-stack mt-9">
+        <CentralWeights answer={answer} names={names} sheet={sheet} />
         <WinningShares answer={answer} names={names} codes={codes} />
       </div>
     </div>

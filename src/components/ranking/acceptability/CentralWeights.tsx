@@ -2,7 +2,6 @@ import { useState } from 'react';
 import { formatNumber } from '#contract/format.ts';
 import type { AcceptabilityOf } from '#contract/sensitivity.ts';
 import type { Names } from '#contract/sensitivity-words.ts';
-import { errorFigure, shareFigure, underOneIn } from '#contract/share-words.ts';
 import { Button } from '#components/ui/Button.tsx';
 import { Panel } from '#components/ui/Finding.tsx';
 import { KeyLetter } from '#components/ui/States.tsx';
@@ -13,83 +12,52 @@ import type { Sheet } from '../columns.ts';
 const STEP = 20;
 const DECIMALS = 3;
 
-/** What somebody would have to weigh for a site to lead, and how sure it then leads. */
-export function CentralWeights({
-  answer,
-  names,
-  sheet,
-}: {
+interface CentralWeightsProps {
   answer: AcceptabilityOf;
   names: Names;
   sheet: Sheet;
-}) {
+}
+
+/** What somebody would have to weigh for a site to lead. */
+export function CentralWeights({ answer, names, sheet }: CentralWeightsProps) {
   const [shown, setShown] = useState(STEP);
-  const { sites, samples, uncertainFigures } = answer;
-  const ids = Object.keys(sites.find(({ centralWeights }) => centralWeights)?.centralWeights ?? {});
-  const columns = sheet.columns.filter(({ criterion }) => ids.includes(criterion.id));
+  const leading = answer.sites.filter(({ centralWeights }) => centralWeights !== null);
+  const never = answer.sites.length - leading.length;
+  const known = leading[0]?.centralWeights ?? {};
+  const columns = sheet.columns.filter(({ criterion }) => criterion.id in known);
   return (
     <Panel
-      title="What each site would need"
-      caption={`Central weights: the mean of the weights under which the site leads. Confidence: percent of draws of the figures in which it leads under those weights${uncertainFigures === 0 ? '; without uncertain figures it is 0 or 100' : ', with its standard error'}.`}
+      title="Weights under which each site leads"
+      caption={`Central weights: the mean of the weights drawn under which the site leads; each row adds up to 1.${never > 0 ? ` ${formatNumber(never)} ${never === 1 ? 'site leads' : 'sites lead'} in no draw.` : ''}`}
     >
-      <TableScroll label="Central weights and confidence factors">
+      <TableScroll label="Central weights">
         <table className="table" data-dense="">
           <thead>
             <tr>
               <th scope="col">Candidate site</th>
-              <th scope="col" className="num">
-                First<span className="unit">%</span>
-              </th>
-              <th scope="col" className="num">
-                Confidence<span className="unit">%</span>
-              </th>
-              <th scope="col" className="num">
-                Error<span className="unit">points</span>
-              </th>
-              {columns.map(({ criterion, letter }) => (
+              {columns.map(({ criterion, letter, weight, weightDecimals }) => (
                 <th key={criterion.id} scope="col" className="num">
-                  <KeyLetter letter={letter} />
-                  <span className="sr-only"> {criterion.name}</span>
-                  <span className="unit">weight</span>
+                  <KeyLetter letter={letter} /> {criterion.name}
+                  <span className="unit">now {formatNumber(weight, weightDecimals)}</span>
                 </th>
               ))}
             </tr>
           </thead>
           <tbody>
-            {sites.slice(0, shown).map((site, place) => (
-              <tr key={site.siteId} data-lead={place === 0 ? '' : undefined}>
-                <th scope="row">{names.site(site.siteId)}</th>
-                <td className="num">{shareFigure(site.shares[0] ?? 0, samples)}</td>
-                {site.confidence === null || site.centralWeights === null ? (
-                  <td className="num" colSpan={columns.length + 2}>
-                    never leads
-                  </td>
-                ) : (
-                  <>
-                    <td className="num">
-                      {uncertainFigures === 0
-                        ? formatNumber(site.confidence * 100, 1)
-                        : shareFigure(site.confidence, samples)}
-                    </td>
-                    <td className="num">
-                      {uncertainFigures === 0 ? '–' : errorFigure(site.confidence, samples)}
-                    </td>
-                    <WeightCells
-                      weights={columns.map(({ criterion }) => site.centralWeights?.[criterion.id] ?? 0)}
-                    />
-                  </>
-                )}
+            {leading.slice(0, shown).map(({ siteId, centralWeights }) => (
+              <tr key={siteId} data-lead={siteId === answer.sites[0]?.siteId ? '' : undefined}>
+                <th scope="row">{names.site(siteId)}</th>
+                <WeightCells weights={columns.map(({ criterion }) => centralWeights?.[criterion.id] ?? 0)} />
               </tr>
             ))}
           </tbody>
         </table>
       </TableScroll>
-      <p className="caption pt-2">“{underOneIn(samples)}” where no draw showed it.</p>
-      {shown < sites.length && (
+      {shown < leading.length && (
         <p className="pt-3">
           <Button size="small" onClick={() => setShown(shown + 2 * STEP)}>
-            Show {formatNumber(Math.min(2 * STEP, sites.length - shown))} more of {formatNumber(sites.length)}{' '}
-            sites
+            Show {formatNumber(Math.min(2 * STEP, leading.length - shown))} more of{' '}
+            {formatNumber(leading.length)} sites
           </Button>
         </p>
       )}

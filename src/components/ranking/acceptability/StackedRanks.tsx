@@ -4,7 +4,7 @@ import type { AcceptabilityOf } from '#contract/sensitivity.ts';
 import type { Names } from '#contract/sensitivity-words.ts';
 import { shareInWords } from '#contract/share-words.ts';
 import { Button } from '#components/ui/Button.tsx';
-import { Chart, partPaint, PART_LETTERS, XAxis } from '#components/ui/chart.tsx';
+import { Chart, partPaint, XAxis } from '#components/ui/chart.tsx';
 import { Panel } from '#components/ui/Finding.tsx';
 import { shortened } from '../holds/shorten.ts';
 import { PATTERNS } from '../ValueBar.tsx';
@@ -19,8 +19,6 @@ const NAME_LENGTH = 27;
 const STEP = 20;
 /** A number needs this much of a part to stand on it. */
 const NUMBERED = 14;
-/** The last paint stands for every rank from there on. */
-const PAINTS = PART_LETTERS.length;
 const TICKS = [0, 25, 50, 75, 100];
 
 const at = (percent: number): number => LEFT + (percent / 100) * (RIGHT - LEFT);
@@ -37,7 +35,7 @@ export function StackedRanks({ answer, names }: { answer: AcceptabilityOf; names
   return (
     <Panel
       title="How the ranks spread"
-      caption="From the left: percent of draws at rank 1, 2, and so on. The table beside has every figure."
+      caption="From the left: percent of draws at rank 1, 2, and so on; where there is room a part carries its rank. The matrix above has every figure."
     >
       <Chart label={`At rank 1: ${first.join(', ')}.`} width={WIDTH} height={bottom + 6}>
         <XAxis ticks={TICKS} at={at} from={TOP - 6} to={bottom} labelY={TOP - 12} />
@@ -63,7 +61,7 @@ export function StackedRanks({ answer, names }: { answer: AcceptabilityOf; names
                     textAnchor="middle"
                     aria-hidden="true"
                   >
-                    {rank < PAINTS - 1 ? rank + 1 : `${PAINTS}+`}
+                    {rank + 1}
                   </text>
                 )}
               </g>
@@ -83,12 +81,10 @@ export function StackedRanks({ answer, names }: { answer: AcceptabilityOf; names
   );
 }
 
-/** Parts of a bar; ranks from the last paint on are one part. */
+/** Parts of a bar, those that no draw showed left out. */
 function partsOf(shares: readonly number[]): { rank: number; from: number; to: number }[] {
-  const joined = shares.slice(0, PAINTS - 1);
-  const rest = shares.slice(PAINTS - 1).reduce((sum, share) => sum + share, 0);
   let from = 0;
-  return [...joined, rest].flatMap((share, rank) => {
+  return shares.flatMap((share, rank) => {
     if (share === 0) return [];
     const part = { rank, from, to: from + share };
     from += share;
