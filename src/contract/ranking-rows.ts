@@ -1,8 +1,8 @@
 import { failuresOf, type Listed } from '#core/decision/listing.ts';
 import { CELL } from '#core/decision/figures.ts';
 import { decimalsNeeded } from '#core/printed/figure.ts';
-import { formatNumber } from './format.ts';
 import type { RankingModel } from './ranking-model.ts';
+import { figureText } from './rating.ts';
 import type {
   Contribution,
   IncompleteSite,
@@ -51,9 +51,9 @@ function reasonsOf(model: RankingModel, site: number): SetAsideSite['reasons'] {
     const decimals = model.decimals[j] ?? 0;
     const figure =
       prepared.table.states[at] === CELL.figure
-        ? [formatNumber(prepared.table.figures[at] ?? 0, decimals), unit].filter(Boolean).join(' ')
+        ? [figureText(criterion, prepared.table.figures[at] ?? 0, decimals), unit].filter(Boolean).join(' ')
         : (notes.get(at) ?? 'out of reach');
-    const bound = `${limit.kind === 'at-least' ? '≥' : '≤'} ${formatNumber(limit.value, decimalsNeeded([limit.value]))}`;
+    const bound = `${limit.kind === 'at-least' ? '≥' : '≤'} ${figureText(criterion, limit.value, decimalsNeeded([limit.value]))}`;
     return [{ criterionId: id, message: `${name} ${figure}, limit ${bound}` }];
   });
 }

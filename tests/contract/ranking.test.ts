@@ -10,7 +10,8 @@ import {
   rankRange,
   valueDecimals,
 } from '#contract/ranking-words.ts';
-import { COST, DAYS, four, trialFigures, trialModel } from '#tests/components/ranking/trial.ts';
+import type { Criterion } from '#contract/criterion.ts';
+import { COST, criteria, DAYS, four, trialFigures, trialModel } from '#tests/components/ranking/trial.ts';
 
 const rankingOf = (...args: Parameters<typeof trialModel>) => presentRanking(trialModel(...args), 'study');
 const sites = (...cells: [number | null, number | null][]) =>
@@ -37,6 +38,25 @@ describe('a ranking as it is answered', () => {
     ]);
     expect(missingInWords(ranking, ranking.incomplete[0]?.missing ?? [])).toBe('no figure for Cost');
     expect(ranking.incomplete.map(rankRange)).toEqual(['1 to 3']);
+  });
+
+  test('says by its steps which rating fails a limit', () => {
+    const [cost] = criteria;
+    if (!cost) throw new Error('the trial has a criterion');
+    const road: Criterion = {
+      ...cost,
+      name: 'Road',
+      unit: '',
+      direction: 'more',
+      source: 'rating',
+      steps: ['Track', 'Gravel', 'Two lanes', 'Trunk road', 'Motorway'],
+      levels: { mode: 'fixed', worst: 0, best: 4 },
+      limit: { kind: 'at-least', value: 2 },
+    };
+    const rated = rankingOf(trialFigures([{ name: 'Far', cells: [1] }], { criteria: [road] }));
+    expect(rated.setAside[0]?.reasons).toEqual([
+      { criterionId: COST, message: 'Road Gravel (1), limit ≥ Two lanes (2)' },
+    ]);
   });
 
   test('draws no more rows than asked for and counts them all', () => {
