@@ -1,5 +1,6 @@
 /** How shares of draws are written, on screens, in exports and in the memo: one way, so that they agree. */
 import { standardError } from '#core/decision/acceptability.ts';
+import { closedSums } from '#core/printed/closing.ts';
 import { formatNumber } from './format.ts';
 
 const DECIMALS = 1;
@@ -29,4 +30,13 @@ export function shareInWords(share: number, samples: number): string {
 export function errorFigure(share: number, samples: number): string {
   if (share === 0 || share === 1) return underOneIn(samples);
   return formatNumber(standardError(share, samples) * 100, 2);
+}
+
+const WEIGHT_DECIMALS = 3;
+
+/** Weights that belong together, printed so that they add up to their sum. */
+export function weightFigures(weights: readonly number[]): string[] {
+  const total = weights.reduce((sum, weight) => sum + weight, 0);
+  const { sums } = closedSums([{ parts: weights, total }], WEIGHT_DECIMALS, WEIGHT_DECIMALS);
+  return (sums[0]?.parts ?? weights).map((weight) => formatNumber(weight, WEIGHT_DECIMALS));
 }

@@ -2,8 +2,8 @@ import { formatCount, formatNumber } from '#contract/format.ts';
 import type { MemoBlock, MemoTable } from '#contract/memo.ts';
 import { letterOf } from '#contract/ranking-words.ts';
 import type { AcceptabilityOf, SiteAcceptability } from '#contract/sensitivity.ts';
-import { acceptabilityInWords, drawnInWords, weightFigure } from '#contract/sensitivity-words.ts';
-import { errorFigure, shareFigure, underOneIn } from '#contract/share-words.ts';
+import { acceptabilityInWords, drawnInWords } from '#contract/sensitivity-words.ts';
+import { errorFigure, shareFigure, underOneIn, weightFigures } from '#contract/share-words.ts';
 import { cell, figures, row, runsOf, table, words } from './cells.ts';
 import type { MemoFacts } from './facts.ts';
 import { memoNames } from './names.ts';
@@ -101,18 +101,16 @@ function centralTables(facts: MemoFacts, answer: AcceptabilityOf): MemoTable[] {
     table(
       'Central weights: the mean of the weights under which a site comes first',
       [words('Site', 28, true), ...run.map(({ place }) => figures(letterOf(place), '', 8))],
-      leading.map(({ siteId, centralWeights }, at) =>
-        row(
-          [
-            cell(names.site(siteId)),
-            ...run.map(({ id }) =>
-              cell(centralWeights?.[id] === undefined ? '–' : weightFigure(centralWeights[id])),
-            ),
-          ],
+      leading.map(({ siteId, centralWeights }, at) => {
+        const known = places.filter(({ id }) => centralWeights?.[id] !== undefined);
+        const printed = weightFigures(known.map(({ id }) => centralWeights?.[id] ?? 0));
+        const text = new Map(known.map(({ id }, place) => [id, printed[place] ?? '–']));
+        return row(
+          [cell(names.site(siteId)), ...run.map(({ id }) => cell(text.get(id) ?? '–'))],
           at === 0 && siteId === answer.sites[0]?.siteId ? 'leads' : 'plain',
-        ),
-      ),
-      ['A site that is never first has none and is not listed.'],
+        );
+      }),
+      ['Each row adds up to 1. A site that is never first has none and is not listed.'],
     ),
   );
 }

@@ -2,15 +2,14 @@ import { useState } from 'react';
 import { formatNumber } from '#contract/format.ts';
 import type { AcceptabilityOf } from '#contract/sensitivity.ts';
 import type { Names } from '#contract/sensitivity-words.ts';
+import { weightFigures } from '#contract/share-words.ts';
 import { Button } from '#components/ui/Button.tsx';
 import { Panel } from '#components/ui/Finding.tsx';
 import { KeyLetter } from '#components/ui/States.tsx';
 import { TableScroll } from '#components/ui/TableScroll.tsx';
-import { closedSums } from '#core/printed/closing.ts';
 import type { Sheet } from '../columns.ts';
 
 const STEP = 20;
-const DECIMALS = 3;
 
 interface CentralWeightsProps {
   answer: AcceptabilityOf;
@@ -67,11 +66,9 @@ export function CentralWeights({ answer, names, sheet }: CentralWeightsProps) {
 
 /** Printed so that they add up to 1. */
 function WeightCells({ weights }: { weights: readonly number[] }) {
-  const total = weights.reduce((sum, weight) => sum + weight, 0);
-  const { sums } = closedSums([{ parts: weights, total }], DECIMALS, DECIMALS);
-  return (sums[0]?.parts ?? weights).map((weight, place) => (
+  return weightFigures(weights).map((weight, place) => (
     <td key={place} className="num">
-      {formatNumber(weight, DECIMALS)}
+      {weight}
     </td>
   ));
 }
