@@ -21,9 +21,12 @@ export function namesOf(
 const WEIGHT_DECIMALS = 3;
 export const weightFigure = (weight: number): string => formatNumber(weight, WEIGHT_DECIMALS);
 
+/** Weights this close are one. */
+const SAME = 1e-12;
+
 /** A change at the weight in force: the lead is shared now. */
 export const isNow = (change: { weight: number }, now: number): boolean =>
-  Math.abs(change.weight - now) <= 1e-12;
+  Math.abs(change.weight - now) <= SAME;
 
 /** "Now 0.240. Below 0.120 Pointe Rovana leads; above 0.312 Essery Bank leads." */
 export function leaderChangeInWords(
@@ -49,8 +52,12 @@ export function nearestChange(
       one ? [{ criterionId, now: weight, at: one.weight, siteId: one.siteId }] : [],
     ),
   );
-  all.sort((a, b) => Math.abs(a.at - a.now) - Math.abs(b.at - b.now));
-  return all[0] ?? null;
+  const moveOf = ({ at, now }: (typeof all)[number]): number => Math.abs(at - now);
+  // Two criteria alone change the leader at one and the same place: the first is named.
+  return all.reduce<(typeof all)[number] | null>(
+    (nearest, one) => (nearest && moveOf(one) >= moveOf(nearest) - SAME ? nearest : one),
+    null,
+  );
 }
 
 /** The least move of one weight that changes the leader, without its full stop. */
