@@ -1,4 +1,6 @@
 import { formatFull, formatNumber, formatShare } from '#contract/format.ts';
+import { FigureMarks } from '#components/figures/FigureMarks.tsx';
+import type { Known } from '#components/figures/known.ts';
 import type { Contribution } from '#contract/ranking.ts';
 import { NoFigure } from '#components/ui/States.tsx';
 
@@ -9,10 +11,14 @@ interface FigureCellProps {
   decimals: number;
   /** The figure fails a must-meet limit. */
   fails?: boolean;
+  /** What is known of an entered figure. */
+  known?: Known | undefined;
+  /** The name of a rating's step, in place of its number. */
+  step?: string | undefined;
 }
 
 /** A figure with its value under it: a bar of 30 px and three places. */
-export function FigureCell({ contribution, decimals, fails = false }: FigureCellProps) {
+export function FigureCell({ contribution, decimals, fails = false, known, step }: FigureCellProps) {
   const { value } = contribution;
   return (
     <>
@@ -23,10 +29,17 @@ export function FigureCell({ contribution, decimals, fails = false }: FigureCell
             <span className="sr-only">Fails its limit: </span>
           </>
         )}
-        <FigureText contribution={contribution} decimals={decimals} />
+        {step === undefined ? (
+          <FigureText contribution={contribution} decimals={decimals} />
+        ) : (
+          <span className="rk-step" title={`${step} (${contribution.figure ?? ''})`}>
+            {step}
+          </span>
+        )}
       </span>
       {value !== null && !saysInWords(contribution) && (
         <span className="rk-value">
+          {known && <FigureMarks known={known} />}
           <svg className="rk-value-bar" width={BAR_WIDTH} height="4" aria-hidden="true">
             <rect className="rk-track" width={BAR_WIDTH} height="4" />
             <rect className="rk-fill" width={BAR_WIDTH * value} height="4" />

@@ -3,6 +3,8 @@ import {
   ClientSideRowModelApiModule,
   ClientSideRowModelModule,
   ColumnApiModule,
+  CustomEditorModule,
+  EventApiModule,
   ModuleRegistry,
   NumberFilterModule,
   RowApiModule,
@@ -15,9 +17,11 @@ import {
 } from 'ag-grid-community';
 import { AgGridReact } from 'ag-grid-react';
 import { useEffect, useMemo, useRef, useState } from 'react';
+import { isEntered } from '#components/figures/figure.ts';
+import type { FigureDesk } from '#components/figures/use-figure-desk.tsx';
 import type { RankingModel } from '#contract/ranking-model.ts';
 import type { Sheet } from './columns.ts';
-import { BAND_HEIGHT, DrawnBand, GridSheetContext, ROW_HEIGHT } from './grid-cells.tsx';
+import { BAND_HEIGHT, DrawnBand, FigureDeskContext, GridSheetContext, ROW_HEIGHT } from './grid-cells.tsx';
 import { criterionColumn, defaultColumn, fixedColumns } from './grid-columns.ts';
 import { gridLines, keepGroups, type GridLine } from './grid-rows.ts';
 import { gridTheme } from './grid-theme.ts';
@@ -28,6 +32,8 @@ ModuleRegistry.registerModules([
   ClientSideRowModelApiModule,
   ClientSideRowModelModule,
   ColumnApiModule,
+  CustomEditorModule,
+  EventApiModule,
   NumberFilterModule,
   RowApiModule,
   RowSelectionModule,
@@ -51,6 +57,7 @@ interface RankingGridProps {
   onChoose: (siteId: string | null) => void;
   /** Told how to ask for the sites in sight, in their order; null when the grid goes. */
   onShown: (ask: (() => string[]) | null) => void;
+  desk: FigureDesk;
 }
 
 /** Up to here every row is drawn and the page scrolls; beyond, the grid scrolls and draws what is in sight. */
@@ -69,7 +76,8 @@ const rowClasses = {
 };
 
 export default function RankingGrid(props: RankingGridProps) {
-  const { model, sheet, barWidth, hidden, filtersShown, chosen, onChoose, onView, onShown } = props;
+  const { model, sheet, barWidth, hidden, filtersShown, chosen, onChoose, onView, onShown, desk } = props;
+  const typed = desk.locked === undefined;
   const [api, setApi] = useState<GridApi<GridLine> | null>(null);
   const [asideShown, setAsideShown] = useState(true);
   const lines = useMemo(() => gridLines(model, asideShown), [model, asideShown]);
@@ -80,11 +88,11 @@ export default function RankingGrid(props: RankingGridProps) {
     () => [
       ...fixedColumns(barWidth),
       ...criteria.map((criterion, place) => ({
-        ...criterionColumn(criterion, place),
+        ...criterionColumn(criterion, place, typed),
         hide: hidden.has(criterion.id),
       })),
     ],
-    [barWidth, criteria, hidden],
+    [barWidth, criteria, hidden, typed],
   );
   const defaults = useMemo(() => ({ ...defaultColumn, floatingFilter: filtersShown }), [filtersShown]);
   useChosenRow(api, chosen, lines);
@@ -101,50 +109,62 @@ export default function RankingGrid(props: RankingGridProps) {
     tellView(ready);
   };
   return (
-    <GridSheetContext value={drawing}>
-      <div className={tall ? 'rk-grid rk-grid-tall' : 'rk-grid'}>
-        <AgGridReact<GridLine>
-          theme={gridTheme}
-          styleNonce={props.nonce}
-          rowData={lines}
-          columnDefs={columns}
-          defaultColDef={defaults}
-          getRowId={({ data }) => data.id}
-          getRowHeight={({ data }) => (data?.kind === 'band' ? BAND_HEIGHT : ROW_HEIGHT)}
-          domLayout={tall ? 'normal' : 'autoHeight'}
-          suppressRowVirtualisation={!tall}
-          suppressColumnVirtualisation={!tall}
-          headerHeight={HEADER_HEIGHT}
-          floatingFiltersHeight={FILTER_HEIGHT}
-          isFullWidthRow={({ rowNode }) => isBand(rowNode as IRowNode<GridLine>)}
-          fullWidthCellRenderer={DrawnBand}
-          postSortRows={({ nodes }) => keepGroups(nodes)}
-          alwaysPassFilter={isBand}
-          rowClassRules={rowClasses}
-          rowSelection={{
-            mode: 'singleRow',
-            checkboxes: false,
-            enableClickSelection: true,
-            isRowSelectable: (node) => !isBand(node),
-          }}
-          animateRows={!matchMedia('(prefers-reduced-motion: reduce)').matches}
-          ensureDomOrder
-          suppressCellFocus={false}
-          onGridReady={(event) => start(event.api)}
-          onGridPreDestroyed={() => onShown(null)}
-          onFilterChanged={(event) => takeFilter(event.api)}
-          onSortChanged={(event) => tellView(event.api)}
-          onSelectionChanged={(event) => {
-            if (event.source === 'rowClicked' || event.source === 'spaceKey')
-              onChoose(event.api.getSelectedNodes()[0]?.id ?? null);
-          }}
-          onCellKeyDown={({ event, node }) => {
-            if (event instanceof KeyboardEvent && event.key === 'Enter' && node.data?.kind === 'site')
-              onChoose(node.data.id);
-          }}
-        />
-      </div>
-    </GridSheetContext>
+    <FigureDeskContext value={desk}>
+      <GridSheetContext value={drawing}>
+        <div className={tall ? 'rk-grid rk-grid-tall' : 'rk-grid'}>
+          <AgGridReact<GridLine>
+            theme={gridTheme}
+            styleNonce={props.nonce}
+            rowData={lines}
+            columnDefs={columns}
+            defaultColDef={defaults}
+            getRowId={({ data }) => data.id}
+            getRowHeight={({ data }) => (data?.kind === 'band' ? BAND_HEIGHT : ROW_HEIGHT)}
+            domLayout={tall ? 'normal' : 'autoHeight'}
+            suppressRowVirtualisation={!tall}
+            suppressColumnVirtualisation={!tall}
+            headerHeight={HEADER_HEIGHT}
+            floatingFiltersHeight={FILTER_HEIGHT}
+            isFullWidthRow={({ rowNode }) => isBand(rowNode as IRowNode<GridLine>)}
+            fullWidthCellRenderer={DrawnBand}
+            postSortRows={({ nodes }) => keepGroups(nodes)}
+            alwaysPassFilter={isBand}
+            rowClassRules={rowClasses}
+            rowSelection={{
+              mode: 'singleRow',
+              checkboxes: false,
+              enableClickSelection: true,
+              isRowSelectable: (node) => !isBand(node),
+            }}
+            animateRows={!matchMedia('(prefers-reduced-motion: reduce)').matches}
+            ensureDomOrder
+            suppressCellFocus={false}
+            onGridReady={(event) => start(event.api)}
+            onGridPreDestroyed={() => onShown(null)}
+            onFilterChanged={(event) => takeFilter(event.api)}
+            onSortChanged={(event) => tellView(event.api)}
+            onSelectionChanged={(event) => {
+              if (event.source === 'rowClicked' || event.source === 'spaceKey')
+                onChoose(event.api.getSelectedNodes()[0]?.id ?? null);
+            }}
+            onCellKeyDown={(pressed) => {
+              const { event, node } = pressed;
+              if (!(event instanceof KeyboardEvent) || event.key !== 'Enter' || node.data?.kind !== 'site')
+                return;
+              const columnId = 'column' in pressed ? pressed.column.getColId() : '';
+              const figure = criteria.find(({ id }) => id === columnId);
+              if (!figure) onChoose(node.data.id);
+              else if (event.shiftKey || !typed || !isEntered(figure)) desk.onOpen(node.data.id, figure.id);
+            }}
+            onCellDoubleClicked={({ node, column }) => {
+              const figure = criteria.find(({ id }) => id === column.getColId());
+              if (figure && node.data?.kind === 'site' && !(typed && isEntered(figure)))
+                desk.onOpen(node.data.id, figure.id);
+            }}
+          />
+        </div>
+      </GridSheetContext>
+    </FigureDeskContext>
   );
 }
 

@@ -85,7 +85,7 @@ export function RankingScreen({ studyId, title, start, viewer, address, nonce }:
           onView={setView}
         >
           {ranking.state !== 'ranked' && beforeRanks(ranking.state)}
-          <RankingSheets {...{ studyId, live, sheet, address, nonce, locked, shown, onShown, bar }} />
+          <RankingSheets {...{ studyId, live, sheet, address, nonce, locked, viewer, shown, onShown, bar }} />
         </RankingViews>
       ) : (
         <>

@@ -1,6 +1,8 @@
 import { lazy, Suspense, useDeferredValue, useMemo, useState, type ReactNode, type RefObject } from 'react';
 import { useAddressParam } from '#components/live/address.ts';
 import { useStep } from '#components/live/hooks.ts';
+import { figureLockOf } from '#components/figures/lock.ts';
+import { useFigureDesk } from '#components/figures/use-figure-desk.tsx';
 import { Button } from '#components/ui/Button.tsx';
 import { formatNumber } from '#contract/format.ts';
 import { rowOf, rowsOf, type RankingRow } from '#contract/ranking-rows.ts';
@@ -10,6 +12,7 @@ import { Contributions } from './Contributions.tsx';
 import { RankingList } from './RankingList.tsx';
 import { RankingTable } from './RankingTable.tsx';
 import type { LiveRanking } from './use-ranking.ts';
+import type { Viewer } from './viewer.ts';
 import { useBarWidth, useGridFits } from './use-wide.ts';
 import { WeightPanel } from './WeightPanel.tsx';
 
@@ -32,6 +35,7 @@ interface SheetsProps {
   address: RankingAddress;
   nonce: string;
   locked: string | undefined;
+  viewer: Viewer;
   /** Asks the grid for the sites in sight; null without one. */
   shown: RefObject<(() => string[]) | null>;
   onShown: (ask: (() => string[]) | null) => void;
@@ -45,6 +49,7 @@ const LIST_STEP = 50;
 export function RankingSheets(props: SheetsProps) {
   const { studyId, live, sheet, address, nonce, locked, shown, onShown, bar } = props;
   const { ranking, weights } = live;
+  const { desk, sheet: figureSheet } = useFigureDesk(studyId, live, figureLockOf(props.viewer));
   // The sliders must not wait for a long grid: it follows a moment later.
   const model = useDeferredValue(live.model);
   const [code, setCode] = useAddressParam('site', address.site);
@@ -110,10 +115,19 @@ export function RankingSheets(props: SheetsProps) {
               chosen={chosenId}
               onChoose={choose}
               onShown={onShown}
+              desk={desk}
             />
           </Suspense>
         ) : (
           <RankingTable sheet={sheet} chosen={code} />
+        )}
+        {gridFits && model && (
+          <p className="caption rk-keys">
+            {desk.locked === undefined
+              ? 'Enter or a double click on an entered figure types it: 300, or low / likely / high. '
+              : ''}
+            Shift Enter opens a figure’s source and evidence.
+          </p>
         )}
       </div>
       <div className="rk-phone">
@@ -129,6 +143,7 @@ export function RankingSheets(props: SheetsProps) {
         <WeightPanel studyId={studyId} columns={sheet.columns} set={weights} locked={locked} />
         {inView && <Contributions row={inView} sheet={sheet} studyId={studyId} />}
       </div>
+      {figureSheet}
     </>
   );
 }

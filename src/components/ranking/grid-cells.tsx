@@ -1,10 +1,13 @@
-import type { CustomInnerHeaderProps, CustomCellRendererProps } from 'ag-grid-react';
+import type { CustomCellEditorProps, CustomCellRendererProps, CustomInnerHeaderProps } from 'ag-grid-react';
 import { createContext, useContext } from 'react';
+import { FigureEditor } from '#components/figures/FigureEditor.tsx';
+import { knownAt } from '#components/figures/known.ts';
+import type { FigureDesk } from '#components/figures/use-figure-desk.tsx';
 import { failsAt, OverallCell, RankCell, SetAsideBand, SiteCell } from './cells.tsx';
 import { ColumnHead, OverallHead } from './ColumnHead.tsx';
 import type { Sheet } from './columns.ts';
 import { FigureCell } from './FigureCell.tsx';
-import { rowOfLine, type GridLine } from './grid-rows.ts';
+import { figureAt, rowOfLine, type GridLine } from './grid-rows.ts';
 
 export const ROW_HEIGHT = 54;
 export const BAND_HEIGHT = 36;
@@ -55,6 +58,68 @@ export function DrawnFigure({ data, column: gridColumn }: Cell) {
       contribution={contribution}
       decimals={column.decimals}
       fails={failsAt(row, column.criterion.id)}
+      known={data?.kind === 'site' ? knownAt(data.model.figures, data.listed.site, column.place) : undefined}
+      step={
+        contribution.figure === null
+          ? undefined
+          : (column.criterion.steps?.[contribution.figure] ?? undefined)
+      }
+    />
+  );
+}
+
+export const FigureDeskContext = createContext<FigureDesk | null>(null);
+
+/** The editor of an entered figure, over its cell. */
+export function FigureCellEditor({
+  data,
+  column: gridColumn,
+  eventKey,
+  stopEditing,
+  api,
+  node,
+}: CustomCellEditorProps<GridLine>) {
+  const desk = useContext(FigureDeskContext);
+  if (!desk || data.kind !== 'site') return null;
+  const { figures } = data.model;
+  const place = figures.criteria.findIndex(({ id }) => id === gridColumn.getColId());
+  const criterion = figures.criteria[place];
+  const site = figures.sites[data.listed.site];
+  if (!criterion || !site) return null;
+  const known = knownAt(figures, data.listed.site, place)?.particulars ?? {};
+  const focusCell = (): void => {
+    if (node.rowIndex !== null) api.setFocusedCell(node.rowIndex, gridColumn);
+  };
+  const leave = (): void => {
+    stopEditing();
+    // The editor goes in the next frame, and would take the focus with it.
+    requestAnimationFrame(focusCell);
+  };
+  /** A saved figure may move its site to another rank; the keyboard goes with it, unless it is elsewhere by then. */
+  const followRow = (): void => {
+    const follow = (): void => {
+      api.removeEventListener('modelUpdated', follow);
+      if (document.activeElement === document.body) focusCell();
+    };
+    api.addEventListener('modelUpdated', follow);
+  };
+  return (
+    <FigureEditor
+      studyId={desk.studyId}
+      site={site}
+      criterion={criterion}
+      shown={{ value: figureAt(data, place) ?? null, known }}
+      pressed={eventKey}
+      onSaved={(saved, entry) => {
+        desk.onSaved(criterion.id, saved, entry);
+        leave();
+        followRow();
+      }}
+      onLeave={leave}
+      onOpen={() => {
+        stopEditing();
+        desk.onOpen(site.siteId, criterion.id);
+      }}
     />
   );
 }

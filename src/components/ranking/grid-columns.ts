@@ -1,5 +1,6 @@
 import type { ColDef } from 'ag-grid-community';
 import { formatFull } from '#contract/format.ts';
+import { isEntered } from '#components/figures/figure.ts';
 import type { Criterion } from '#contract/criterion.ts';
 import {
   DrawnColumnHead,
@@ -8,6 +9,7 @@ import {
   DrawnOverallHead,
   DrawnRank,
   DrawnSite,
+  FigureCellEditor,
 } from './grid-cells.tsx';
 import { compareFigures, figureAt, rowOfLine, type GridLine } from './grid-rows.ts';
 
@@ -73,12 +75,23 @@ export function fixedColumns(barWidth: number): ColDef<GridLine>[] {
   ];
 }
 
-/** A criterion's figures with their values under them. */
+/**
+ * A criterion's figures with their values under them.
+ * @param typed whether this person may type figures here
+ */
 export function criterionColumn(
-  { id, name }: Pick<Criterion, 'id' | 'name'>,
+  criterion: Pick<Criterion, 'id' | 'name' | 'source'>,
   place: number,
+  typed: boolean,
 ): ColDef<GridLine> {
+  const { id, name } = criterion;
   return {
+    editable: ({ data }) => typed && isEntered(criterion) && data?.kind === 'site',
+    cellEditor: FigureCellEditor,
+    cellEditorPopup: true,
+    // The editor writes by itself; the grid's lines come back with what was saved.
+    valueSetter: () => false,
+    suppressKeyboardEvent: ({ event, editing }) => editing || (event.key === 'Enter' && event.shiftKey),
     colId: id,
     headerName: name,
     width: 104,

@@ -1,4 +1,6 @@
 import { useCallback, useMemo } from 'react';
+import type { Entry } from '#components/figures/figure.ts';
+import { withEntry } from '#components/figures/known.ts';
 import type { ApiError } from '#components/live/api.ts';
 import { useApi } from '#components/live/hooks.ts';
 import { useStudyEvents, type LiveEvent } from '#components/live/study-events.ts';
@@ -27,6 +29,8 @@ export interface LiveRanking {
   staleRevision: number | null;
   error: ApiError | undefined;
   again: () => void;
+  /** Shows a figure as it was just saved, until all figures have been read again. */
+  enter: (at: { siteId: string; criterionId: string }, entry: Entry) => void;
 }
 
 /** A study's ranking, weighed on this screen and kept up with everyone's changes. */
@@ -59,7 +63,12 @@ export function useRanking(studyId: string, start: RankingStart, whose: WeightsO
     () => (model ? presentRanking(model, whose, DRAWN_ROWS) : start.ranking),
     [model, whose, start.ranking],
   );
+  const enter = useCallback<LiveRanking['enter']>(
+    (at, entry) => void mutate((figures) => figures && withEntry(figures, at, entry), { revalidate: true }),
+    [mutate],
+  );
   return {
+    enter,
     model,
     ranking,
     weights,
