@@ -4,6 +4,7 @@ import type { Position } from 'geojson';
 import { feature } from 'topojson-client';
 import type { GeometryCollection, Topology } from 'topojson-specification';
 import { CELL_UNITS, COLUMNS, ROWS, UNITS_PER_DEG, cellRing, cornerOf } from '#core/downrange/data/cells.ts';
+import { ringArea } from '#core/downrange/area.ts';
 import type { Country, LandData, LandPiece } from '#core/downrange/data/land-data.ts';
 import type { SettlementData } from '#core/downrange/data/settlement-data.ts';
 import { cutPolygons } from '../tiles/planar.ts';
@@ -77,21 +78,18 @@ export function worldLand(settlements: SettlementData): LandData {
   const polygons = polygonsByCode(settlements);
   const totals = countryTotals();
   const codes = [...polygons.keys()].sort();
-  const countries = codes.map((code): Country => ({
-    code,
-    name: countryName(code),
-    people: totals.get(code) ?? null,
-  }));
   const found = new Map<number, LandPiece[]>();
-  codes.forEach((code, country) => {
+  const countries = codes.map((code, country): Country => {
     const inCell = new Map<number, Paths64>();
     for (const rings of polygons.get(code) ?? [])
       for (const cell of cellsUnder(rings[0] ?? [])) {
         const parts = partsInCell(rings, cell);
         if (parts.length > 0) inCell.set(cell, [...(inCell.get(cell) ?? []), ...parts]);
       }
-    for (const [cell, parts] of inCell)
-      found.set(cell, [...(found.get(cell) ?? []), pieceOf(country, cell, parts)]);
+    const pieces = [...inCell].map(([cell, parts]) => [cell, pieceOf(country, cell, parts)] as const);
+    for (const [cell, piece] of pieces) found.set(cell, [...(found.get(cell) ?? []), piece]);
+    const land = pieces.flatMap(([, { rings }]) => rings.map(ringArea)).reduce((sum, area) => sum + area, 0);
+    return { code, name: countryName(code), people: totals.get(code) ?? null, land };
   });
   const cells = new Map([...found].sort(([a], [b]) => a - b));
   return { totalsYear: TOTALS_YEAR, countries, cells };

@@ -63,4 +63,15 @@ export const ascentReferences = {
     '14 CFR Part 420, Appendix B, equations B46 to B69: impact point on the ellipsoid along a Keplerian arc',
 } as const;
 
+/** Sources of the downrange screening. */
+export const downrangeReferences = {
+  part420:
+    '14 CFR part 420 (United States), sections 420.19 to 420.25: classes of launch vehicles, site location review',
+  appendixA: '14 CFR part 420, appendix A: flight corridor without a trajectory, tables A-1 to A-3',
+  appendixC: '14 CFR part 420, appendix C: casualty expectation, tables C-2 and C-3',
+  karney: 'Karney, Algorithms for geodesics, Journal of Geodesy 87 (2013): geodesics on the ellipsoid',
+  snyder:
+    'Snyder, Map Projections: A Working Manual, USGS Professional Paper 1395 (1987), equation 3-12: authalic latitude',
+} as const;
+
 export type ReferenceKey = keyof typeof references;

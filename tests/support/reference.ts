@@ -33,6 +33,10 @@ const columns = {
   'decision-topsis': ['rows', 'weights', 'place'],
   'decision-acceptability': ['rows', 'model', 'quantity', 'site', 'place'],
   'decision-concordance': ['rankings'],
+  corridor: ['quantity', 'class', 'at_nm'],
+  'downrange-geodesic': ['quantity', 'latitude_deg', 'longitude_deg', 'azimuth_deg', 'range_nm'],
+  'downrange-casualty': ['case', 'step'],
+  'downrange-data': ['quantity', 'latitude_deg', 'longitude_deg'],
   'random-streams': ['generator', 'place'],
 } as const satisfies Record<string, readonly string[]>;
 

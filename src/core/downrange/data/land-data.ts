@@ -7,6 +7,8 @@ export interface Country {
   readonly name: string;
   /** All its people in the year of the totals; null where no total is known. */
   readonly people: number | null;
+  /** All its land, m². */
+  readonly land: number;
 }
 
 /** What one country has of one cell. */
@@ -27,10 +29,11 @@ export interface LandData {
   readonly cells: ReadonlyMap<number, readonly LandPiece[]>;
 }
 
-function writeCountry({ code, name, people }: Country, pbf: PbfWriter): void {
+function writeCountry({ code, name, people, land }: Country, pbf: PbfWriter): void {
   pbf.writeStringField(1, code);
   pbf.writeStringField(2, name);
   if (people !== null) pbf.writeVarintField(3, people);
+  pbf.writeVarintField(4, Math.round(land));
 }
 
 /** Ring by ring, each point as steps from the one before, the first from the cell's corner. */
@@ -66,11 +69,12 @@ export function encodeLand(data: LandData): Uint8Array {
 }
 
 function readCountry(pbf: PbfReader): Country {
-  const read = { code: '', name: '', people: null as number | null };
+  const read = { code: '', name: '', people: null as number | null, land: 0 };
   return pbf.readMessage((tag, into) => {
     if (tag === 1) into.code = pbf.readString();
     if (tag === 2) into.name = pbf.readString();
     if (tag === 3) into.people = pbf.readVarint();
+    if (tag === 4) into.land = pbf.readVarint();
   }, read);
 }
 
