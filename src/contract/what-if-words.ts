@@ -20,6 +20,8 @@ export interface ChangeLine {
   what: string;
   from: string;
   to: string;
+  /** Where one change is of many figures: each of them, from and to. Then `from` and `to` are empty. */
+  each: string[];
   /** What of the study falls away with it; empty where nothing does. */
   falls: string;
 }
@@ -61,12 +63,11 @@ function weightLines(
   const before = weighing(criteria, statement).shares;
   const after = weighing(criteria, weights).shares;
   const changed = criteria.filter(({ id }) => !isSame(before?.[id] ?? 0, after?.[id] ?? 0));
-  const inWords = (shares: typeof before): string =>
-    shares === null
-      ? 'none'
-      : changed.map(({ id, name }) => `${name} ${formatNumber(shares[id] ?? 0, WEIGHT_DECIMALS)}`).join(', ');
-  const what = changed.length === 0 && before && after ? 'Weights, the same as the study’s' : 'Weights';
-  return [{ at: { kind: 'weights' }, what, from: inWords(before), to: inWords(after), falls: '' }];
+  const inWords = (shares: typeof before, id: string): string =>
+    shares === null ? 'none' : formatNumber(shares[id] ?? 0, WEIGHT_DECIMALS);
+  const each = changed.map(({ id, name }) => `${name} ${inWords(before, id)} → ${inWords(after, id)}`);
+  const what = each.length === 0 ? 'Weights, stated anew and the same as the study’s' : 'Weights';
+  return [{ at: { kind: 'weights' }, what, from: '', to: '', each, falls: '' }];
 }
 
 const WEIGHT_DECIMALS = 3;
@@ -82,6 +83,7 @@ function limitLines({ limits }: WhatIfChanges, { criteria }: RankingFigures): Ch
         what: `Limit of ${criterion.name}`,
         from: limitInFull(criterion, criterion.limit),
         to: limitInFull(criterion, limit),
+        each: [],
         falls: '',
       },
     ];
@@ -103,6 +105,7 @@ function figureLines(changes: WhatIfChanges, figures: RankingFigures): ChangeLin
         what: `${criterion.name} of ${figures.sites[site]?.name ?? ''}`,
         from: figureInFull(criterion, typeof cell === 'number' ? cell : null),
         to: figureInFull(criterion, value),
+        each: [],
         falls: fallsInWords(figures, { site, place, value }),
       },
     ];
@@ -133,6 +136,7 @@ function leftOutLines({ leftOut }: WhatIfChanges, { sites }: RankingFigures): Ch
       what: name,
       from: 'in the ranking',
       to: 'left out',
+      each: [],
       falls: '',
     }));
 }

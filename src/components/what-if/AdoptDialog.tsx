@@ -77,7 +77,8 @@ export function AdoptDialog(props: AdoptDialogProps) {
   );
 }
 
-function sentenceOf({ at, what, from, to, falls }: ChangeLine): string {
+function sentenceOf({ at, what, from, to, each, falls }: ChangeLine): string {
   if (at.kind === 'left-out') return `${what} is removed from Sites; it can be brought back there.`;
+  if (at.kind === 'weights') return each.length > 0 ? `${what}: ${each.join(', ')}.` : `${what}.`;
   return `${what}: ${from} becomes ${to}${falls ? `; ${falls}` : ''}.`;
 }

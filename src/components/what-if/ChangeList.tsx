@@ -14,7 +14,7 @@ export function ChangeList({ lines, onTakeBack }: ChangeListProps) {
     return <p className="caption">Nothing is tried yet: the what-if is the study’s ranking.</p>;
   return (
     <TableScroll label="Changes tried">
-      <table className="table" data-dense="">
+      <table className="wi-changes table" data-dense="">
         <thead>
           <tr>
             <th scope="col">Change</th>
@@ -34,8 +34,20 @@ export function ChangeList({ lines, onTakeBack }: ChangeListProps) {
                 {line.what}
                 {line.falls && <span className="sub">{line.falls}</span>}
               </th>
-              <td>{line.from}</td>
-              <td>{line.to}</td>
+              {line.each.length > 0 ? (
+                <td colSpan={2}>
+                  <ul className="wi-each">
+                    {line.each.map((one) => (
+                      <li key={one}>{one}</li>
+                    ))}
+                  </ul>
+                </td>
+              ) : (
+                <>
+                  <td>{line.from}</td>
+                  <td>{line.to}</td>
+                </>
+              )}
               {onTakeBack && (
                 <td className="wi-take-back">
                   <Button

@@ -86,6 +86,7 @@ export function WhatIfDesk({
         }
         revision={figures.revision}
       />
+      <WhatIfFinding study={trial.study.ranking} here={trial.here.ranking} />
       <div className="rk-panels wi-panels">
         <div className="wi-column">
           <Panel title="Weights tried" caption={locked ?? 'Points for this what-if alone.'}>
@@ -103,7 +104,6 @@ export function WhatIfDesk({
           {locked === undefined && <Tries figures={figures} changes={changes} step={step} />}
         </div>
         <div className="wi-column">
-          <WhatIfFinding study={trial.study.ranking} here={trial.here.ranking} />
           <Panel
             title="Rank moves"
             caption="From the study’s ranking at the left to this what-if’s at the right."

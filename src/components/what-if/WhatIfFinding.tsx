@@ -8,13 +8,13 @@ export function WhatIfFinding({ study, here }: { study: Ranking; here: Ranking }
   const was = rankingFinding(study);
   const lead = leadInWords(study, here);
   return (
-    <section className="panel" aria-label="What comes of it">
+    <section className="wi-outcome" aria-label="What comes of it">
       <p className="wi-finding" role="status">
         <span className="sr-only">In this what-if: </span>
         {finding.leads !== null && <em>{finding.leads}</em>}
         {finding.rest}
       </p>
-      <p className="why">
+      <p className="wi-why">
         In the study: {was.leads}
         {was.rest} {lead}
       </p>

@@ -37,7 +37,7 @@ export function WhatIfList({ live, onOpen }: WhatIfListProps) {
   return (
     <>
       <TableScroll label="What-ifs kept">
-        <table className="table">
+        <table className="wi-list table">
           <thead>
             <tr>
               <th scope="col">Name</th>
