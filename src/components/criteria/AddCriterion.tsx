@@ -100,6 +100,7 @@ function ComputedForm(props: AddProps) {
   });
   const quantity = form.watch('quantity');
   const { scope, unit, overManifest } = QUANTITIES[quantity];
+  const overManifestInWords = scope === 'either' ? `for the manifest: ${overManifest}` : overManifest;
   const orbits = props.orbits.map(({ id, name }) => ({ value: id, name }));
   const orbitId = form.watch('orbitId') ?? null;
   const orbitName = props.orbits.find(({ id }) => id === orbitId)?.name ?? null;
@@ -111,7 +112,7 @@ function ComputedForm(props: AddProps) {
     <form noValidate className="mt-5 grid gap-4" onSubmit={(event) => void submit(event)}>
       <Select
         label="Quantity"
-        hint={overManifest ? `${unit}; for the manifest: ${overManifest}` : unit}
+        hint={[unit, overManifestInWords].filter(Boolean).join('; ')}
         choices={QUANTITY_KEYS.map((key) => ({ value: key, name: QUANTITIES[key].name }))}
         {...form.register('quantity', { onChange: () => form.setValue('orbitId', null) })}
       />

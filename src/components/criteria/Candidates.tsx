@@ -82,12 +82,7 @@ export function LeaderNote({ candidate, column, x, y }: LeaderNoteProps) {
   return (
     <g aria-hidden="true">
       <circle className="fill-signal" cx={round(at)} cy={round(y(candidate.value))} r="4" />
-      <text
-        className="signal-text halo"
-        x={round(at)}
-        y={TOP - 18}
-        textAnchor={onRight ? 'start' : 'end'}
-      >
+      <text className="signal-text halo" x={round(at)} y={TOP - 18} textAnchor={onRight ? 'start' : 'end'}>
         {`${candidate.site.name} ${figure}, value ${formatShare(candidate.value)}`}
       </text>
     </g>

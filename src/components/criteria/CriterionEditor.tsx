@@ -9,7 +9,7 @@ import { useKeptValues } from '#components/requirement/use-kept-values.ts';
 import { Button, ConfirmDialog, messageOf, Panel } from '#components/ui/index.ts';
 import type { Criterion, CriterionShape } from '#contract/criterion.ts';
 import { formatCount } from '#contract/format.ts';
-import type { RankingFigures } from '#contract/ranking.ts';
+import type { RankingFigures, WeighedCriterion } from '#contract/ranking.ts';
 import {
   changesOf,
   CRITERION_FIELDS,
@@ -156,7 +156,7 @@ function EditorForm(props: EditorProps) {
           changed.map((field) => (
             <span key={field} className="block">
               <span className="font-sans text-sm">{LABELS[field] ?? field}</span>{' '}
-              {inWords(version, field, groups)}
+              {inWords(version, field, { groups, span: column?.criterion.span, unit: criterion.unit })}
             </span>
           ))
         }
@@ -196,10 +196,21 @@ const LABELS: Partial<Record<keyof Criterion, string>> = {
   steps: 'Steps',
 };
 
-function inWords(version: Partial<Criterion>, field: keyof Criterion, groups: Groups): string {
-  const { limit = null, unit = '', steps = null, shape, levels, groupId } = version;
+interface Surroundings {
+  groups: Groups;
+  span: WeighedCriterion['span'] | undefined;
+  unit: string;
+}
+
+function inWords(
+  version: Partial<Criterion>,
+  field: keyof Criterion,
+  { groups, span, unit: keptUnit }: Surroundings,
+): string {
+  const { limit = null, unit = keptUnit, steps = null, shape, levels, groupId } = version;
   if (field === 'limit') return limitInWords({ limit, unit, steps });
-  if (field === 'shape') return shape ? shapeInWords(shape) : '';
+  if (field === 'shape')
+    return shape ? shapeInWords(shape, span?.kind === 'span' ? { span, unit: keptUnit } : undefined) : '';
   if (field === 'steps') return (steps ?? []).join(', ');
   if (field === 'groupId') return groups.items.find(({ id }) => id === groupId)?.name ?? 'none';
   if (field !== 'levels') return String(version[field] ?? '');

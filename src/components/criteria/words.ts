@@ -13,11 +13,11 @@ export const figureInWords = (value: number): string => formatNumber(value, deci
 const readFigure = (criterion: Pick<Criterion, 'steps'>, value: number): string =>
   stepInWords(criterion, value) ?? figureInWords(value);
 
-export function sourceInWords({ source, quantity, steps }: Criterion): string {
+export function sourceInWords({ source, quantity, orbitId, steps }: Criterion): string {
   if (source === 'text') return 'text, not weighed';
   if (source === 'rating') return `rating, ${steps?.at(0)} to ${steps?.at(-1)}`;
   if (source === 'entered') return 'entered';
-  return quantity && QUANTITIES[quantity].overManifest
+  return quantity && orbitId === null && QUANTITIES[quantity].overManifest
     ? `computed: ${QUANTITIES[quantity].overManifest}`
     : 'computed';
 }

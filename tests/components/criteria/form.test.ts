@@ -117,6 +117,12 @@ describe('in words', () => {
     expect(criteriaWhy([...criteria, rating])).toMatch('2 entered and 1 rated');
   });
 
+  test('where a computed criterion comes from: for the manifest how it comes to one figure, for an orbit no more', () => {
+    const turn: Criterion = { ...cost, source: 'computed', quantity: 'turn', unit: '°' };
+    expect(sourceInWords(turn)).toBe('computed: greatest of the orbits; dogleg or plane change');
+    expect(sourceInWords({ ...turn, orbitId: days.id })).toBe('computed');
+  });
+
   test('a shape by where its points lie in the criterion’s unit', () => {
     const levels = { span: { worst: 400, best: 200 }, unit: 'M€' };
     expect(shapeInWords({ kind: 'straight' }, levels)).toBe('straight between');
