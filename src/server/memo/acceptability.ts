@@ -60,7 +60,12 @@ function firstRankTable(facts: MemoFacts, answer: AcceptabilityOf): MemoTable {
   const leader = sites[0];
   const error = ({ confidence }: SiteAcceptability): string => {
     if (confidence === null) return '–';
-    return uncertainFigures === 0 ? 'none' : tableError(confidence, samples);
+    return uncertainFigures === 0 ? '–' : tableError(confidence, samples);
+  };
+  /** Without uncertain figures the factor is exact, not a share of draws. */
+  const sure = ({ confidence }: SiteAcceptability): string => {
+    if (confidence === null) return 'never leads';
+    return uncertainFigures === 0 ? formatNumber(confidence * 100, 1) : tableShare(confidence, samples);
   };
   return table(
     'First rank, confidence and the leader against each',
@@ -78,7 +83,7 @@ function firstRankTable(facts: MemoFacts, answer: AcceptabilityOf): MemoTable {
           cell(names.site(site.siteId)),
           cell(tableShare(site.shares[0] ?? 0, samples), true),
           cell(tableError(site.shares[0] ?? 0, samples)),
-          cell(site.confidence === null ? 'never first' : tableShare(site.confidence, samples)),
+          cell(sure(site)),
           cell(error(site)),
           cell(at === 0 ? '–' : tableShare(leader?.wins[at] ?? 0, samples)),
         ],
