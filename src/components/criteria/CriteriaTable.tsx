@@ -11,6 +11,9 @@ import type { WeightLevel } from '#contract/weights.ts';
 import { tableRows, type TableRow } from './table-rows.ts';
 import { directionInWords, levelsInWords, limitInWords, sourceInWords } from './words.ts';
 
+/** Id of what says why weights are locked. */
+export const LOCK_NOTE = 'weights-locked';
+
 interface CriteriaTableProps {
   /** Text criteria too, in their order. */
   items: readonly Criterion[];
@@ -21,6 +24,7 @@ interface CriteriaTableProps {
   names: Names;
   /** Whether weights are set by points, here in the table. */
   pointsShown: boolean;
+  /** Why weights cannot be changed; the element `LOCK_NOTE` says it, over the table. */
   weightsLocked: string | undefined;
   inputsLocked: string | undefined;
   chosen: string | null;
@@ -30,55 +34,48 @@ interface CriteriaTableProps {
 
 /** Every criterion, under its group, with its source, levels, limit and weight. */
 export function CriteriaTable(props: CriteriaTableProps) {
-  const { items, columns, pointsShown, weightsLocked } = props;
+  const { items, columns, pointsShown } = props;
   return (
-    <>
-      {weightsLocked && (
-        <p className="caption pb-2" id="weights-locked">
-          {weightsLocked}
-        </p>
-      )}
-      <div className="table-scroll" role="region" aria-label="Criteria" tabIndex={0}>
-        <table className="table">
-          <thead>
-            <tr>
-              <th scope="col">Criterion</th>
-              <th scope="col" className="cr-wide-only">
-                Levels<span className="unit">value 0 to 1</span>
-              </th>
-              <th scope="col" className="cr-wide-only">
-                Limit
-              </th>
-              {pointsShown && (
-                <th scope="col">
-                  Points<span className="unit">0 to {MOST_POINTS}</span>
-                </th>
-              )}
-              <th scope="col" className="num">
-                Weight<span className="unit">sum 1</span>
-              </th>
+    <div className="table-scroll" role="region" aria-label="Criteria" tabIndex={0}>
+      <table className="table">
+        <thead>
+          <tr>
+            <th scope="col">Criterion</th>
+            <th scope="col" className="cr-wide-only">
+              Levels<span className="unit">value 0 to 1</span>
+            </th>
+            <th scope="col" className="cr-wide-only">
+              Limit
+            </th>
+            {pointsShown && (
               <th scope="col">
-                <span className="sr-only">Order</span>
+                Points<span className="unit">0 to {MOST_POINTS}</span>
               </th>
-            </tr>
-          </thead>
-          <tbody>
-            {tableRows(items).map((row) =>
-              row.kind === 'group' ? (
-                <GroupRow key={row.groupId} {...props} groupId={row.groupId} />
-              ) : (
-                <CriterionRow
-                  key={row.criterion.id}
-                  {...props}
-                  row={row}
-                  column={columns.find((one) => one.criterion.id === row.criterion.id)}
-                />
-              ),
             )}
-          </tbody>
-        </table>
-      </div>
-    </>
+            <th scope="col" className="num">
+              Weight<span className="unit">sum 1</span>
+            </th>
+            <th scope="col">
+              <span className="sr-only">Order</span>
+            </th>
+          </tr>
+        </thead>
+        <tbody>
+          {tableRows(items).map((row) =>
+            row.kind === 'group' ? (
+              <GroupRow key={row.groupId} {...props} groupId={row.groupId} />
+            ) : (
+              <CriterionRow
+                key={row.criterion.id}
+                {...props}
+                row={row}
+                column={columns.find((one) => one.criterion.id === row.criterion.id)}
+              />
+            ),
+          )}
+        </tbody>
+      </table>
+    </div>
   );
 }
 
@@ -102,7 +99,7 @@ function GroupRow({ groupId, ...props }: CriteriaTableProps & { groupId: string 
             points={weights.points[groupId] ?? 0}
             onChange={(points) => weights.give({ [groupId]: points })}
             locked={weightsLocked !== undefined}
-            describedBy={weightsLocked ? 'weights-locked' : undefined}
+            describedBy={weightsLocked ? LOCK_NOTE : undefined}
           />
         </td>
       )}
@@ -149,7 +146,7 @@ function CriterionRow({ row, column, ...props }: RowProps) {
               points={weights.points[id] ?? 0}
               onChange={(points) => weights.give({ [id]: points })}
               locked={weightsLocked !== undefined}
-              describedBy={weightsLocked ? 'weights-locked' : undefined}
+              describedBy={weightsLocked ? LOCK_NOTE : undefined}
             />
           )}
         </td>

@@ -14,7 +14,7 @@ import { originInWords, unjudgedInWords } from '#components/weights/words.ts';
 import type { Criterion } from '#contract/criterion.ts';
 import { weighing } from '#contract/weighing.ts';
 import type { WeightsOf } from '#contract/weights.ts';
-import { CriteriaTable } from './CriteriaTable.tsx';
+import { CriteriaTable, LOCK_NOTE } from './CriteriaTable.tsx';
 
 interface CriteriaWeightsProps {
   studyId: string;
@@ -49,11 +49,16 @@ export function CriteriaWeights({ studyId, whose, weights, weightsLocked, ...tab
       {weighed.length > 0 && <MethodBar desk={desk} />}
       {kept && !apart && (
         <div className="wt-share">
-          <p>{locked} The reason for the choice falls away with the first change.</p>
+          <p id={LOCK_NOTE}>{locked} The reason for the choice falls away with the first change.</p>
           <Button size="small" onClick={() => setApart(true)}>
             Set the study’s weights apart
           </Button>
         </div>
+      )}
+      {weightsLocked && (
+        <p className="caption pb-2" id={LOCK_NOTE}>
+          {weightsLocked}
+        </p>
       )}
       <CriteriaTable
         {...table}

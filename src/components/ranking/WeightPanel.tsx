@@ -66,7 +66,8 @@ function StudyCaption({ studyId, columns, set }: Omit<WeightPanelProps, 'locked'
   if (!origin) return <>They move everyone’s ranking at once.</>;
   return (
     <>
-      {originInWords(origin)}, by {METHOD_WAYS[method]}
+      {originInWords(origin)}
+      {origin.kind !== 'mean' && `, by ${METHOD_WAYS[method]}`}
       {reason ? `: ${reason}` : '.'} {since}
     </>
   );

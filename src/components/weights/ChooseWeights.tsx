@@ -90,7 +90,7 @@ export function ChooseWeights({ studyId, version, members, onChosen, onStale, on
         </p>
       )}
       <TextArea
-        label="Reason"
+        label="Reason for the choice"
         hint="Shown to every member and printed in the memo."
         value={reason}
         maxLength={2_000}

@@ -113,7 +113,7 @@ interface ConsistencyProps extends EditorProps {
   onShow: (pair: Pair) => void;
 }
 
-function Consistency({ level, onShow, statement, names }: ConsistencyProps) {
+function Consistency({ level, onShow, statement, names, locked }: ConsistencyProps) {
   const { consistency, ids } = level;
   if (!consistency)
     return <p className="caption">Two things cannot disagree; consistency is told from three on.</p>;
@@ -121,7 +121,7 @@ function Consistency({ level, onShow, statement, names }: ConsistencyProps) {
   return (
     <div className="wt-consistency">
       <p role="status" data-disagree={worst ? '' : undefined}>
-        {consistencyInWords(level, statement.judgements, names)}
+        {consistencyInWords(level, statement.judgements, names, !locked)}
       </p>
       <p className="caption">
         λmax <span className="num">{formatNumber(consistency.lambdaMax, 3)}</span> for{' '}

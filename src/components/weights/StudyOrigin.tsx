@@ -31,12 +31,12 @@ export function StudyOrigin({ studyId, set, items, locked, onChosen }: StudyOrig
     <Panel title="Where the study’s weights come from">
       <p>
         {originInWords(origin)}
-        {origin && `, by ${METHOD_WAYS[method]}`}
+        {origin && origin.kind !== 'mean' && `, by ${METHOD_WAYS[method]}`}
         {apart || reason === '' ? '.' : `: ${reason}`}
       </p>
       {apart && locked !== undefined && reason !== '' && <p className="wt-reason">{reason}</p>}
       {since && <p className="caption">{since}</p>}
-      {apart && locked === undefined && origin !== null && (
+      {apart && locked === undefined && origin !== null && !choosing && (
         <Reason key={reason} reason={reason} onReason={set.explain} />
       )}
       {locked === undefined && (

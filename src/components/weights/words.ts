@@ -57,6 +57,8 @@ export function consistencyInWords(
   { consistency }: WeightLevel,
   judgements: Weights['judgements'],
   names: Names,
+  /** Whether whoever reads it wrote it. */
+  own = true,
 ): string | null {
   if (!consistency) return null;
   const ratio = consistency.ratio ?? 0;
@@ -66,7 +68,7 @@ export function consistencyInWords(
   const wrote = ratioInFigures(ratioOf(judgements, a, b) ?? 1);
   // 0.1004 must not be printed as "0.10, above 0.10".
   const decimals = ratio < 0.105 ? 4 : 2;
-  return `Judgements disagree: consistency ratio ${formatNumber(ratio, decimals)}, above 0.10. Start with ${nameIn(names, a)} against ${nameIn(names, b)}: you wrote ${wrote}, the others imply about ${impliedInFigures(consistency.implied)}.`;
+  return `Judgements disagree: consistency ratio ${formatNumber(ratio, decimals)}, above 0.10. Start with ${nameIn(names, a)} against ${nameIn(names, b)}: ${own ? 'you wrote' : 'it says'} ${wrote}, the others imply about ${impliedInFigures(consistency.implied)}.`;
 }
 
 const COUNTS = ['no', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine', 'ten'];
