@@ -1,3 +1,4 @@
+import AxeBuilder from '@axe-core/playwright';
 import type { APIRequestContext, Locator, Page } from '@playwright/test';
 import type { Criterion, CriterionList } from '#contract/criterion.ts';
 import { fromApp, newStudy } from './support/studies.ts';
@@ -87,6 +88,9 @@ test('a value function is bent by dragging, by keys and by typing, and the last 
   await figure.press('Enter');
   const typed = { kind: 'piecewise', knots: [[0, 0], [0.75, 0.8], [1, 1]] }; // prettier-ignore
   await expect.poll(shape).toEqual(typed);
+
+  const { violations } = await new AxeBuilder({ page }).include('.vf-plot').include('.cr-shape').analyze();
+  expect(violations.map(({ id, nodes }) => `${id} ${nodes[0]?.html}`)).toEqual([]);
 
   await page.getByRole('button', { name: 'Add point' }).click();
   await expect(page.getByRole('textbox', { name: 'Figure of point 3' })).toHaveValue('250');
