@@ -115,7 +115,10 @@ function Answer({ model, sheet, answer, names, stale, onSave }: AnswerProps) {
     <div className={stale ? 'sv-stale' : undefined} aria-busy={stale || undefined}>
       <div className="sv-headline">
         <div>
-          <h2 role="status">{fact}.</h2>
+          <h2>{fact}.</h2>
+          <p className="sr-only" role="status">
+            {fact}.
+          </p>
           <p className="caption">
             {stale ? 'Drawn before the last change of weights, figures or settings. ' : ''}
             {behind}
