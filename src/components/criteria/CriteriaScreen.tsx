@@ -1,6 +1,7 @@
 import { useMemo, useState } from 'react';
 import { useAddressParam } from '#components/live/address.ts';
 import { useFinding } from '#components/live/hooks.ts';
+import { SourceNote } from '#components/figures/SourceNote.tsx';
 import { sheetOf } from '#components/ranking/columns.ts';
 import {
   BeforeRanks,
@@ -144,6 +145,7 @@ export function CriteriaScreen(props: CriteriaScreenProps) {
                 onChoose={setChosen}
                 onMove={(criterion, position) => void list.move(criterion, position).then(refresh)}
               />
+              {model && <SourceNote studyId={studyId} figures={model.figures} />}
               {open && (
                 <div className="mt-9">
                   <CriterionEditor

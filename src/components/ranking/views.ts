@@ -62,6 +62,12 @@ export const VIEWS: readonly RankingView[] = [
     needsRanks: false,
     load: () => import('../what-if/WhatIfView.tsx'),
   },
+  {
+    value: 'figures',
+    name: 'Figures',
+    needsRanks: false,
+    load: () => import('../figures/FiguresView.tsx'),
+  },
 ];
 
 /** The view an address asks for; the ranking itself where it asks for none that exists. */

@@ -1,9 +1,11 @@
 import { useEffect, useEffectEvent, useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { ApiError } from '#components/live/api.ts';
+import { FigureSheet } from '#components/figures/FigureSheet.tsx';
+import { knownWords } from '#components/figures/known.ts';
 import { useApi } from '#components/live/hooks.ts';
 import { Button } from '#components/ui/Button.tsx';
-import { NumberField, TextArea, TextField } from '#components/ui/Field.tsx';
+import { NumberField, Select, TextArea, TextField, type Choice } from '#components/ui/Field.tsx';
 import { SideSheet } from '#components/ui/SideSheet.tsx';
 import { Notice } from '#components/ui/States.tsx';
 import type { Criterion } from '#contract/criterion.ts';
@@ -60,20 +62,34 @@ export function SiteDetails(props: DetailsProps) {
   const entered = data?.items.filter(({ source }) => source !== 'computed');
   // What is typed rests on the site as it was opened, whatever arrives meanwhile: a save then meets the conflict.
   const [base, setBase] = useState(props.site);
+  const [figure, setFigure] = useState<Criterion | null>(null);
   return (
-    <SideSheet open onClose={props.onClose} title={props.site.name}>
-      {error && <Notice fact="The criteria could not be read.">{error.message}</Notice>}
-      {entered && (
-        <DetailsForm
-          key={`${base.id}/${base.version}`}
-          {...props}
-          site={base}
-          latest={props.site}
-          onLatest={() => setBase(props.site)}
-          criteria={entered}
+    <>
+      <SideSheet open onClose={props.onClose} title={props.site.name}>
+        {error && <Notice fact="The criteria could not be read.">{error.message}</Notice>}
+        {entered && (
+          <DetailsForm
+            key={`${base.id}/${base.version}`}
+            {...props}
+            site={base}
+            latest={props.site}
+            onLatest={() => setBase(props.site)}
+            criteria={entered}
+            onFigure={setFigure}
+          />
+        )}
+      </SideSheet>
+      {figure && (
+        <FigureSheet
+          studyId={props.studyId}
+          siteId={props.site.id}
+          siteName={props.site.name}
+          criterion={figure}
+          locked={props.locked ?? undefined}
+          onClose={() => setFigure(null)}
         />
       )}
-    </SideSheet>
+    </>
   );
 }
 
@@ -82,9 +98,21 @@ interface FormProps extends DetailsProps {
   /** The site as it is now; taken over while nothing is typed. */
   latest: Site;
   onLatest: () => void;
+  /** Opens a figure's own sheet. */
+  onFigure: (criterion: Criterion) => void;
 }
 
-function DetailsForm({ site, criteria, locked, onSave, onKeep, onClose, latest, onLatest }: FormProps) {
+function DetailsForm({
+  onFigure,
+  site,
+  criteria,
+  locked,
+  onSave,
+  onKeep,
+  onClose,
+  latest,
+  onLatest,
+}: FormProps) {
   const before = typedOf(site, criteria);
   const { register, formState, handleSubmit, setError } = useForm<Typed>({
     defaultValues: before,
@@ -109,8 +137,10 @@ function DetailsForm({ site, criteria, locked, onSave, onKeep, onClose, latest, 
         setConflict({ patch, current: failure.current as ChangedSite });
         return;
       }
-      const field = [...CELLS, 'notes' as const].find((key) => key === failure.errors[0]?.path);
-      setError(field ?? 'root', { message: failure.errors[0]?.message ?? failure.message });
+      const { path, message } = failure.errors[0] ?? { path: '', message: failure.message };
+      const field = [...CELLS, 'notes' as const].find((key) => key === path);
+      const entered = criteria.find(({ id }) => path === `values.${id}`);
+      setError(field ?? (entered ? `values.${entered.id}` : 'root'), { message });
     }
   };
   const submit = handleSubmit((typed) => save(site, patchOf(typed, before, criteria)));
@@ -141,7 +171,8 @@ function DetailsForm({ site, criteria, locked, onSave, onKeep, onClose, latest, 
           validate: (text) => SiteNotes.safeParse(text).success || 'Notes have up to 2,000 characters.',
         })}
       />
-      {criteria.map(({ id, name, unit, source }) => {
+      {criteria.map((criterion) => {
+        const { id, name, unit, source, steps } = criterion;
         const rule = {
           validate: (text: string) =>
             source === 'text' ||
@@ -150,10 +181,20 @@ function DetailsForm({ site, criteria, locked, onSave, onKeep, onClose, latest, 
             `${name} takes a number.`,
         };
         const looks = { label: name, optional: true, readOnly: locked !== null, error: errors.values?.[id] };
-        return source === 'text' ? (
-          <TextField key={id} {...looks} {...register(`values.${id}`, rule)} />
-        ) : (
-          <NumberField key={id} {...looks} unit={unit || undefined} {...register(`values.${id}`, rule)} />
+        const field = register(`values.${id}`, rule);
+        if (source === 'text') return <TextField key={id} {...looks} {...field} />;
+        return (
+          <div key={id}>
+            {source === 'rating' ? (
+              <Select {...looks} disabled={locked !== null} choices={stepChoices(steps)} {...field} />
+            ) : (
+              <NumberField {...looks} unit={unit || undefined} {...field} />
+            )}
+            <button type="button" className="fig-more" onClick={() => onFigure(criterion)}>
+              {figureWords(site, id)}
+              <span className="sr-only"> of {name}</span>
+            </button>
+          </div>
         );
       })}
       {errors.root && (
@@ -172,6 +213,19 @@ function DetailsForm({ site, criteria, locked, onSave, onKeep, onClose, latest, 
       </Button>
     </form>
   );
+}
+
+const stepChoices = (steps: readonly string[] | null): Choice[] => [
+  { value: '', name: 'No figure' },
+  ...(steps ?? []).map((step, at) => ({ value: String(at), name: `${step} (${at})` })),
+];
+
+/** What is known of a figure, as the way to more: "Low 250 and high 360; source: Port office". */
+function figureWords(site: Site, criterionId: string): string {
+  const words = knownWords({ particulars: site.particulars[criterionId] ?? {}, files: 0 });
+  return words === ''
+    ? 'Low, high, source and evidence'
+    : words.replace(/^./, (letter) => letter.toUpperCase());
 }
 
 const unitOf = (key: CellKey): string | undefined =>

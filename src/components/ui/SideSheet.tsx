@@ -16,6 +16,7 @@ export function SideSheet(props: SideSheetProps) {
 function OpenSheet({ onClose, title, children }: SideSheetProps) {
   const titleId = useId();
   const heading = useRef<HTMLHeadingElement>(null);
+  const sheet = useRef<HTMLElement>(null);
   useEffect(() => {
     const before = document.activeElement;
     heading.current?.focus();
@@ -25,13 +26,15 @@ function OpenSheet({ onClose, title, children }: SideSheetProps) {
   }, []);
   useEffect(() => {
     const leave = (event: KeyboardEvent) => {
-      if (event.key === 'Escape' && !document.querySelector('dialog[open]')) onClose();
+      // Of sheets over one another the last one goes.
+      const isLast = [...document.querySelectorAll('.side-sheet')].at(-1) === sheet.current;
+      if (event.key === 'Escape' && isLast && !document.querySelector('dialog[open]')) onClose();
     };
     document.addEventListener('keydown', leave);
     return () => document.removeEventListener('keydown', leave);
   }, [onClose]);
   return (
-    <aside className="side-sheet" aria-labelledby={titleId}>
+    <aside className="side-sheet" ref={sheet} aria-labelledby={titleId}>
       <div className="side-sheet-head">
         <h2 id={titleId} tabIndex={-1} ref={heading}>
           {title}
