@@ -54,6 +54,7 @@ export const ROUTES: Readonly<Record<string, RouteRules>> = {
   '/api/v1/openapi.json': { GET: 'public' },
   '/api/v1/evaluate': { POST: 'signed-in' },
   '/api/v1/impact-point': { POST: 'signed-in' },
+  '/api/v1/corridors': { POST: 'signed-in' },
   '/api/v1/decide': { POST: 'signed-in' },
   '/api/v1/pairwise': { POST: 'signed-in' },
   '/api/v1/concordance': { POST: 'signed-in' },

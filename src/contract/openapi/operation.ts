@@ -16,6 +16,8 @@ export interface Operation {
   /** A multipart body: what its parts are. */
   form?: z.ZodObject;
   answer?: z.ZodType | FileAnswer;
+  /** The kind of JSON that an answer is; application/json unless said. */
+  answerType?: string;
   /** 200 unless said; 204 goes without an answer. */
   status?: 200 | 201 | 204;
   /** Changes what exists: needs If-Match or `version`, and may be stale. */
@@ -83,7 +85,7 @@ function problemsOf(
 const isFile = (answer: z.ZodType | FileAnswer): answer is FileAnswer =>
   'type' in answer && !('parse' in answer);
 
-function success({ answer, versioned }: Operation) {
+function success({ answer, answerType = 'application/json', versioned }: Operation) {
   if (!answer) return { description: 'Done' };
   if (isFile(answer))
     return {
@@ -93,7 +95,7 @@ function success({ answer, versioned }: Operation) {
   const etag = { schema: { type: 'string' as const }, description: 'The version, for If-Match' };
   return {
     description: 'Done',
-    content: { 'application/json': { schema: answer } },
+    content: { [answerType]: { schema: answer } },
     ...(versioned ? { headers: { ETag: etag } } : {}),
   };
 }

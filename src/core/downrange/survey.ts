@@ -18,8 +18,8 @@ export interface SurveySettings {
   readonly placeDensity: number;
   /** Whether people beyond the listed settlements are spread over the land. */
   readonly spreads: boolean;
-  /** Effective casualty areas, m²; null leaves the expectation out. */
-  readonly casualtyAreas: CasualtyAreas | null;
+  /** Effective casualty areas, m². */
+  readonly casualtyAreas: CasualtyAreas;
 }
 
 /** Who and what lies in one area of a corridor. */
@@ -53,7 +53,7 @@ export interface CorridorSurvey {
   /** Along the flight line. */
   readonly stretches: readonly Stretch[];
   readonly first: FirstLand;
-  readonly expectation: CasualtyExpectation | null;
+  readonly expectation: CasualtyExpectation;
 }
 
 function surveyArea(
@@ -80,8 +80,7 @@ function expectationOf(
   corridor: Corridor,
   { settlements: inside, withoutFigure }: AreaSurvey,
   { casualtyAreas, placeDensity, spreads }: SurveySettings,
-): CasualtyExpectation | null {
-  if (!casualtyAreas) return null;
+): CasualtyExpectation {
   const each = settlementExpectations(corridor, world.settlements, inside, placeDensity, casualtyAreas);
   const spread = spreads ? spreadExpectation(corridor, world.spread(placeDensity), casualtyAreas) : null;
   return {

@@ -138,8 +138,8 @@ describe('the expectation among spread people', () => {
       0,
     );
     const expected = 0.9973002 * (0.1 / 643) * secondsTimesArea * density;
-    expect(survey.expectation?.spread).toBeWithin(expected, { kind: 'rel', value: 1e-3 });
-    expect(survey.expectation?.complete).toBe(true);
+    expect(survey.expectation.spread).toBeWithin(expected, { kind: 'rel', value: 1e-3 });
+    expect(survey.expectation.complete).toBe(true);
   });
 
   test('says that it is a least figure where a country’s total is unknown', () => {
