@@ -68,7 +68,7 @@ function inWords(facts: MemoFacts, { concordance, site, criterion }: Agreed): st
   const { judges } = facts.members;
   const w =
     concordance.kind === 'agreement'
-      ? `Kendall’s W is ${formatNumber(concordance.w, 3)}: 1 where all rank alike, 0 where there is no agreement.`
+      ? `Kendall’s W is ${formatNumber(concordance.w, 2)}: 1 where all rank alike, 0 where there is no agreement.`
       : 'Kendall’s W is undefined: every member ties every site.';
   const who = (said: readonly number[], text: (x: number) => string): string =>
     listInWords(judges.map(({ name }, at) => `${name} ${text(said[at] ?? 0)}`));
