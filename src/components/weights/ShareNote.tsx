@@ -10,7 +10,8 @@ interface ShareNoteProps {
 /** Whether the study sees one's own set. Sharing gives it to the lead to choose from and to the agreement view. */
 export function ShareNote({ set, locked }: ShareNoteProps) {
   const { shared, shares } = set.kept;
-  const busy = set.saving.kind === 'saving' || set.saving.kind === 'waiting';
+  // What waits to be saved may be the first weights; sharing goes with it.
+  const nothing = shares === null && set.saving.kind === 'saved';
   return (
     <div className="wt-share">
       <p>
@@ -20,14 +21,13 @@ export function ShareNote({ set, locked }: ShareNoteProps) {
           : 'They move this screen alone; nobody else’s ranking changes.'}
       </p>
       {shared ? (
-        <Button size="small" busy={busy} notYet={locked} onClick={() => set.share(false)}>
+        <Button size="small" notYet={locked} onClick={() => set.share(false)}>
           Stop sharing my weights
         </Button>
       ) : (
         <Button
           size="small"
-          busy={busy}
-          notYet={locked ?? (shares === null && !busy ? 'There are no weights to share yet.' : undefined)}
+          notYet={locked ?? (nothing ? 'There are no weights to share yet.' : undefined)}
           onClick={() => set.share(true)}
         >
           Share my weights with the study
