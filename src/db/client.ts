@@ -1,6 +1,7 @@
 import { drizzle, type NodePgDatabase, type NodePgTransaction } from 'drizzle-orm/node-postgres';
 import type { ExtractTablesWithRelations } from 'drizzle-orm';
-import pg from 'pg';
+import type pg from 'pg';
+import { EnduringPool } from './pool.ts';
 import * as ascent from './schema/ascent.ts';
 import * as auth from './schema/auth.ts';
 import * as criterion from './schema/criterion.ts';
@@ -17,11 +18,15 @@ export type Db = NodePgDatabase<Schema> | NodePgTransaction<Schema, ExtractTable
 export type PooledDb = NodePgDatabase<Schema> & { $client: pg.Pool };
 
 /**
- * Opens a pool. An idle connection that breaks (the database restarts) is dropped and replaced at the next query,
- * so the app comes back with the database; the listener keeps that from ending the process.
+ * Opens a pool. A connection that breaks (the database restarts) is dropped and replaced at the next query, so the app
+ * comes back with the database.
  */
 export function openDatabase(url: string, max = 10): PooledDb {
-  const pool = new pg.Pool({ connectionString: url, max, connectionTimeoutMillis: 5_000, keepAlive: true });
-  pool.on('error', () => undefined);
+  const pool = new EnduringPool({
+    connectionString: url,
+    max,
+    connectionTimeoutMillis: 5_000,
+    keepAlive: true,
+  });
   return drizzle(pool, { schema });
 }
