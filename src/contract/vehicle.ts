@@ -74,6 +74,12 @@ function boostersOutlastCore(boosters: BoostersInput | undefined, core: StageInp
   return boosterTime > coreTime * (1 + 1e-12);
 }
 
+interface VehicleRules {
+  boosters?: BoostersInput | undefined;
+  stages: StageInput[];
+  fairingLeavesAfterStage: number;
+}
+
 /** The fields of a vehicle, before the rules between them. */
 export const vehicleFields = {
   code: z.string().max(40).optional(),
@@ -94,27 +100,30 @@ export const vehicleFields = {
   }),
 };
 
+/** The rules between a vehicle's fields. */
+export function checkVehicle(ctx: z.core.ParsePayload<VehicleRules>): void {
+  const { boosters, stages, fairingLeavesAfterStage } = ctx.value;
+  if (boostersOutlastCore(boosters, stages[0])) {
+    ctx.issues.push({
+      code: 'custom',
+      input: ctx.value,
+      path: ['boosters'],
+      message: 'The boosters burn longer than the first stage they burn beside.',
+    });
+  }
+  if (fairingLeavesAfterStage > stages.length) {
+    ctx.issues.push({
+      code: 'custom',
+      input: ctx.value,
+      path: ['fairingLeavesAfterStage'],
+      message: 'The fairing leaves after a stage that the vehicle does not have.',
+    });
+  }
+}
+
 /** A vehicle as it is posted or kept in the library. `code`, `ascent` and `referenceAreaM2` are not used here. */
 export const VehicleInput = z
   .strictObject(vehicleFields)
-  .check((ctx) => {
-    const { boosters, stages, fairingLeavesAfterStage } = ctx.value;
-    if (boostersOutlastCore(boosters, stages[0])) {
-      ctx.issues.push({
-        code: 'custom',
-        input: ctx.value,
-        path: ['boosters'],
-        message: 'The boosters burn longer than the first stage they burn beside.',
-      });
-    }
-    if (fairingLeavesAfterStage > stages.length) {
-      ctx.issues.push({
-        code: 'custom',
-        input: ctx.value,
-        path: ['fairingLeavesAfterStage'],
-        message: 'The fairing leaves after a stage that the vehicle does not have.',
-      });
-    }
-  })
+  .check(checkVehicle)
   .meta({ id: 'Vehicle', description: 'A launch vehicle with its losses and reserve' });
 export type VehicleInput = z.infer<typeof VehicleInput>;

@@ -53,6 +53,7 @@ export const ROUTES: Readonly<Record<string, RouteRules>> = {
   '/api/auth/[...all]': { GET: 'public', POST: 'public' },
   '/api/v1/openapi.json': { GET: 'public' },
   '/api/v1/evaluate': { POST: 'signed-in' },
+  '/api/v1/ascents': { POST: 'signed-in' },
   '/api/v1/impact-point': { POST: 'signed-in' },
   '/api/v1/corridors': { POST: 'signed-in' },
   '/api/v1/decide': { POST: 'signed-in' },

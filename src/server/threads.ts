@@ -4,7 +4,13 @@ import { Piscina } from 'piscina';
 import { onStop } from './lifecycle.ts';
 
 /** Thread entries, bundled from src/worker by scripts/build.ts. */
-type ThreadName = 'evaluate-thread' | 'decide-thread' | 'corridor-thread' | 'memo-thread' | 'sensitivity-thread';
+type ThreadName =
+  | 'evaluate-thread'
+  | 'decide-thread'
+  | 'corridor-thread'
+  | 'ascent-thread'
+  | 'memo-thread'
+  | 'sensitivity-thread';
 
 const pools = new Map<ThreadName, Piscina>();
 

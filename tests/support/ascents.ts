@@ -49,6 +49,7 @@ export const benchmarkPlanet: Planet = {
 };
 export const benchmarkPayload = 4164;
 
+const LIFT_OFF = 301_454;
 const AREA = 4 * Math.PI;
 const BOOSTER = { thrust: 628_500, flow: 17_010 / 75.2, dry: 19_290 - 17_010 };
 const CORE = { thrust: 1_083_100, flow: 95_550 / 261, dry: 104_380 - 95_550 };
@@ -85,14 +86,18 @@ const second: Phase = {
 /** Its stack; `finalTime` ends the last burn by the clock, else at an end mass. */
 export function benchmarkStack(finalTime?: number): Stack {
   const last = finalTime === undefined ? {} : { duration: finalTime - 261 };
-  const phases = [
-    parallel(6),
-    parallel(3),
-    { ...core, duration: 261 - 150.4, endMass: 32_294 - benchmarkPayload },
-    // Without its 16,820 kg the second stage alone: 19,300 kg less the propellant.
-    { ...second, endMass: 19_300 - 16_820, ...last },
-  ];
-  return plainStack(phases, 301_454 - benchmarkPayload, 0.5);
+  let mass = LIFT_OFF - benchmarkPayload;
+  const phases = [parallel(6), parallel(3), { ...core, duration: 261 - 150.4 }].map((phase) => {
+    const endMass = mass - phase.duration! * (phase.fixedFlow + phase.mainFlow);
+    mass = endMass - phase.dropped;
+    return { ...phase, endMass };
+  });
+  // Without its 16,820 kg the second stage alone: 19,300 kg less the propellant.
+  return plainStack(
+    [...phases, { ...second, endMass: 19_300 - 16_820, ...last }],
+    LIFT_OFF - benchmarkPayload,
+    0.5,
+  );
 }
 
 export const benchmarkAir = new AirTable(exponentialAir(1.225, 7200));

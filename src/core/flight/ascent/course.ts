@@ -19,20 +19,22 @@ export interface Steps {
   readonly rise: number;
   readonly air: number;
   readonly space: number;
+  /** Steps in one stretch, more than any ascent has: past them it is given up. */
+  readonly most: number;
 }
 
-export const STEPS: Steps = { rise: 2, air: 4, space: 16 };
+export const STEPS: Steps = { rise: 2, air: 4, space: 16, most: 600 };
 
 /** A vehicle this far below the ellipsoid has come down. */
 const DOWN = -1000;
 /** What rounding leaves of a phase, in seconds. */
 const INSTANT = 1e-8;
-/** Stretches of steps in one flight, more than any has. */
+/** Stretches in one flight, more than any ascent has: past them it is given up. */
 const MOST_STRETCHES = 64;
 /** Heights below which air still asks for the shorter steps. */
 const THIN_AIR = 45_000;
 
-/** Told of every state passed through: the start, each step, and what is dropped. */
+/** Told of every state passed through: the start of each phase, and each step. */
 export type Observer = (flyer: Flyer) => void;
 
 /**
@@ -51,7 +53,8 @@ export class Course {
   heading = NaN;
   observer: Observer | undefined;
   steps: Steps = STEPS;
-  /** Steps made since the object was. */
+  /** Flights from lift-off since the object was made, and steps. */
+  flights = 0;
   count = 0;
   /**
    * Whether stretches are cut into as many steps as in the last flight that was not so: flights that differ by a
@@ -84,6 +87,7 @@ export class Course {
     this.fairing = stack.fairingMass;
     this.heading = NaN;
     this.stretches = 0;
+    this.flights += 1;
     flyer.steering = VERTICAL;
     flyer.time = 0;
     flyer.dynamicPressureLimit = stack.dynamicPressureLimit;
@@ -92,7 +96,6 @@ export class Course {
     state[3] = -omega * (place[1] as number);
     state[4] = omega * (place[0] as number);
     state[MASS] = stack.liftOffMass + this.fairing + payload;
-    this.observer?.(flyer);
   }
 
   /** Notes where the vehicle is, for `resume`. */
@@ -115,12 +118,15 @@ export class Course {
   coast(seconds: number): boolean {
     const { flyer } = this;
     flyer.throttle = COASTING;
+    flyer.probe();
     return this.stretch(seconds, this.stepAt());
   }
 
   private stepAt(): number {
     const { flyer, steps } = this;
-    if (flyer.steering <= KICK || flyer.throttle === PRESSURE_HELD) return steps.rise;
+    // The throttle that holds a pressure jumps where the air's layers meet: short steps keep the pressure near.
+    if (flyer.throttle === PRESSURE_HELD) return steps.rise / 4;
+    if (flyer.steering <= KICK && flyer.throttle !== COASTING) return steps.rise;
     return flyer.height < THIN_AIR ? steps.air : steps.space;
   }
 
@@ -134,9 +140,10 @@ export class Course {
     flyer.enter(phase);
     flyer.throttle = FULL;
     const clock = phase.duration === undefined ? NaN : flyer.time + phase.duration;
-    for (;;) {
+    for (let started = false; ; started = true) {
       const boundary = this.nextBoundary();
       const left = this.remaining(phase, endMass + this.fairing - this.stack.fairingMass, clock);
+      if (!started) this.observer?.(flyer);
       if (left <= 0) break;
       const reaches = boundary - flyer.time < left;
       if (!this.stretch(reaches ? boundary - flyer.time : left, this.stepAt())) return false;
@@ -152,9 +159,7 @@ export class Course {
       gone += this.fairing;
       this.fairing = 0;
     }
-    if (gone === 0) return;
     flyer.state[MASS] = (flyer.state[MASS] as number) - gone;
-    this.observer?.(flyer);
   }
 
   /** The next moment at which the steering has a corner; on the way up, what it does until then is set too. */
@@ -218,6 +223,7 @@ export class Course {
   private stretch(seconds: number, longest: number): boolean {
     const { flyer } = this;
     const n = this.cutInto(seconds, longest);
+    if (n > this.steps.most || this.stretches > MOST_STRETCHES) return false;
     const h = seconds / n;
     for (let k = 0; k < n; k++) {
       this.keep();

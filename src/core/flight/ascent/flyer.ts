@@ -26,7 +26,7 @@ export const CENTRIFUGAL = 12;
 export const ACCOUNTED = 13;
 
 /** Seconds in which the dynamic pressure is drawn to its limit. */
-const DRAWN_IN = 5;
+const DRAWN_IN = 2;
 
 /**
  * The equations of motion of a point mass over the turning Earth, and the Runge–Kutta step over them. One object is

@@ -1,0 +1,146 @@
+import { inclinationFlown } from '../launch-azimuth.ts';
+import { afterInjection, changesPlane, problemOf } from './attempt.ts';
+import type { Attempt } from './attempt.ts';
+import { Maximiser } from './maximise.ts';
+import type { Search } from './maximise.ts';
+import {
+  AZIMUTH,
+  COAST,
+  FIRST_TANGENT,
+  INCLINATION,
+  LAST_TANGENT,
+  SIZE,
+  TILT,
+  VARIABLES,
+  YAW,
+} from './operational.ts';
+import type { Operational } from './operational.ts';
+import { roughPayload } from './rocket.ts';
+
+/** Losses of a first guess at the payload, m/s: the middle of the usual ones, back-pressure among them. */
+const ROUGH_LOSSES = 1750;
+/** Kick and tangents to start from, in the order tried. */
+const STARTS: readonly (readonly [tilt: number, first: number, last: number])[] = [
+  [0.1, 0.5, 0],
+  [0.15, 0.4, 0],
+  [0.06, 0.7, -0.1],
+  [0.22, 0.25, 0],
+  [0.04, 1, -0.3],
+  [0.3, 0.5, 0],
+];
+const LIMITS = { iterations: 40, stride: 8 };
+/** The plane is turned by no more than this at a time when a dogleg is led up to, rad. */
+const TURN_STEP = 0.15;
+/** Above this altitude a coast before the upper stages pays, m; and what to start from, in s per m beyond. */
+const COASTING_FROM = 350_000;
+const COAST_GUESS = 1 / 4000;
+
+/** What a search came to: every variable of the operational steering, and how it ended. */
+export interface Found {
+  readonly search: Search;
+  readonly variables: Float64Array;
+  /** Starting points tried. */
+  readonly starts: number;
+  /** Flights from lift-off, for all of them. */
+  readonly flights: number;
+}
+
+type Ended = Pick<Found, 'search' | 'variables'>;
+
+/**
+ * Searches one problem from all the variables given.
+ * @param best whether the payload is made as large as can be, or any that meets the conditions does
+ */
+function search(problem: Operational, from: Float64Array, best = true): Ended {
+  const maximiser = new Maximiser(problem);
+  problem.all.set(from);
+  problem.active.forEach((place, k) => {
+    maximiser.variables[k] = from[place] as number;
+  });
+  const gain = best ? (problem.scales[problem.objective] as number) * 1e-4 : Infinity;
+  const ended = maximiser.run({ ...LIMITS, gain });
+  const variables = from.slice();
+  problem.active.forEach((place, k) => {
+    variables[place] = maximiser.variables[k] as number;
+  });
+  return { search: ended, variables };
+}
+
+/** How far above the altitude from which a coast pays, m; 0 or more. */
+const aboveCoasting = ({ radius, course }: Attempt): number =>
+  Math.max(0, radius - course.flyer.planet.equatorialRadius - COASTING_FROM);
+
+/** The plane of the way's first leg. */
+const legInclination = ({ pad, way }: Attempt): number =>
+  inclinationFlown(pad.geocentricLatitude, way.inertialAzimuth);
+
+/** The variables of a start; the plane is the target's, or the one the way reaches. */
+function startOf(attempt: Attempt, [tilt, first, last]: (typeof STARTS)[number]): Float64Array {
+  const { way, target, course } = attempt;
+  const after = afterInjection(attempt);
+  const inclination = changesPlane(attempt) ? legInclination(attempt) : target.inclination;
+  const variables = new Float64Array(VARIABLES);
+  variables[TILT] = tilt;
+  variables[AZIMUTH] = way.launchAzimuth;
+  variables[FIRST_TANGENT] = first;
+  variables[LAST_TANGENT] = last;
+  variables[COAST] = aboveCoasting(attempt) * COAST_GUESS;
+  variables[INCLINATION] = inclination;
+  variables[SIZE] = roughPayload(course.stack, way.requiredSpeed + ROUGH_LOSSES + after(inclination));
+  return variables;
+}
+
+const STEERED = [TILT, AZIMUTH, SIZE, FIRST_TANGENT, LAST_TANGENT, YAW];
+
+/** The last search of a way: as large a payload as can be, the coast free where one pays. */
+function finish(attempt: Attempt, from: Float64Array, edge: number | undefined): Ended {
+  const active = changesPlane(attempt) ? [...STEERED, INCLINATION] : STEERED;
+  const found = search(problemOf(attempt, active, edge), from);
+  if (found.search.outcome !== 'converged' || aboveCoasting(attempt) === 0) return found;
+  const coasting = search(problemOf(attempt, [...active, COAST], edge), found.variables);
+  return coasting.search.outcome === 'converged' ? coasting : found;
+}
+
+/** The heading held at an edge: first in the plane that gives, then turned by the yaw into the one asked for. */
+function alongEdge(attempt: Attempt, from: Float64Array, edge: number): Ended {
+  const start = from.slice();
+  start[INCLINATION] = legInclination(attempt);
+  const straight = [TILT, AZIMUTH, SIZE, FIRST_TANGENT, LAST_TANGENT, INCLINATION];
+  let found = search(problemOf(attempt, straight, edge), start, false);
+  if (found.search.outcome !== 'converged') return found;
+  if (changesPlane(attempt)) return finish(attempt, found.variables, edge);
+  const problem = problemOf(attempt, STEERED, edge);
+  const flown = found.variables[INCLINATION] as number;
+  const turn = attempt.target.inclination - flown;
+  const steps = Math.max(1, Math.ceil(Math.abs(turn) / TURN_STEP));
+  for (let k = 1; k < steps; k++) {
+    found.variables[INCLINATION] = flown + (turn * k) / steps;
+    found = search(problem, found.variables, false);
+    if (found.search.outcome !== 'converged') return found;
+  }
+  found.variables[INCLINATION] = attempt.target.inclination;
+  return finish(attempt, found.variables, edge);
+}
+
+/**
+ * Searches from each start in turn until one converges.
+ * @param warm variables of a neighbouring flight by the same kind of way, tried first
+ * @param edge heading to be held, rad; undefined where it is free
+ */
+export function searchWay(attempt: Attempt, warm: Float64Array | undefined, edge: number | undefined): Found {
+  const before = attempt.course.flights;
+  const starts = STARTS.map((start) => startOf(attempt, start));
+  if (warm !== undefined) starts.unshift(warm);
+  let best: Ended = {
+    search: { outcome: 'cannot-be-flown', iterations: 0, residual: Infinity },
+    variables: new Float64Array(VARIABLES),
+  };
+  let tried = 0;
+  for (const start of starts) {
+    tried += 1;
+    const found = edge === undefined ? finish(attempt, start, edge) : alongEdge(attempt, start, edge);
+    if (found.search.residual <= best.search.residual) best = found;
+    if (found.search.outcome === 'converged') break;
+  }
+  return { ...best, starts: tried, flights: attempt.course.flights - before };
+}

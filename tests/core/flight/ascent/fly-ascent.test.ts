@@ -1,0 +1,225 @@
+import fc from 'fast-check';
+import { describe, expect, test } from 'vitest';
+import { AscentVehicle } from '#contract/ascent.ts';
+import { toAscentVehicle } from '#contract/to-ascent.ts';
+import { AscentFlyer } from '#core/flight/ascent/fly-ascent.ts';
+import type { Ascent } from '#core/flight/ascent/fly-ascent.ts';
+import { EARTH } from '#core/flight/ascent/planet.ts';
+import { padOf, targetOf } from '#core/flight/index.ts';
+import type { Site, TargetOrbit } from '#core/flight/index.ts';
+import { isPermitted } from '#core/flight/sectors.ts';
+import { toDegrees } from '#core/units.ts';
+import type { Radians } from '#core/units.ts';
+import library from '#seed/vehicles.json' with { type: 'json' };
+import { anyOrbit, anySite, orbitOf, SEED, siteAt } from '#tests/support/flights.ts';
+
+const SETTINGS = { turnSpeedFraction: 0.6, headingSpeed: 500 };
+const vehicles = library.vehicles.map((vehicle) => ({
+  code: vehicle.code,
+  entered: vehicle.lossesMps,
+  core: toAscentVehicle(AscentVehicle.parse(vehicle)),
+}));
+const flyers = vehicles.map(({ core }) => new AscentFlyer(core, SETTINGS));
+const [alder, rowan] = flyers as [AscentFlyer, AscentFlyer];
+
+type Flown = Extract<Ascent, { kind: 'flown' }>;
+
+function flown(flyer: AscentFlyer, site: Site, orbit: TargetOrbit, warm?: Float64Array): Flown {
+  const ascent = flyer.fly(padOf(site), targetOf(orbit), warm);
+  if (ascent.kind !== 'flown') throw new Error(`not flown: ${ascent.reason}`);
+  return ascent;
+}
+
+/** Everything that holds of any flown ascent. */
+function expectWhole({ account, payload, way }: Flown, orbit: TargetOrbit): void {
+  const { losses, trajectory } = account;
+  expect(payload).toBeGreaterThanOrEqual(0);
+  // The identity of the account, to 0.1 m/s.
+  const spent = losses.gravity + losses.drag + losses.steering + losses.backPressure;
+  expect(account.relativeSpeed + spent - account.centrifugal).toBeWithin(account.ideal, 0.1);
+  expect(account.remainder).toBeWithin(account.relativeSpeed - account.requiredSpeed, 1e-9);
+  // Injection: the altitude over the equatorial radius, level flight.
+  const last = trajectory.point(trajectory.length - 1, EARTH);
+  const altitude = way.profile === 'parking' ? orbit.parkingAltitude : orbit.perigeeAltitude;
+  expect(last.time).toBe(account.burnOut);
+  expect(last.altitude).toBeGreaterThan(altitude - 1000);
+  expect(last.altitude).toBeLessThan(altitude + 22_000);
+  expect(Math.abs(toDegrees(last.flightPath as Radians))).toBeLessThan(0.3);
+  if (way.kind !== 'plane-change') expect(account.inclination).toBeWithin(orbit.inclination, 2e-7);
+}
+
+describe('the vehicles of the library', () => {
+  test.each(vehicles.map(({ code, entered }, k) => ({ code, entered, flyer: flyers[k]! })))(
+    '$code to 185 km loses what an earlier, separate programme found',
+    ({ entered, flyer }) => {
+      // [read] seed/vehicles.json: its losses are rounded from flown ascents of another implementation to 185 km.
+      const ascent = flown(flyer, siteAt(5), orbitOf(185, 185, 51.6));
+      expectWhole(ascent, orbitOf(185, 185, 51.6));
+      const { losses } = ascent.account;
+      expect(losses.gravity).toBeWithin(entered.gravity, 30);
+      expect(losses.drag).toBeWithin(entered.drag, 10);
+      expect(losses.steering).toBeWithin(entered.steering, 15);
+    },
+  );
+
+  test('due east from the equator the air-relative speed falls short of the closed form by ω(r − p)', () => {
+    // [derived] ω × 185 km = 13.49 m/s.
+    for (const flyer of flyers) {
+      const { account } = flown(flyer, siteAt(0), orbitOf(185, 185, 0.001));
+      expect(account.remainder).toBeWithin(-7.292115e-5 * 185_000, 0.05);
+    }
+  });
+
+  test('keep their limits', () => {
+    for (const [flyer, limit] of [
+      [alder, 60],
+      [rowan, 50],
+    ] as const) {
+      const { account } = flown(flyer, siteAt(28), orbitOf(500, 500, 51.6));
+      expect(account.trajectory.greatestAcceleration()).toBeLessThan(limit + 0.01);
+    }
+    expect(
+      flown(rowan, siteAt(28), orbitOf(500, 500, 51.6)).account.trajectory.greatestAcceleration(),
+    ).toBeGreaterThan(49.9);
+  });
+
+  test('hold a dynamic pressure that is asked for, and pay for it', () => {
+    const vehicle = vehicles[1]!.core;
+    const held = new AscentFlyer(
+      { ...vehicle, ascent: { ...vehicle.ascent, dynamicPressureLimit: 32_000 } },
+      SETTINGS,
+    );
+    const orbit = orbitOf(500, 500, 51.6);
+    const [free, throttled] = [flown(rowan, siteAt(20), orbit), flown(held, siteAt(20), orbit)];
+    expectWhole(throttled, orbit);
+    expect(free.account.trajectory.greatestPressure()).toBeGreaterThan(40_000);
+    expect(throttled.account.trajectory.greatestPressure()).toBeLessThan(32_050);
+    expect(throttled.payload).toBeLessThan(free.payload);
+  });
+
+  test('carry more when the fairing leaves by heating instead of with a later stage', () => {
+    const vehicle = vehicles[1]!.core;
+    const late = { ...vehicle, fairingLeavesAfterStage: 2 };
+    const heated = { ...late, ascent: { ...late.ascent, fairingHeating: 1135 } };
+    const orbit = orbitOf(185, 185, 51.6);
+    const ascents = [late, heated].map((each) => flown(new AscentFlyer(each, SETTINGS), siteAt(20), orbit));
+    const [kept, left] = ascents as [Flown, Flown];
+    expectWhole(left, orbit);
+    // Carried to orbit a fairing takes its own mass off the payload; dropped on the way, only part of it.
+    expect(left.payload - kept.payload).toBeGreaterThan(0.6 * vehicle.fairingMass);
+    expect(left.payload - kept.payload).toBeLessThan(vehicle.fairingMass);
+  });
+});
+
+describe('a site’s sectors', () => {
+  test('bind the heading flown at 500 m/s: a dogleg is flown along the edge', () => {
+    // Polar from the tropics with sectors that end at 152°.
+    const site = siteAt(-2.27, [[75, 152]]);
+    const orbit = orbitOf(400, 400, 90);
+    const ascent = flown(rowan, site, orbit);
+    expectWhole(ascent, orbit);
+    expect(ascent.way.kind).toBe('dogleg');
+    expect((ascent.account.heading * 180) / Math.PI).toBeWithin(152, 1e-3);
+    const open = flown(rowan, siteAt(-2.27), orbit);
+    expect(ascent.payload).toBeLessThan(open.payload - 1000);
+  });
+
+  test('hold a heading that drifts a degree outside at their edge, for next to nothing', () => {
+    // The closed form's launch azimuth, 42.7° or so, is permitted; the heading flown is a degree off it.
+    const orbit = orbitOf(400, 400, 51.6);
+    const free = flown(rowan, siteAt(28.5), orbit);
+    const heading = (free.account.heading * 180) / Math.PI;
+    const launch = toDegrees(free.way.launchAzimuth);
+    const edge = (heading + launch) / 2;
+    const site = heading > launch ? siteAt(28.5, [[10, edge]]) : siteAt(28.5, [[edge, 90]]);
+    const held = flown(rowan, site, orbit);
+    expect((held.account.heading * 180) / Math.PI).toBeWithin(edge, 1e-3);
+    expect(free.payload - held.payload).toBeWithin(0, 5);
+  });
+
+  test('an inclination below the latitude is flown with a plane change in orbit, a little south of due east', () => {
+    const orbit = orbitOf(250, 35_786, 6);
+    const ascent = flown(rowan, siteAt(20), orbit);
+    expect(ascent.way.kind).toBe('plane-change');
+    expectWhole(ascent, orbit);
+    expect(toDegrees(ascent.account.inclination as Radians)).toBeWithin(20, 0.3);
+  });
+});
+
+describe('that there is no ascent', () => {
+  const vehicle = vehicles[0]!.core;
+  const polar = orbitOf(500, 500, 90);
+  const reasonOf = (flyer: AscentFlyer, site: Site, orbit: TargetOrbit) => {
+    const ascent = flyer.fly(padOf(site), targetOf(orbit));
+    return ascent.kind === 'flown' ? 'flown' : ascent.reason;
+  };
+
+  test('is said with its reason', () => {
+    expect(reasonOf(alder, siteAt(70, [[300, 20]]), orbitOf(500, 500, 5))).toBe('out-of-reach');
+    expect(reasonOf(alder, siteAt(50), orbitOf(250, 35_786, 5))).toBe('falls-short');
+    const [first, second] = vehicle.stages as [(typeof vehicle.stages)[0], (typeof vehicle.stages)[0]];
+    const weak = { ...first, vacuumThrust: (first.vacuumThrust * 0.5) as typeof first.vacuumThrust };
+    expect(
+      reasonOf(new AscentFlyer({ ...vehicle, stages: [weak, second] }, SETTINGS), siteAt(5), polar),
+    ).toBe('does-not-lift-off');
+    const reserve = 9000 as typeof vehicle.reserve;
+    expect(reasonOf(new AscentFlyer({ ...vehicle, reserve }, SETTINGS), siteAt(5), polar)).toBe(
+      'too-much-after-injection',
+    );
+  });
+
+  test('comes in bounded time for a stage that hardly pushes', () => {
+    const [first, second] = vehicle.stages as [(typeof vehicle.stages)[0], (typeof vehicle.stages)[0]];
+    const faint = { ...second, vacuumThrust: 0.5 as typeof second.vacuumThrust };
+    const flyer = new AscentFlyer({ ...vehicle, stages: [first, faint] }, SETTINGS);
+    expect(reasonOf(flyer, siteAt(5), polar)).toBe('did-not-converge');
+  });
+});
+
+describe('an ascent', () => {
+  const orbit = orbitOf(420, 420, 51.6);
+
+  test('is the same whatever was flown before', () => {
+    const fresh = flown(new AscentFlyer(vehicles[1]!.core, SETTINGS), siteAt(13), orbit);
+    flown(rowan, siteAt(-40), orbitOf(800, 800, 98));
+    const again = flown(rowan, siteAt(13), orbit);
+    expect(again.payload).toBe(fresh.payload);
+    expect([...again.variables]).toEqual([...fresh.variables]);
+  });
+
+  test('from a warm start takes fewer flights to the same payload', () => {
+    const neighbour = flown(rowan, siteAt(12), orbit);
+    const cold = flown(rowan, siteAt(13), orbit);
+    const warm = flown(rowan, siteAt(13), orbit, neighbour.variables);
+    expect(warm.payload).toBeWithin(cold.payload, 0.1);
+    expect(warm.flights).toBeLessThan(cold.flights);
+  });
+
+  test('carries no more by any other kick: the payload found is the largest nearby', () => {
+    // The same flight with the kick held a little off its optimum carries less.
+    const found = flown(rowan, siteAt(13), orbit);
+    const vehicle = vehicles[1]!.core;
+    for (const kick of [8, 12]) {
+      const other = { ...vehicle, ascent: { ...vehicle.ascent, kick } };
+      const ascent = flown(new AscentFlyer(other, SETTINGS), siteAt(13), orbit, found.variables);
+      expect(ascent.payload).toBeWithin(found.payload, 25);
+    }
+  });
+
+  test('of any site and orbit closes its account or says why there is none', () => {
+    fc.assert(
+      fc.property(anySite, anyOrbit, fc.nat(1), (site, target, k) => {
+        const pad = padOf(site);
+        const ascent = flyers[k]!.fly(pad, targetOf(target));
+        // Starts, turns and halvings are counted: no search goes on for ever.
+        expect(ascent.flights).toBeLessThan(12_000);
+        if (ascent.kind === 'not-flown') return;
+        expectWhole(ascent, target);
+        const { heading } = ascent.account;
+        const nearest = [heading - 2e-6, heading, heading + 2e-6].some((at) => isPermitted(pad.sectors, at));
+        expect(nearest).toBe(true);
+      }),
+      { ...SEED, numRuns: 80 },
+    );
+  }, 60_000);
+});
