@@ -40,7 +40,9 @@ export function useWhatIf(studyId: string, revision: number): LiveWhatIf {
   const [id, setId] = useViewParam('what-if');
   const { data: list, error: listError, mutate } = useApi<WhatIfList>(`${address}?pageSize=500`);
   const listed = list?.items.find((one) => one.id === id);
-  const single = useApi<WhatIf>(id !== null && list && !listed ? `${address}/${id}` : null);
+  // Past the first page one may still be there; otherwise what is not listed is gone.
+  const further = id !== null && list !== undefined && !listed && list.total > list.items.length;
+  const single = useApi<WhatIf>(further ? `${address}/${id}` : null);
   const kept = listed ?? (id !== null && single.data?.id === id ? single.data : null);
   const stored = useKeptDraft(studyId);
   const [seen, setSeen] = useState(revision);
@@ -53,7 +55,8 @@ export function useWhatIf(studyId: string, revision: number): LiveWhatIf {
   );
   useStudyEvents(studyId, hear);
   const keep = (next: Draft): void => keepDraft(studyId, isUnsaved(next, kept) ? next : null);
-  const gone = id !== null && !kept && single.error !== undefined;
+  const unlisted = list !== undefined && !further;
+  const gone = id !== null && !kept && (unlisted || single.error !== undefined);
   return {
     address,
     list,
