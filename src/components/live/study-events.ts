@@ -16,7 +16,11 @@ export interface StudyChange {
 /** A change, or a gap: changes may have been missed, so read again. */
 export type LiveEvent = { kind: 'change'; change: StudyChange } | { kind: 'gap' };
 export type Connection = 'connecting' | 'open' | 'lost';
-type Message = LiveEvent | { kind: 'connection'; connection: Connection };
+type Message =
+  | LiveEvent
+  | { kind: 'connection'; connection: Connection }
+  /** Computing for a study moved on: its flown ascents. */
+  | { kind: 'progress'; studyId: string };
 
 const NAME = 'spinward-events';
 const listeners = new Set<(message: Message) => void>();
@@ -47,6 +51,10 @@ function open(tell: (message: Message) => void): void {
     numbered = true;
     tell({ kind: 'change', change: JSON.parse(event.data) as StudyChange });
   });
+  source.addEventListener('progress', (event) => {
+    const { studyId } = JSON.parse(event.data) as { studyId: string };
+    tell({ kind: 'progress', studyId });
+  });
   source.addEventListener('gap', () => tell({ kind: 'gap' }));
 }
 
@@ -76,13 +84,24 @@ function listen(listener: (message: Message) => void): () => void {
 /** Calls back for every change of one study made anywhere, and for gaps. @returns how to stop */
 export const onStudyEvents = (studyId: string, handle: (event: LiveEvent) => void): (() => void) =>
   listen((message) => {
-    if (message.kind === 'connection') return;
+    if (message.kind === 'connection' || message.kind === 'progress') return;
     if (message.kind === 'gap' || message.change.studyId === studyId) handle(message);
   });
 
 /** The same for an island. `handle` should be stable. */
 export function useStudyEvents(studyId: string, handle: (event: LiveEvent) => void): void {
   useEffect(() => onStudyEvents(studyId, handle), [studyId, handle]);
+}
+
+/** For an island: calls back when a study's flown ascents moved on. `handle` should be stable. */
+export function useStudyProgress(studyId: string, handle: () => void): void {
+  useEffect(
+    () =>
+      listen((message) => {
+        if (message.kind === 'progress' && message.studyId === studyId) handle();
+      }),
+    [studyId, handle],
+  );
 }
 
 const onConnection = (changed: () => void): (() => void) =>
