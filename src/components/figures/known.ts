@@ -80,6 +80,7 @@ export const hasSource = ({ particulars }: Known): boolean => Boolean(particular
 export function sourceCount(lines: readonly Known[]): string {
   const without = lines.filter((line) => !hasSource(line)).length;
   if (lines.length === 0) return 'No figures are entered yet.';
+  if (without === 0 && lines.length === 1) return 'The one figure has a source.';
   if (without === 0) return `All ${formatCount(lines.length, 'figure')} have a source.`;
   const have = without === 1 ? 'has' : 'have';
   return `${without} of ${formatCount(lines.length, 'figure')} ${have} no source.`;

@@ -1,10 +1,12 @@
-import { useMemo, useState, type ReactNode } from 'react';
+import { lazy, Suspense, useMemo, useState, type ReactNode } from 'react';
 import type { LiveRanking } from '#components/ranking/use-ranking.ts';
 import { toast } from '#components/ui/Toast.tsx';
 import { formatNumber } from '#contract/format.ts';
 import { entryWords, isEntered, type Entry } from './figure.ts';
-import { FigureSheet } from './FigureSheet.tsx';
 import { writeFigure, type Written } from './write-figure.ts';
+
+/** Fetched when the first figure is opened: the ranking does without it. */
+const FigureSheet = lazy(async () => ({ default: (await import('./FigureSheet.tsx')).FigureSheet }));
 
 interface FigureAt {
   siteId: string;
@@ -56,17 +58,19 @@ export function useFigureDesk(
   const site = figures?.sites[place];
   if (!open || !figures || !criterion || !site) return { desk, sheet: null };
   const sheet = (
-    <FigureSheet
-      studyId={studyId}
-      siteId={site.siteId}
-      siteName={site.name}
-      criterion={criterion}
-      computed={isEntered(criterion) ? undefined : computedText(live, place, criterion.id)}
-      locked={locked}
-      onClose={() => setOpen(null)}
-      onSaved={(entry) => enter(open, entry)}
-      onFiles={again}
-    />
+    <Suspense>
+      <FigureSheet
+        studyId={studyId}
+        siteId={site.siteId}
+        siteName={site.name}
+        criterion={criterion}
+        computed={isEntered(criterion) ? undefined : computedText(live, place, criterion.id)}
+        locked={locked}
+        onClose={() => setOpen(null)}
+        onSaved={(entry) => enter(open, entry)}
+        onFiles={again}
+      />
+    </Suspense>
   );
   return { desk, sheet };
 }
