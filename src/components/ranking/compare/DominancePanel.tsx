@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useMemo, useState } from 'react';
 import { formatNumber } from '#contract/format.ts';
 import { dominanceOf } from '#contract/sensitivity-model.ts';
 import type { Subject } from '#contract/sensitivity-subject.ts';
@@ -11,7 +11,7 @@ const STEP = 12;
 /** Which ranked sites another outdoes everywhere, each with one that does. */
 export function DominancePanel({ subject, names }: { subject: Subject; names: Names }) {
   const [shown, setShown] = useState(STEP);
-  const dominance = dominanceOf(subject);
+  const dominance = useMemo(() => dominanceOf(subject), [subject]);
   const { fact, behind } = dominanceInWords(dominance);
   const { dominated } = dominance;
   return (

@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useMemo, useState } from 'react';
 import { formatFull, formatNumber } from '#contract/format.ts';
 import { secondOpinionOf } from '#contract/sensitivity-model.ts';
 import type { Subject } from '#contract/sensitivity-subject.ts';
@@ -21,7 +21,7 @@ export function SecondOpinion({
   decimals: number;
 }) {
   const [shown, setShown] = useState(STEP);
-  const opinion = secondOpinionOf(subject);
+  const opinion = useMemo(() => secondOpinionOf(subject), [subject]);
   const ranked = subject.sites.map(({ siteId }, site) => ({ siteId, rank: subject.ranks[site] ?? 0 }));
   const { fact, behind } = secondOpinionInWords(ranked, opinion, names);
   const bySite = new Map(opinion.map((one) => [one.siteId, one]));

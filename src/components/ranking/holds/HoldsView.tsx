@@ -1,3 +1,4 @@
+import { useMemo } from 'react';
 import { EmptyState } from '#components/ui/States.tsx';
 import { formatCount, listInWords } from '#contract/format.ts';
 import { leaderChangesOf, tornadoOf } from '#contract/sensitivity-model.ts';
@@ -9,6 +10,8 @@ import { Tornado } from './Tornado.tsx';
 /** What would change the leader: one weight at a time, one figure at a time. */
 export default function HoldsView({ studyId, model, sheet }: RankingViewProps) {
   const { subject, names } = useSubject(model);
+  const changes = useMemo(() => (subject ? leaderChangesOf(subject) : []), [subject]);
+  const tornado = useMemo(() => subject && tornadoOf(subject), [subject]);
   if (!subject || subject.sites.length < 2)
     return (
       <EmptyState fact={subject ? 'One site alone is ranked.' : 'No site is ranked.'}>
@@ -19,14 +22,8 @@ export default function HoldsView({ studyId, model, sheet }: RankingViewProps) {
   return (
     <>
       <div className="rk-panels sv-holds">
-        <OneWeight changes={leaderChangesOf(subject)} names={names} sheet={sheet} />
-        <Tornado
-          studyId={studyId}
-          tornado={tornadoOf(subject)}
-          subject={subject}
-          names={names}
-          sheet={sheet}
-        />
+        <OneWeight changes={changes} names={names} sheet={sheet} />
+        <Tornado studyId={studyId} tornado={tornado} subject={subject} names={names} sheet={sheet} />
       </div>
       {leftOut.length > 0 && (
         <p className="caption pt-5">
