@@ -15,5 +15,5 @@ stopInOrder(async () => {
   await server.stop();
   await stopAll();
 });
-await workJobs({ mail: deliverMail });
+await workJobs('mail', deliverMail);
 process.send?.('ready');

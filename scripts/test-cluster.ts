@@ -25,12 +25,12 @@ export interface TestCluster {
   close: () => Promise<void>;
 }
 
-/** A cluster of this test run alone, in the temporary folder; without fsync, for speed. */
-export async function openTestCluster(): Promise<TestCluster> {
+/** A cluster of this test run alone, in the temporary folder; without fsync, for speed, unless asked for. */
+export async function openTestCluster({ durable = false } = {}): Promise<TestCluster> {
   await sweep();
   const data = fs.mkdtempSync(path.join(os.tmpdir(), `${PREFIX}${process.pid}-`));
   fs.chmodSync(data, 0o711);
-  const cluster = await Cluster.open({ data, durable: false });
+  const cluster = await Cluster.open({ data, durable });
   return {
     cluster,
     data,

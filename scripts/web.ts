@@ -28,5 +28,5 @@ stopInOrder(async () => {
   await close();
   await stopAll();
 });
-await workJobs({ mail: deliverMail });
+await workJobs('mail', deliverMail);
 server.listen(settings.PORT, settings.HOST, () => process.send?.('ready'));

@@ -43,7 +43,7 @@ export function databaseAway(error: unknown): boolean {
     const code = (e as { code?: string }).code ?? '';
     if (
       /^(ECONN|EPIPE|ETIMEDOUT|08|57P)/.test(code) ||
-      /Connection terminated|timeout exceeded/.test(e.message)
+      /Connection terminated|timeout exceeded|not queryable/.test(e.message)
     )
       return true;
   }

@@ -102,6 +102,10 @@ function parse<T>(schema: z.ZodType<T>, source: Source): T {
   return result.data;
 }
 
+/** The app's connection alone: all that a worker process is told. @throws EnvError */
+export const readDatabaseUrl = (source: Source = process.env): string =>
+  parse(z.object({ DATABASE_URL: setting(databaseUrl) }), source).DATABASE_URL;
+
 /** Checks what the start command was given. @throws EnvError */
 export const readStartEnv = (source: Source = process.env): StartEnv => parse(StartEnv, source);
 

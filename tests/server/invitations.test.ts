@@ -116,7 +116,7 @@ test('mail goes through the queue to the local server, and its text stays in the
   const email = 'østen@waits.test';
   await invite(db, await administrator(), { email, administrator: false });
   const token = await tokenFor(email);
-  await workJobs({ mail: deliverMail });
+  await workJobs('mail', deliverMail);
   const kept = await vi.waitFor(
     async () => {
       const outbox = await readOutbox(db, FIRST_PAGE);

@@ -14,11 +14,9 @@ test('a job exists if and only if its transaction commits, and a failed one is t
   await db.transaction((tx) => sendJob(tx, 'mail', { messageId: 'kept' }));
 
   const seen: string[] = [];
-  await workJobs({
-    mail: async ({ messageId }) => {
-      seen.push(messageId);
-      throw new Error('The mail server is away.');
-    },
+  await workJobs('mail', async ({ messageId }) => {
+    seen.push(messageId);
+    throw new Error('The mail server is away.');
   });
   await vi.waitFor(() => expect(seen).toEqual(['kept']), { timeout: 5_000 });
   await vi.waitFor(async () => {

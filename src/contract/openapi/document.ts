@@ -6,6 +6,8 @@ import { describeOperation, type Operations, type Verb } from './operation.ts';
 import { peopleOperations } from './people.ts';
 import { siteOperations } from './sites.ts';
 import { studyOperations } from './study.ts';
+import { studyAscentOperations } from './study-ascents.ts';
+import { trajectoryFileOperations } from './trajectory-files.ts';
 import { weighingOperations } from './weighing.ts';
 import { whatIfOperations } from './what-ifs.ts';
 
@@ -23,6 +25,8 @@ export const operations: Operations = {
   ...corridorOperations,
   ...weighingOperations,
   ...studyOperations,
+  ...studyAscentOperations,
+  ...trajectoryFileOperations,
   ...whatIfOperations,
   ...siteOperations,
   ...peopleOperations,

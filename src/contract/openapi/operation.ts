@@ -19,7 +19,7 @@ export interface Operation {
   /** The kind of JSON that an answer is; application/json unless said. */
   answerType?: string;
   /** 200 unless said; 204 goes without an answer. */
-  status?: 200 | 201 | 204;
+  status?: 200 | 201 | 202 | 204;
   /** Changes what exists: needs If-Match or `version`, and may be stale. */
   versioned?: boolean;
   /** Needs no sign-in. */

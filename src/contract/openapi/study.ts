@@ -35,7 +35,7 @@ const Saved = z.object({ revision: z.int(), savedAt: z.iso.datetime() }).meta({ 
 const EVENTS = {
   type: 'text/event-stream',
   description:
-    'Events `change` with studyId, revision and kinds of object, the record’s number as id; `gap` says that changes may have been missed. Last-Event-ID resumes.',
+    'Events `change` with studyId, revision and kinds of object, the record’s number as id; `progress` with studyId when its flown ascents moved on; `gap` says that changes may have been missed. Last-Event-ID resumes.',
 };
 
 export const studyOperations: Operations = {

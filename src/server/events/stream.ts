@@ -16,12 +16,15 @@ interface StreamOptions {
 }
 
 /** Asked at every announcement, not once: whoever left a study hears no more of it. */
-async function mayHear({ db, userId, studyId }: StreamOptions, a: Announcement): Promise<boolean> {
-  if (studyId && studyId !== a.studyId) return false;
-  return (await findMembership(db, { studyId: a.studyId, userId })) !== undefined;
+async function mayHear({ db, userId, studyId }: StreamOptions, of: string): Promise<boolean> {
+  if (studyId && studyId !== of) return false;
+  return (await findMembership(db, { studyId: of, userId })) !== undefined;
 }
 
 const change = (a: Announcement): string => `id: ${a.id}\nevent: change\ndata: ${JSON.stringify(a)}\n\n`;
+/** No id: it is no line of the record, and nothing to resume from. */
+const progress = (studyId: string): string =>
+  `event: progress\ndata: ${JSON.stringify({ studyId, objects: ['ascent'] })}\n\n`;
 const GAP = 'event: gap\ndata: {}\n\n';
 
 /** What a broken stream missed, a line a study; a gap where the number is no number of ours. */
@@ -34,7 +37,8 @@ async function missed({ db, userId, studyId, lastEventId }: StreamOptions): Prom
 
 /**
  * Server-sent events of the changes a person may see. `change` carries `{ studyId, revision, userId, objects }` and
- * the record's number as its id; `gap` says that changes may have been missed, so that the reader reads again.
+ * the record's number as its id; `progress`, two a second at most, that a study's ascents moved on; `gap` that changes
+ * may have been missed, so that the reader reads again.
  */
 export function eventStream(options: StreamOptions): Response {
   const encode = new TextEncoder();
@@ -48,16 +52,18 @@ export function eventStream(options: StreamOptions): Response {
           close();
         }
       };
-      const off = subscribe(
-        (a) =>
-          void mayHear(options, a).then(
-            (hears) => {
-              if (hears) send(change(a));
-            },
-            () => send(GAP),
-          ),
-        () => send(GAP),
-      );
+      const tell = (studyId: string, text: string): void =>
+        void mayHear(options, studyId).then(
+          (hears) => {
+            if (hears) send(text);
+          },
+          () => send(GAP),
+        );
+      const off = subscribe({
+        onAnnouncement: (a) => tell(a.studyId, change(a)),
+        onProgress: (studyId) => tell(studyId, progress(studyId)),
+        onGap: () => send(GAP),
+      });
       const beat = setInterval(() => send(': beat\n\n'), BEAT_MS);
       close = () => {
         off();

@@ -3,13 +3,13 @@ import PgBoss from 'pg-boss';
 import type { Db } from '#db/client.ts';
 import { database } from '#server/database.ts';
 import { onStop } from '#server/lifecycle.ts';
-import { JOBS_SCHEMA, QUEUES, type Jobs, type Queue } from './queues.ts';
+import { JOBS_SCHEMA, type Jobs, type Queue } from './queues.ts';
 
 /** Tries again after 30 s, 1 min, 2 min … for about eight hours, then gives up. */
 const RETRIES = { retryLimit: 10, retryDelay: 30, retryBackoff: true } as const;
 
 /** Runs pg-boss's statement on a given connection or transaction. */
-const on = (db: Db): PgBoss.Db => ({
+export const on = (db: Db): PgBoss.Db => ({
   executeSql: async (text, values) => ({ rows: (await db.execute(bind(text, values))).rows }),
 });
 
@@ -24,7 +24,7 @@ function bind(text: string, values: readonly unknown[] = []): SQL {
 let started: Promise<PgBoss> | undefined;
 
 /** The process's one pg-boss; it uses the app's pool, and its schema is made by the migrations. */
-function boss(): Promise<PgBoss> {
+export function boss(): Promise<PgBoss> {
   started ??= start().catch((error: unknown) => {
     started = undefined;
     throw error;
@@ -48,17 +48,13 @@ export async function sendJob<Q extends Queue>(db: Db, queue: Q, data: Jobs[Q]):
   await (await boss()).send(queue, data, { ...RETRIES, db: on(db) });
 }
 
-export type Handlers = { [Q in Queue]: (data: Jobs[Q]) => Promise<void> };
-
-/** Takes up the queues' work in this process, one job of a queue at a time. A handler that throws is tried again. */
-export async function workJobs(handlers: Handlers): Promise<void> {
+/** Takes up a queue's work in this process, one job at a time. A handler that throws is tried again. */
+export async function workJobs<Q extends Queue>(
+  queue: Q,
+  handle: (data: Jobs[Q]) => Promise<void>,
+): Promise<void> {
   const running = await boss();
-  for (const queue of QUEUES)
-    await running.work<Jobs[typeof queue]>(
-      queue,
-      { batchSize: 1, pollingIntervalSeconds: 1 },
-      async ([job]) => {
-        if (job) await handlers[queue](job.data);
-      },
-    );
+  await running.work<Jobs[Q]>(queue, { batchSize: 1, pollingIntervalSeconds: 1 }, async ([job]) => {
+    if (job) await handle(job.data);
+  });
 }
