@@ -14,6 +14,7 @@ const columns = {
   'ascent-sounding': ['quantity'],
   'ascent-gravity-turn': ['mass_ratio', 'quantity'],
   'ascent-benchmark': ['time_s', 'quantity'],
+  'ascent-optimum': ['quantity'],
   'impact-point': [
     'quantity',
     'latitude_deg',

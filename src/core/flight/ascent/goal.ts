@@ -94,7 +94,7 @@ export function orbitGoal(mu: number, elements: OrbitElements): Goal {
       ) as [number, number, number];
       const [c, s] = [Math.cos(ascending), Math.sin(ascending)];
       const along = e[0] * c + e[1] * s;
-      const across = (hx * -e[2] * s + hy * e[2] * c + hz * (s * e[0] * -1 + c * e[1])) / h;
+      const across = ((hx * s - hy * c) * e[2] + hz * (c * e[1] - s * e[0])) / h;
       left[place] = turned(Math.atan2(across, along) - argumentOfPerigee);
     },
   };
