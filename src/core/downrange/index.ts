@@ -17,6 +17,8 @@ export type { Attribution } from './attributions.ts';
 export { EXPECTATION_LIMIT, REMEMBERED_CASUALTY_AREAS, VERIFY_CASUALTY_AREAS } from './casualty.ts';
 export type { CasualtyAreas } from './casualty.ts';
 export { REGULATION, cautions } from './cautions.ts';
+export { classOfVehicle } from './class-of-vehicle.ts';
+export type { ClassOfVehicle } from './class-of-vehicle.ts';
 export { corridorOf } from './corridor.ts';
 export type { Corridor, Position } from './corridor.ts';
 export { decodeLand } from './data/land-data.ts';

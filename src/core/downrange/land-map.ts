@@ -39,7 +39,11 @@ export class LandMap {
   countryAt({ latitudeDeg, longitudeDeg }: Place): number {
     const pieces = this.pieces(cellAt(latitudeDeg, longitudeDeg));
     if (pieces.length === 0) return SEA;
-    const [x, y] = [longitudeDeg * UNITS_PER_DEG, latitudeDeg * UNITS_PER_DEG];
+    // 180° E and W are one meridian, and the cells begin there.
+    const [x, y] = [
+      (longitudeDeg >= 180 ? longitudeDeg - 360 : longitudeDeg) * UNITS_PER_DEG,
+      latitudeDeg * UNITS_PER_DEG,
+    ];
     const found = pieces.find(({ rings, whole }) => whole || pieceHolds(rings, x, y));
     return found ? found.country : SEA;
   }
