@@ -18,26 +18,32 @@ export function JudgementStrip({ first, second, ratio, onJudge, locked }: StripP
       <legend className="sr-only">
         {first} against {second}
       </legend>
-      <div className="wt-ends" aria-hidden="true">
-        <b>{first}</b>
-        <span>equal</span>
-        <b>{second}</b>
-      </div>
-      <div className="wt-stops">
-        {RATIOS.map((one) => (
-          <label key={one} title={ratioInWords(one, first, second)} data-middle={one === 1 ? '' : undefined}>
-            <input
-              type="radio"
-              className="wt-radio"
-              name={name}
-              checked={isSame(one, ratio)}
-              disabled={locked}
-              aria-label={`${ratioInFigures(one)}: ${ratioInWords(one, first, second)}`}
-              onChange={() => onJudge(one)}
-            />
-            <span aria-hidden="true">{one >= 1 ? ratioInFigures(one) : ratioInFigures(1 / one)}</span>
-          </label>
-        ))}
+      <div className="wt-scale">
+        <div className="wt-ends" aria-hidden="true">
+          <b>{first}</b>
+          <span>equal</span>
+          <b>{second}</b>
+        </div>
+        <div className="wt-stops">
+          {RATIOS.map((one) => (
+            <label
+              key={one}
+              title={ratioInWords(one, first, second)}
+              data-middle={one === 1 ? '' : undefined}
+            >
+              <input
+                type="radio"
+                className="wt-radio"
+                name={name}
+                checked={isSame(one, ratio)}
+                disabled={locked}
+                aria-label={`${ratioInFigures(one)}: ${ratioInWords(one, first, second)}`}
+                onChange={() => onJudge(one)}
+              />
+              <span aria-hidden="true">{one >= 1 ? ratioInFigures(one) : ratioInFigures(1 / one)}</span>
+            </label>
+          ))}
+        </div>
       </div>
       <p className="wt-said">
         {ratio === undefined

@@ -1,10 +1,8 @@
 import { useId } from 'react';
 import { PointsField } from '#components/ranking/WeightSliders.tsx';
 import { formatNumber, listInWords } from '#contract/format.ts';
-import { weighing } from '#contract/weighing.ts';
-import type { WeightStatement } from '#contract/weights.ts';
 import type { Siblings } from '#core/decision/statement.ts';
-import { FULL_SWING } from '#core/decision/swing.ts';
+import { FULL_SWING, weightsFromSwing } from '#core/decision/swing.ts';
 import { swingInWords } from './level-words.ts';
 import { comparedLevels } from './statement.ts';
 import type { EditorProps } from './editor.ts';
@@ -27,16 +25,13 @@ export function SwingEditor(props: EditorProps) {
 }
 
 function SwingLevel({ level, ...props }: EditorProps & { level: Siblings }) {
-  const { statement, say, names, items, locked } = props;
+  const { statement, say, names, locked } = props;
   const radio = useId();
   const { points } = statement;
   const top = level.ids.find((id) => points[id] === FULL_SWING);
   const give = (id: string, value: number): void => say({ ...statement, points: { ...points, [id]: value } });
   const whole = top !== undefined && level.ids.every((id) => Object.hasOwn(points, id));
-  const weights = whole
-    ? weighing(items, onlyOf(statement, level)).levels.find(({ groupId }) => groupId === level.groupId)
-        ?.weights
-    : null;
+  const weights = whole ? weightsFromSwing(level.ids.map((id) => points[id] ?? 0)) : null;
   return (
     <>
       <p className="caption" id={`${radio}-ask`}>
@@ -59,7 +54,7 @@ function SwingLevel({ level, ...props }: EditorProps & { level: Siblings }) {
             </tr>
           </thead>
           <tbody>
-            {level.ids.map((id) => (
+            {level.ids.map((id, place) => (
               <tr key={id}>
                 <td>
                   <label className="wt-most">
@@ -89,7 +84,7 @@ function SwingLevel({ level, ...props }: EditorProps & { level: Siblings }) {
                     />
                   )}
                 </td>
-                <td className="num">{weights ? formatNumber(weights[id] ?? 0, 2) : '–'}</td>
+                <td className="num">{weights ? formatNumber(weights[place] ?? 0, 2) : '–'}</td>
               </tr>
             ))}
           </tbody>
@@ -98,12 +93,6 @@ function SwingLevel({ level, ...props }: EditorProps & { level: Siblings }) {
     </>
   );
 }
-
-/** The statement with this level alone, so that its weights can be shown before the others are complete. */
-const onlyOf = (statement: WeightStatement, { ids }: Siblings): WeightStatement => ({
-  ...statement,
-  points: Object.fromEntries(Object.entries(statement.points).filter(([id]) => ids.includes(id))),
-});
 
 function swingOf(id: string, { columns, items, names }: EditorProps): string {
   const column = columns.find(({ criterion }) => criterion.id === id);
