@@ -1,4 +1,4 @@
-import { useId, useRef, type KeyboardEvent, type ReactNode } from 'react';
+import { useEffect, useId, useRef, type KeyboardEvent, type ReactNode } from 'react';
 
 export interface Tab<V extends string> {
   value: V;
@@ -21,6 +21,9 @@ const STEPS: Record<string, number> = { ArrowRight: 1, ArrowLeft: -1, Home: -Inf
 export function Tabs<V extends string>({ label, tabs, value, onChange, children }: TabsProps<V>) {
   const id = useId();
   const list = useRef<HTMLDivElement>(null);
+  useEffect(() => {
+    if (list.current) bringInView(list.current);
+  }, [value]);
   const move = (event: KeyboardEvent) => {
     const step = STEPS[event.key];
     if (step === undefined) return;
@@ -56,4 +59,14 @@ export function Tabs<V extends string>({ label, tabs, value, onChange, children 
       </div>
     </>
   );
+}
+
+/** Scrolls a row that is wider than its place, and nothing else, so that the chosen tab is seen whole. */
+function bringInView(row: HTMLElement): void {
+  const tab = row.querySelector<HTMLElement>('[aria-selected="true"]');
+  if (!tab) return;
+  const left = tab.offsetLeft - row.offsetLeft;
+  const right = left + tab.offsetWidth;
+  if (left < row.scrollLeft) row.scrollLeft = left;
+  else if (right > row.scrollLeft + row.clientWidth) row.scrollLeft = right - row.clientWidth;
 }
