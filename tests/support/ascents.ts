@@ -3,6 +3,7 @@ import { exponentialAir } from '#core/flight/ascent/atmosphere.ts';
 import { Course } from '#core/flight/ascent/course.ts';
 import type { Steps } from '#core/flight/ascent/course.ts';
 import { Flyer } from '#core/flight/ascent/flyer.ts';
+import { NODES } from '#core/flight/ascent/modes.ts';
 import type { Planet } from '#core/flight/ascent/planet.ts';
 import type { Phase, Stack } from '#core/flight/ascent/stack.ts';
 
@@ -156,11 +157,11 @@ export function benchmarkCourse(steps: Steps): Course {
   course.steps = steps;
   flyer.accounting = true;
   course.start(benchmarkLaunch.place, benchmarkPayload);
-  flyer.up.set(benchmarkLaunch.up);
-  flyer.along.set(benchmarkLaunch.east);
-  flyer.nodeTimes = Float64Array.from(benchmarkNodes, ([time]) => time);
-  flyer.nodePitch = Float64Array.from(benchmarkNodes, ([, pitch]) => pitch * DEGREE);
-  flyer.nodeYaw = Float64Array.from(benchmarkNodes, ([, , yaw]) => yaw * DEGREE);
-  course.beginNodes();
+  flyer.steering.up.set(benchmarkLaunch.up);
+  flyer.steering.along.set(benchmarkLaunch.east);
+  flyer.steering.nodeTimes = Float64Array.from(benchmarkNodes, ([time]) => time);
+  flyer.steering.nodePitch = Float64Array.from(benchmarkNodes, ([, pitch]) => pitch * DEGREE);
+  flyer.steering.nodeYaw = Float64Array.from(benchmarkNodes, ([, , yaw]) => yaw * DEGREE);
+  flyer.steering.mode = NODES;
   return course;
 }

@@ -88,7 +88,7 @@ export class Course {
     this.heading = NaN;
     this.stretches = 0;
     this.flights += 1;
-    flyer.steering = VERTICAL;
+    flyer.steering.mode = VERTICAL;
     flyer.time = 0;
     flyer.dynamicPressureLimit = stack.dynamicPressureLimit;
     state.fill(0);
@@ -126,7 +126,7 @@ export class Course {
     const { flyer, steps } = this;
     // The throttle that holds a pressure jumps where the air's layers meet: short steps keep the pressure near.
     if (flyer.throttle === PRESSURE_HELD) return steps.rise / 4;
-    if (flyer.steering <= KICK && flyer.throttle !== COASTING) return steps.rise;
+    if (flyer.steering.mode <= KICK && flyer.throttle !== COASTING) return steps.rise;
     return flyer.height < THIN_AIR ? steps.air : steps.space;
   }
 
@@ -165,19 +165,19 @@ export class Course {
   /** The next moment at which the steering has a corner; on the way up, what it does until then is set too. */
   private nextBoundary(): number {
     const { flyer, stack } = this;
-    const { time } = flyer;
-    if (flyer.steering === LINEAR_TANGENT) return Infinity;
-    if (flyer.steering === NODES) {
-      return flyer.nodeTimes.find((node) => node > time + INSTANT) ?? Infinity;
+    const { steering, time } = flyer;
+    if (steering.mode === LINEAR_TANGENT) return Infinity;
+    if (steering.mode === NODES) {
+      return steering.nodeTimes.find((node) => node > time + INSTANT) ?? Infinity;
     }
     const { verticalRise, kick } = stack;
     if (time < verticalRise - INSTANT) {
-      flyer.steering = VERTICAL;
+      steering.mode = VERTICAL;
       return verticalRise;
     }
-    flyer.kickStart = verticalRise;
+    steering.kickStart = verticalRise;
     const kicks = time < verticalRise + kick - INSTANT;
-    flyer.steering = kicks ? KICK : GRAVITY_TURN;
+    steering.mode = kicks ? KICK : GRAVITY_TURN;
     return kicks ? verticalRise + kick : Infinity;
   }
 
@@ -310,36 +310,5 @@ export class Course {
     this.heading = this.flyer.headingNow();
     this.flyer.state.set(end);
     this.flyer.time = this.timeBefore + h;
-  }
-
-  /**
-   * Starts the linear tangent from where the vehicle is: the plane of the thrust is that of its inertial flight turned
-   * by `yaw` about the vertical, northward positive for an eastward flight.
-   * @param first tan θ now and `last` tan θ after `duration` seconds
-   */
-  beginTangent(first: number, last: number, yaw: number, duration: number): void {
-    const { flyer } = this;
-    const { state, normal } = flyer;
-    const [x, y, z] = [state[0] as number, state[1] as number, state[2] as number];
-    const [vx, vy, vz] = [state[3] as number, state[4] as number, state[5] as number];
-    const r = Math.sqrt(x * x + y * y + z * z);
-    // The plane's normal r × v, and the horizontal along the flight: normal × r.
-    const nx = y * vz - z * vy;
-    const ny = z * vx - x * vz;
-    const nz = x * vy - y * vx;
-    const cos = Math.cos(yaw);
-    const sin = Math.sin(yaw) / r;
-    normal[0] = cos * nx - sin * (ny * z - nz * y);
-    normal[1] = cos * ny - sin * (nz * x - nx * z);
-    normal[2] = cos * nz - sin * (nx * y - ny * x);
-    flyer.tangentStart = flyer.time;
-    flyer.tangentA = first;
-    flyer.tangentB = (first - last) / duration;
-    flyer.steering = LINEAR_TANGENT;
-  }
-
-  /** Steers by the nodes set in the flyer from here on. */
-  beginNodes(): void {
-    this.flyer.steering = NODES;
   }
 }

@@ -1,17 +1,8 @@
 import type { AirTable } from './air-table.ts';
-import {
-  ACCELERATION_HELD,
-  COASTING,
-  FULL,
-  GRAVITY_TURN,
-  KICK,
-  LINEAR_TANGENT,
-  NODES,
-  PRESSURE_HELD,
-  VERTICAL,
-} from './modes.ts';
+import { ACCELERATION_HELD, COASTING, FULL, GRAVITY_TURN, PRESSURE_HELD } from './modes.ts';
 import type { Planet } from './planet.ts';
 import type { DragTable, Phase } from './stack.ts';
+import { Steering } from './steering.ts';
 
 /** Place of each figure in the state: inertial position and velocity, then mass. */
 export const MASS = 6;
@@ -43,25 +34,9 @@ export class Flyer {
   /** Whether the lines of the loss account are integrated as well. */
   accounting = false;
 
-  /** Codes of modes.ts. */
-  steering: number = VERTICAL;
+  readonly steering = new Steering();
+  /** How the throttled engines run: a code of modes.ts. */
   throttle: number = FULL;
-  /** Vertical of the site at lift-off and the horizontal direction of the kick; both turn with the Earth. */
-  readonly up = new Float64Array(3);
-  readonly along = new Float64Array(3);
-  /** Kick: when it starts, and how fast the tilt grows in rad/s. */
-  kickStart = 0;
-  tiltRate = 0;
-  /** Linear tangent: tan θ = a − b (t − start); the plane's normal. */
-  tangentStart = 0;
-  tangentA = 0;
-  tangentB = 0;
-  readonly normal = new Float64Array(3);
-  /** Nodes: times, pitch over the horizontal and yaw to the north in rad; east is `along`. */
-  nodeTimes: Float64Array = new Float64Array(0);
-  nodePitch: Float64Array = new Float64Array(0);
-  nodeYaw: Float64Array = new Float64Array(0);
-
   dynamicPressureLimit = Infinity;
 
   /** What the last evaluation met on its way. */
@@ -90,7 +65,6 @@ export class Flyer {
   private readonly k2 = new Float64Array(ACCOUNTED);
   private readonly k3 = new Float64Array(ACCOUNTED);
   private readonly k4 = new Float64Array(ACCOUNTED);
-  private readonly direction = new Float64Array(3);
 
   private readonly mu: number;
   private readonly omega: number;
@@ -137,65 +111,6 @@ export class Flyer {
     return coefficients[last] as number;
   }
 
-  /** Direction of thrust into `direction`, for all steerings but the gravity turn. */
-  private aim(time: number, x: number, y: number, z: number, r: number): void {
-    const { direction } = this;
-    if (this.steering === LINEAR_TANGENT) {
-      const nx = this.normal[0] as number;
-      const ny = this.normal[1] as number;
-      const nz = this.normal[2] as number;
-      // Horizontal and parallel to the plane: normal × r.
-      let hx = ny * z - nz * y;
-      let hy = nz * x - nx * z;
-      let hz = nx * y - ny * x;
-      const tangent = this.tangentA - this.tangentB * (time - this.tangentStart);
-      const cos = 1 / Math.sqrt(1 + tangent * tangent);
-      const across = cos / Math.sqrt(hx * hx + hy * hy + hz * hz);
-      const radial = (tangent * cos) / r;
-      hx = hx * across + x * radial;
-      hy = hy * across + y * radial;
-      hz = hz * across + z * radial;
-      direction[0] = hx;
-      direction[1] = hy;
-      direction[2] = hz;
-      return;
-    }
-    if (this.steering === NODES) {
-      this.aimByNodes(time);
-      return;
-    }
-    const tilt = this.steering === KICK ? this.tiltRate * (time - this.kickStart) : 0;
-    const cos = Math.cos(tilt);
-    const sin = Math.sin(tilt);
-    const ux = cos * (this.up[0] as number) + sin * (this.along[0] as number);
-    const uy = cos * (this.up[1] as number) + sin * (this.along[1] as number);
-    const turned = this.omega * time;
-    const c = Math.cos(turned);
-    const s = Math.sin(turned);
-    direction[0] = c * ux - s * uy;
-    direction[1] = s * ux + c * uy;
-    direction[2] = cos * (this.up[2] as number) + sin * (this.along[2] as number);
-  }
-
-  private aimByNodes(time: number): void {
-    const { nodeTimes: times, direction, up, along } = this;
-    let k = 1;
-    while (k < times.length - 1 && (times[k] as number) < time) k++;
-    const low = times[k - 1] as number;
-    const share = (time - low) / ((times[k] as number) - low);
-    const pitch = (1 - share) * (this.nodePitch[k - 1] as number) + share * (this.nodePitch[k] as number);
-    const yaw = (1 - share) * (this.nodeYaw[k - 1] as number) + share * (this.nodeYaw[k] as number);
-    const vertical = Math.cos(yaw) * Math.sin(pitch);
-    const east = Math.cos(yaw) * Math.cos(pitch);
-    const north = Math.sin(yaw);
-    const [ux, uy, uz] = [up[0] as number, up[1] as number, up[2] as number];
-    const [ex, ey, ez] = [along[0] as number, along[1] as number, along[2] as number];
-    // North is up × east.
-    direction[0] = vertical * ux + east * ex + north * (uy * ez - uz * ey);
-    direction[1] = vertical * uy + east * ey + north * (uz * ex - ux * ez);
-    direction[2] = vertical * uz + east * ez + north * (ux * ey - uy * ex);
-  }
-
   /** d/dt of a state; the lines of the account follow it where they are wanted. */
   rates(time: number, state: Float64Array, out: Float64Array): void {
     const x = state[0] as number;
@@ -240,15 +155,16 @@ export class Flyer {
     let vacuum = 0;
     let back = 0;
     if (this.throttle !== COASTING) {
-      if (this.steering === GRAVITY_TURN && w > 0) {
+      const { steering } = this;
+      if (steering.mode === GRAVITY_TURN && w > 0) {
         ux = wx / w;
         uy = wy / w;
         uz = vz / w;
       } else {
-        this.aim(time, x, y, z, r);
-        ux = this.direction[0] as number;
-        uy = this.direction[1] as number;
-        uz = this.direction[2] as number;
+        steering.aim(time, x, y, z, r, omega);
+        ux = steering.direction[0] as number;
+        uy = steering.direction[1] as number;
+        uz = steering.direction[2] as number;
       }
       back = air.pressure * this.exitArea;
       let share = 1;

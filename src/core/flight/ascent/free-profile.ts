@@ -1,6 +1,7 @@
 import type { Course } from './course.ts';
 import type { Goal } from './goal.ts';
 import type { LaunchPoint } from './launch-point.ts';
+import { NODES } from './modes.ts';
 import type { Shooting } from './shooting.ts';
 import type { Phase } from './stack.ts';
 
@@ -77,14 +78,14 @@ export class FreeProfile implements Shooting {
   }
 
   private steer(variables: Float64Array): void {
-    const { flyer } = this.course;
+    const { steering } = this.course.flyer;
     const times = this.nodeTimes(variables[0] as number);
     const end = times[times.length - 1] as number;
     const last = this.nodes.yaws - 1;
-    flyer.nodeTimes = times;
-    flyer.nodePitch = variables.slice(1, 1 + this.pitches);
+    steering.nodeTimes = times;
+    steering.nodePitch = variables.slice(1, 1 + this.pitches);
     // The yaw runs straight between its own few nodes: read off at the pitch's.
-    flyer.nodeYaw = times.map((time) => {
+    steering.nodeYaw = times.map((time) => {
       const place = Math.min((time / end) * last, last);
       const low = Math.min(Math.floor(place), last - 1);
       const share = place - low;
@@ -97,10 +98,11 @@ export class FreeProfile implements Shooting {
     const { course, launch, payload } = this;
     const { phases } = course.stack;
     course.start(launch.place, payload);
-    course.flyer.up.set(launch.up);
-    course.flyer.along.set(launch.east);
+    const { steering } = course.flyer;
+    steering.up.set(launch.up);
+    steering.along.set(launch.east);
     this.steer(variables);
-    course.beginNodes();
+    steering.mode = NODES;
     for (let k = 0; k < phases.length; k++) {
       const phase = phases[k] as Phase;
       const last = k === phases.length - 1;

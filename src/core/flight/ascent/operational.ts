@@ -130,15 +130,16 @@ export class Operational implements Shooting {
   /** Rise, kick and gravity turn to where the upper stages begin. */
   flyFirst(): boolean {
     const { course, launch, all } = this;
-    const { flyer, stack } = course;
+    const { stack } = course;
+    const { steering } = course.flyer;
     const payload = this.sizing.payload(all[SIZE] as number);
     const sin = Math.sin(all[AZIMUTH] as number);
     const cos = Math.cos(all[AZIMUTH] as number);
     for (let k = 0; k < 3; k++) {
-      flyer.up[k] = launch.up[k] as number;
-      flyer.along[k] = sin * (launch.east[k] as number) + cos * (launch.north[k] as number);
+      steering.up[k] = launch.up[k] as number;
+      steering.along[k] = sin * (launch.east[k] as number) + cos * (launch.north[k] as number);
     }
-    flyer.tiltRate = (all[TILT] as number) / stack.kick;
+    steering.tiltRate = (all[TILT] as number) / stack.kick;
     course.start(launch.place, payload);
     for (let k = 0; k < this.firstUpper; k++) {
       const phase = stack.phases[k] as Phase;
@@ -156,7 +157,9 @@ export class Operational implements Shooting {
     const payload = this.sizing.payload(all[SIZE] as number);
     if (!this.sizing.end(all[SIZE] as number, all[INCLINATION] as number, point)) return false;
     if ((all[COAST] as number) > 0 && !course.coast(all[COAST] as number)) return false;
-    course.beginTangent(
+    course.flyer.steering.beginTangent(
+      course.flyer.time,
+      course.flyer.state,
       all[FIRST_TANGENT] as number,
       all[LAST_TANGENT] as number,
       all[YAW] as number,

@@ -114,7 +114,7 @@ describe('linear-tangent steering', () => {
     const { state } = course.flyer;
     state[4] = 1e-3;
     const [first, last] = [1.4, -0.2];
-    course.beginTangent(first, last, 0, seconds);
+    course.flyer.steering.beginTangent(0, state, first, last, 0, seconds);
     course.fly(phase, NaN);
     const b = (first - last) / seconds;
     const sec = (tangent: number) => Math.sqrt(1 + tangent * tangent);
@@ -157,9 +157,9 @@ describe('the account of a powered flight', () => {
     flyer.accounting = true;
     const { axisDistance, z } = meridianOf(fromDegrees(-31), metres(120));
     course.start(Float64Array.of(axisDistance, 0, z), 0);
-    flyer.up.set([Math.cos(fromDegrees(-31)), 0, Math.sin(fromDegrees(-31))]);
-    flyer.along.set([0, 1, 0]);
-    flyer.tiltRate = 0.012;
+    flyer.steering.up.set([Math.cos(fromDegrees(-31)), 0, Math.sin(fromDegrees(-31))]);
+    flyer.steering.along.set([0, 1, 0]);
+    flyer.steering.tiltRate = 0.012;
     let [pressure, acceleration] = [0, 0];
     course.observer = () => {
       flyer.probe();
@@ -167,7 +167,7 @@ describe('the account of a powered flight', () => {
       if (flyer.time > 1) acceleration = Math.max(acceleration, flyer.thrust / flyer.state[MASS]!);
     };
     course.fly(phase, 40_000);
-    course.beginTangent(0.6, 0.1, 0.3, 60);
+    flyer.steering.beginTangent(flyer.time, flyer.state, 0.6, 0.1, 0.3, 60);
     course.fly({ ...phase, fixedThrust: 0, fixedFlow: 0 }, 30_000);
     const { state } = flyer;
     const spent = state[GRAVITY]! + state[DRAG]! + state[STEERING]! + state[BACK_PRESSURE]!;

@@ -49,8 +49,8 @@ const still = (radius: number, gravity: number) => ({
 function onPad(flyer: Flyer, phase: Phase, mass: number): Course {
   const course = new Course(flyer, plainStack([phase], mass, 0.5));
   flyer.accounting = true;
-  flyer.up.set([1, 0, 0]);
-  flyer.along.set([0, 1, 0]);
+  flyer.steering.up.set([1, 0, 0]);
+  flyer.steering.along.set([0, 1, 0]);
   course.start(Float64Array.of(flyer.planet.equatorialRadius, 0, 0), 0);
   return course;
 }
@@ -65,7 +65,7 @@ test.each(sounding.filter(({ id }) => id !== 'C157'))(
     const burn: Phase = { ...emptyPhase, mainThrust: flow * 9.80665 * 250, mainFlow: flow, endMass: 400 };
     const course = onPad(flyer, burn, 1000);
     course.steps = { rise: 0.05, air: 0.05, space: 0.05, most: 10_000 };
-    flyer.steering = VERTICAL;
+    flyer.steering.mode = VERTICAL;
     const stack = { ...course.stack, verticalRise: 1000 };
     const up = new Course(flyer, stack);
     up.steps = course.steps;
@@ -104,7 +104,7 @@ test.each(sounding.filter(({ id }) => id === 'C157'))(
     };
     const course = new Course(flyer, { ...plainStack([burn], 1000, 1), verticalRise: 1000 });
     course.steps = { rise: 0.05, air: 0.05, space: 0.05, most: 10_000 };
-    flyer.up.set([1, 0, 0]);
+    flyer.steering.up.set([1, 0, 0]);
     course.start(Float64Array.of(radius, 0, 0), 0);
     course.fly(burn, 600);
     // The top is reached after 0.1873 units of time; what little speed is left there leads no farther.
@@ -130,7 +130,7 @@ function gravityTurn(massRatio: number): Record<string, number> {
   const course = new Course(flyer, { ...plainStack([burn], mass, 0.5), verticalRise: rise });
   course.steps = { rise: 0.05, air: 0.1, space: 0.25, most: 10_000 };
   flyer.accounting = true;
-  flyer.up.set([1, 0, 0]);
+  flyer.steering.up.set([1, 0, 0]);
   course.start(Float64Array.of(radius, 0, 0), 0);
   course.fly({ ...burn, duration: rise }, NaN);
   expect(flyer.state[0]! - radius).toBeWithin(130, 1e-4);
@@ -138,7 +138,7 @@ function gravityTurn(massRatio: number): Record<string, number> {
   const angle = (89.85 * Math.PI) / 180;
   flyer.state[3] = speed * Math.sin(angle);
   flyer.state[4] = speed * Math.cos(angle);
-  flyer.steering = GRAVITY_TURN;
+  flyer.steering.mode = GRAVITY_TURN;
   const figures: Record<string, number> = {};
   const points: [number, number][] = [];
   course.observer = () => {
