@@ -34,7 +34,7 @@ export function StudyOrigin({ studyId, set, items, locked, onChosen }: StudyOrig
         {origin && origin.kind !== 'mean' && `, by ${METHOD_WAYS[method]}`}
         {apart || reason === '' ? '.' : `: ${reason}`}
       </p>
-      {apart && locked !== undefined && reason !== '' && <p className="wt-reason">{reason}</p>}
+      {apart && locked !== undefined && reason !== '' && <p>{reason}</p>}
       {since && <p className="caption">{since}</p>}
       {apart && locked === undefined && origin !== null && !choosing && (
         <Reason key={reason} reason={reason} onReason={set.explain} />
