@@ -1,6 +1,8 @@
 import type { Metres } from '../units.ts';
+import { between } from './geodesic.ts';
 import type { Place } from './geodesic.ts';
 import type { Outline } from './outline.ts';
+import { polarError, polarPoint, radiusBetween } from './polar.ts';
 import { halfWidthAt, inCorridor, inExclusionZone, shapeOf } from './shape.ts';
 import type { Shape } from './shape.ts';
 import { MEAN_RADIUS, ROUGH_ERROR, Strip, directionOf, dot } from './strip.ts';
@@ -60,7 +62,29 @@ function roughly({ shape }: Corridor, { s, y }: StripPoint, doubt: number): bool
 }
 
 /**
- * Whether a place lies in the corridor: decided on a sphere where that is safe, else on the ellipsoid.
+ * Whether distance and azimuth from the launch point settle the question: they cost less than a foot on the ellipsoid,
+ * and err by little. Not near the launch point or the corridor's end, where more than the side is in question.
+ */
+function byPolar(
+  { shape, start, azimuthDeg, strip }: Corridor,
+  place: Place,
+  direction: Vector,
+): boolean | undefined {
+  const sight = between(start, place);
+  const radius = radiusBetween(strip.up, direction);
+  const doubt = polarError(sight.distance);
+  const { s, y } = polarPoint(sight.distance, ((sight.azimuthDeg - azimuthDeg) * Math.PI) / 180, radius);
+  if (s < NEAR || s > shape.range - 2 * doubt) return undefined;
+  const clearance = halfWidthAt(shape, s) - Math.abs(y);
+  return Math.abs(clearance) > doubt ? clearance > 0 : undefined;
+}
+
+/** Nearer than this a foot is sought at once. */
+const NEAR = 200_000;
+
+/**
+ * Whether a place lies in the corridor: decided on a sphere where that is safe, else by distance and azimuth on the
+ * ellipsoid, and close to the corridor's edge by the foot on its flight line.
  * @param direction of the place from the Earth's centre, where it is known already
  */
 export function containsPlace(
@@ -68,12 +92,13 @@ export function containsPlace(
   place: Place,
   direction: Vector = directionOf(place),
 ): boolean {
-  const point = corridor.strip.rough(direction);
-  const away = Math.acos(Math.max(-1, Math.min(1, dot(direction, corridor.strip.up)))) * MEAN_RADIUS;
-  const known = roughly(corridor, point, ROUGH_ERROR * away + 1);
+  const { shape, strip } = corridor;
+  const point = strip.rough(direction);
+  const away = Math.acos(Math.max(-1, Math.min(1, dot(direction, strip.up)))) * MEAN_RADIUS;
+  const known = roughly(corridor, point, ROUGH_ERROR * away + 1) ?? byPolar(corridor, place, direction);
   if (known !== undefined) return known;
-  const { s, y } = corridor.strip.exact(place);
-  return inCorridor(corridor.shape, s, y);
+  const { s, y } = strip.exact(place);
+  return inCorridor(shape, s, y);
 }
 
 /** Whether a place lies in the overflight exclusion zone. */

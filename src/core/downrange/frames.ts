@@ -13,16 +13,17 @@ export interface Frame {
 }
 
 /** A corridor is framed slice by slice, so that a slanting one takes in little beside itself. */
-const SLICE = 300_000;
-/** Between points of a slice's edge less than 300 km apart a geodesic bulges less than 2 km, 0.02° of latitude. */
+const SLICE = 600_000;
+/** Between points of a slice's edge at most 550 km apart a geodesic bulges less than 6 km, 0.06° of latitude. */
 const PAD_DEG = 0.1;
-const ACROSS = 14;
+const ACROSS = 6;
 /** Nearer to a pole than this a frame goes all the way round. */
 const POLAR_DEG = 84;
 
 function edgeOf({ shape, strip }: Corridor, from: number, to: number): Place[] {
   const places: Place[] = [];
-  for (const s of [from, (from + to) / 2, to]) {
+  const corners = shape.corners.map(([s]) => s).filter((s) => s > from && s < to);
+  for (const s of [from, ...corners, (from + to) / 2, to]) {
     const half = widestNear(shape, s);
     for (let step = 0; step <= ACROSS; step += 1)
       places.push(strip.path.beside(s, half * ((2 * step) / ACROSS - 1)));
