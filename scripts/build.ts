@@ -57,6 +57,7 @@ export async function buildWorkers(): Promise<void> {
       ...entries('src/worker'),
       web: path.join(ROOT, 'scripts/web.ts'),
       dev: path.join(ROOT, 'scripts/dev.ts'),
+      worker: path.join(ROOT, 'scripts/worker.ts'),
     },
     outdir: 'dist',
     outExtension: { '.js': '.mjs' },
@@ -76,11 +77,21 @@ function buildPages(): Promise<void> {
   return runNode(['node_modules/astro/astro.js', 'build', '--silent'], env, 'The build');
 }
 
+const isBuiltFrom = (sources: string): boolean =>
+  fs.existsSync(STAMP) && fs.readFileSync(STAMP, 'utf8') === sources;
+
+/** Bundles what a worker process needs, unless everything is built from these very sources already. */
+export async function buildWorkersIfChanged(): Promise<void> {
+  await inLock(`build:${ROOT}`, async () => {
+    if (!isBuiltFrom(hashOfSources())) await buildWorkers();
+  });
+}
+
 /** Builds what is served, unless it is built from these very sources already. */
 export async function buildIfChanged(): Promise<void> {
   await inLock(`build:${ROOT}`, async () => {
     const wanted = hashOfSources();
-    if (fs.existsSync(STAMP) && fs.readFileSync(STAMP, 'utf8') === wanted) return;
+    if (isBuiltFrom(wanted)) return;
     console.log('Building (about half a minute)…');
     fs.rmSync(STAMP, { force: true });
     await buildPages();

@@ -1,8 +1,11 @@
 /*
- * The web process, built to dist/web.mjs: the front, Astro's handler behind it, and the job worker.
+ * The web process, built to dist/web.mjs: the front, Astro's handler behind it, and its share of the queued work.
  * scripts/serve.ts starts it with the environment complete.
  */
 import { fileURLToPath } from 'node:url';
+import { flyInThread } from '#server/ascents/fly-in-thread.ts';
+import { workAscents } from '#server/ascents/work-ascents.ts';
+import { database } from '#server/database.ts';
 import { env } from '#server/env.ts';
 import { workJobs } from '#server/jobs/boss.ts';
 import { stopAll } from '#server/lifecycle.ts';
@@ -24,8 +27,10 @@ server.once('error', (error: NodeJS.ErrnoException) => {
   console.error(error.code === 'EADDRINUSE' ? taken : error.message);
   process.exit(1);
 });
+const ascents = workAscents({ db: database(), fly: flyInThread });
 stopInOrder(async () => {
   await close();
+  await ascents.stop();
   await stopAll();
 });
 await workJobs('mail', deliverMail);

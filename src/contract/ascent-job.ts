@@ -1,5 +1,10 @@
-import type { EvaluateOrbit, EvaluateSite, FlightSettings } from './evaluate.ts';
-import type { VehicleInput } from './vehicle.ts';
+import {
+  AscentInput,
+  ConvergedAscent,
+  DEFAULT_HEADING_SPEED_MPS,
+  NoAscent,
+  type AscentOutput,
+} from './ascent.ts';
 import { z } from './zod.ts';
 
 /**
@@ -10,42 +15,31 @@ export const ASCENT_METHOD = 1;
 
 /** What of a site a flown ascent follows from. */
 export type AscentSite = Pick<
-  EvaluateSite,
+  AscentInput['site'],
   'latitudeDeg' | 'longitudeDeg' | 'elevationM' | 'permittedAzimuthsDeg'
 >;
 /** What of a target orbit a flown ascent follows from. */
 export type AscentOrbit = Pick<
-  EvaluateOrbit,
+  AscentInput['orbit'],
   'perigeeKm' | 'apogeeKm' | 'inclinationDeg' | 'sunSynchronous' | 'profile' | 'parkingKm'
 >;
 
-/** One ascent to be flown. */
-export interface AscentTask {
-  site: AscentSite;
-  orbit: AscentOrbit;
-  vehicle: VehicleInput;
-  settings: FlightSettings;
-}
+/** One ascent to be flown, as the interface takes it. */
+export type AscentTask = AscentInput;
+export const AscentTask = AscentInput;
+export type AscentOutcome = AscentOutput;
 
-const figure = z.number().nullable();
+/** A study's settings as a flight takes them; where the sectors are checked is no setting of the study. */
+export const ascentSettings = ({ turnSpeedFraction }: { turnSpeedFraction: number }) => ({
+  turnSpeedFraction,
+  headingSpeedMps: DEFAULT_HEADING_SPEED_MPS,
+});
 
 /** A flown ascent without its trajectory; every figure is null where it did not converge. */
 export const AscentFigures = z
-  .object({
-    converged: z.boolean(),
-    reason: z.string().nullable().meta({ description: 'Why it did not converge' }),
-    payloadKg: figure,
-    flownInclinationDeg: figure,
-    burnOutS: figure,
-    launchHeadingDeg: figure,
-    maxDynamicPressurePa: figure,
-    idealDeltaVMps: figure,
-    relativeSpeedMps: figure,
-    centrifugalMps: figure,
-    lossesMps: z.object({ gravity: figure, drag: figure, steering: figure, backPressure: figure }).nullable(),
-    remainderMps: figure,
-  })
+  .discriminatedUnion('converged', [
+    ConvergedAscent.omit({ trajectory: true }),
+    NoAscent.omit({ trajectory: true }),
+  ])
   .meta({ id: 'AscentFigures' });
 export type AscentFigures = z.infer<typeof AscentFigures>;
-
-export type AscentOutcome = AscentFigures & { trajectory: readonly unknown[] };

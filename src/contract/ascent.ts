@@ -135,7 +135,7 @@ export const NoAscentReason = z
   });
 export type NoAscentReason = z.infer<typeof NoAscentReason>;
 
-const ConvergedAscent = z
+export const ConvergedAscent = z
   .strictObject({
     converged: z.literal(true),
     reason: z.null(),
@@ -166,7 +166,7 @@ const ConvergedAscent = z
   })
   .meta({ id: 'ConvergedAscent' });
 
-const NoAscent = z
+export const NoAscent = z
   .strictObject({
     converged: z.literal(false),
     reason: NoAscentReason,

@@ -1,3 +1,4 @@
+import { TrajectoryPoint } from './ascent.ts';
 import { AscentFigures } from './ascent-job.ts';
 import { LossesSource } from './requirement.ts';
 import { z } from './zod.ts';
@@ -89,7 +90,7 @@ export const StudyAscents = z
 export type StudyAscents = z.infer<typeof StudyAscents>;
 
 /** One of them with its trajectory. */
-export const StudyAscentDetail = StudyAscent.extend({ trajectory: z.array(z.unknown()) }).meta({
+export const StudyAscentDetail = StudyAscent.extend({ trajectory: z.array(TrajectoryPoint) }).meta({
   id: 'StudyAscentDetail',
 });
 export type StudyAscentDetail = z.infer<typeof StudyAscentDetail>;

@@ -9,6 +9,7 @@ type ThreadName =
   | 'decide-thread'
   | 'corridor-thread'
   | 'ascent-thread'
+  | 'ascent-job-thread'
   | 'memo-thread'
   | 'sensitivity-thread';
 

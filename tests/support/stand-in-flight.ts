@@ -18,6 +18,20 @@ export async function standInFlight({ site, orbit }: AscentTask, tookMs = 0): Pr
     centrifugalMps: 10,
     lossesMps: { gravity: 1_200, drag: 80, steering: 40, backPressure: 120 },
     remainderMps: 5,
-    trajectory: [{ timeS: 0, latitudeDeg: site.latitudeDeg }],
+    trajectory: [
+      {
+        timeS: 0,
+        latitudeDeg: site.latitudeDeg,
+        longitudeDeg: site.longitudeDeg,
+        altitudeM: 0,
+        relativeSpeedMps: 0,
+        flightPathDeg: 90,
+        headingDeg: 90,
+        massKg: 11_100,
+        dynamicPressurePa: 0,
+        accelerationMps2: 15,
+        impact: { kind: 'impact', latitudeDeg: site.latitudeDeg, longitudeDeg: site.longitudeDeg, timeS: 0 },
+      },
+    ],
   };
 }

@@ -1,7 +1,6 @@
 import { promisify } from 'node:util';
 import { gzip } from 'node:zlib';
-import type { AscentOutcome, AscentTask } from '#contract/ascent-job.ts';
-import { VehicleInput } from '#contract/vehicle.ts';
+import { AscentTask, type AscentOutcome } from '#contract/ascent-job.ts';
 import type { PooledDb } from '#db/client.ts';
 import { giveUpAscent, noteFailure, storeAscent, takeUpAscent } from '#db/queries/ascent.ts';
 import { databaseAway } from '#server/endpoint.ts';
@@ -53,8 +52,7 @@ async function flyOne(options: FlyOptions, lease: Lease<'ascents'>, hash: string
   const started = performance.now();
   let flown: AscentOutcome;
   try {
-    const task = row.task as unknown as Omit<AscentTask, 'vehicle'>;
-    flown = await fly({ ...task, vehicle: VehicleInput.parse(row.vehicle) });
+    flown = await fly(AscentTask.parse({ ...row.task, vehicle: row.vehicle }));
   } catch (error) {
     const reason = error instanceof Error ? error.message : String(error);
     return (await noteFailure(db, { ...which, reason })) ? 'again' : 'done';

@@ -1,6 +1,12 @@
 import { createHash } from 'node:crypto';
 import canonicalize from 'canonicalize';
-import { ASCENT_METHOD, type AscentOrbit, type AscentSite, type AscentTask } from '#contract/ascent-job.ts';
+import {
+  ASCENT_METHOD,
+  ascentSettings,
+  type AscentOrbit,
+  type AscentSite,
+  type AscentTask,
+} from '#contract/ascent-job.ts';
 import type { StudyInputs } from '#contract/study-inputs.ts';
 import type { VehicleInput } from '#contract/vehicle.ts';
 
@@ -41,7 +47,7 @@ export interface PairTask {
   orbitId: string;
   hash: string;
   /** The task without its vehicle, which many share. */
-  task: Omit<AscentTask, 'vehicle'>;
+  task: { site: AscentSite; orbit: AscentOrbit; settings: AscentTask['settings'] };
 }
 
 /**
@@ -50,10 +56,11 @@ export interface PairTask {
  * often.
  */
 export function pairTasks(
-  { sites, orbits, settings }: Pick<StudyInputs, 'sites' | 'orbits' | 'settings'>,
+  { sites, orbits, ...inputs }: Pick<StudyInputs, 'sites' | 'orbits' | 'settings'>,
   vehicle: VehicleInput,
 ): PairTask[] {
   const flown = vehicleHash(vehicle);
+  const settings = ascentSettings(inputs.settings);
   const targets = orbits.map((orbit) => ({ orbitId: orbit.orbitId, orbit: orbitOf(orbit) }));
   return sites.flatMap((row) => {
     const site = siteOf(row);

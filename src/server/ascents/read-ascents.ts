@@ -1,5 +1,6 @@
 import { promisify } from 'node:util';
 import { gunzip } from 'node:zlib';
+import type { TrajectoryPoint } from '#contract/ascent.ts';
 import { AscentFigures } from '#contract/ascent-job.ts';
 import type {
   AscentStateName,
@@ -125,5 +126,5 @@ export async function readAscent(
   if (!item) throw notFound('The study has no such site or orbit.');
   const packed = item.hash === null ? undefined : await findTrajectory(db, { hash: item.hash });
   if (!packed) throw notFound('No ascent has been flown for this site and orbit yet.');
-  return { ...item, trajectory: JSON.parse((await unpack(packed)).toString('utf8')) as unknown[] };
+  return { ...item, trajectory: JSON.parse((await unpack(packed)).toString('utf8')) as TrajectoryPoint[] };
 }

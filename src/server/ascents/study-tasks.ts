@@ -1,3 +1,4 @@
+import { AscentVehicle } from '#contract/ascent.ts';
 import type { StudyInputs } from '#contract/study-inputs.ts';
 import { MAX_STUDY_ASCENTS, type AscentsScope } from '#contract/study-ascents.ts';
 import { AppError } from '#server/errors.ts';
@@ -8,6 +9,8 @@ export function obstacleOf({ vehicle, sites, orbits }: StudyInputs): string | nu
   if (!vehicle) return 'The study has no vehicle yet.';
   if (!vehicle.ascent)
     return 'The vehicle says nothing of its drag and steering, which a flown ascent needs.';
+  const [misfit] = AscentVehicle.safeParse(vehicle).error?.issues ?? [];
+  if (misfit) return `The vehicle cannot be flown: ${misfit.path.join('.')}: ${misfit.message}`;
   if (sites.length === 0) return 'The study has no sites yet.';
   return orbits.length === 0 ? 'The manifest has no target orbits yet.' : null;
 }

@@ -11,7 +11,7 @@ const POLL_MS = 500;
 const LOST_MS = 2_000;
 
 /** One core is left for requests. */
-const MOST_AT_ONCE = Math.max(1, availableParallelism() - 1);
+export const MOST_AT_ONCE = Math.max(1, availableParallelism() - 1);
 
 function logFailure(error: unknown): void {
   if (!databaseAway(error)) logError({ worker: 'ascents', error: String(error) });
