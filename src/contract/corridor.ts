@@ -1,4 +1,7 @@
-import { PLACE_DENSITY_PER_KM2, VEHICLE_CLASSES, VERIFY_CASUALTY_AREAS } from '#core/downrange/index.ts';
+// By their own files: the index would bring the geometry and its libraries to everyone who only checks a request.
+import { VERIFY_CASUALTY_AREAS } from '#core/downrange/casualty.ts';
+import { PLACE_DENSITY_PER_KM2 } from '#core/downrange/spread.ts';
+import { VEHICLE_CLASSES } from '#core/downrange/vehicle-class.ts';
 import { AzimuthDeg, LatitudeDeg, LongitudeDeg } from './geography.ts';
 import { z } from './zod.ts';
 
@@ -36,12 +39,9 @@ export const CorridorInput = z
           description:
             'Spread each country’s people beyond the listed settlements evenly over its land: an assumption',
         }),
-        placeDensityPerKm2: between(1, 100_000, 'A density')
-          .default(PLACE_DENSITY_PER_KM2)
-          .meta({
-            description:
-              'People to the square kilometre within a settlement: its area is its people over this',
-          }),
+        placeDensityPerKm2: between(1, 100_000, 'A density').default(PLACE_DENSITY_PER_KM2).meta({
+          description: 'People to the square kilometre within a settlement: its area is its people over this',
+        }),
         casualtyAreasMi2: CasualtyAreasMi2.optional(),
       })
       .prefault({}),
