@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import type { FlownOrbit, OrbitResult } from '#contract/evaluate.ts';
+import { flownOrbit, type FlownState } from '#contract/flown-results.ts';
 import { QUANTITIES, QUANTITY_KEYS, type QuantityKey } from '#contract/quantity.ts';
 import { computedFigure } from '#server/ranking/computed-figure.ts';
 
@@ -142,4 +143,42 @@ test('without orbits only the site’s own figures are there', () => {
   const there = QUANTITY_KEYS.filter((key) => figure(key, []).cell !== null);
   expect(there).toEqual(['rotation-speed', 'lowest-inclination']);
   expect(figure('rotation-speed', [direct])).toEqual({ cell: 465.1 });
+});
+
+describe('with losses of flown ascents', () => {
+  const asFlown = (
+    quantity: QuantityKey,
+    states: readonly FlownState[],
+    payloadPerYearKg: number | null = 6_000,
+  ) =>
+    computedFigure({ quantity }, null, {
+      result: {
+        code: 'TH',
+        rotationSpeedMps: 465.1,
+        geocentricLatitudeDeg: 0,
+        payloadPerYearKg,
+        orbits: states.map((state, at) => flownOrbit(at === 0 ? direct : turned, state)),
+      },
+      states,
+      lowestInclinationDeg: 5.2,
+      flightsPerYear: states.map(() => 1),
+    });
+  const none: FlownState = { kind: 'none', reason: 'falls-short' };
+  const pending: FlownState = { kind: 'pending' };
+
+  test('what is not flown yet is missing, not worst, and says so', () => {
+    const untold = { cell: null, note: 'not flown yet' };
+    for (const quantity of ['delta-v', 'losses', 'shortfall', 'orbits-fallen-short'] as const)
+      expect(asFlown(quantity, [pending, pending]), quantity).toEqual(untold);
+    expect(asFlown('payload-per-year', [pending, pending], null)).toEqual(untold);
+    // The closed form knows these without an ascent.
+    expect(asFlown('turn', [pending, pending])).toEqual({ cell: 12 });
+    expect(asFlown('transfer', [pending, pending])).toEqual({ cell: 120 });
+  });
+
+  test('an ascent that carries nothing counts as the worst, with its reason', () => {
+    expect(asFlown('delta-v', [none])).toEqual({ cell: 'worst', note: 'falls short' });
+    expect(asFlown('payload-per-year', [none, pending], 0)).toEqual({ cell: 0, note: 'LOW counted as 0' });
+    expect(asFlown('orbits-fallen-short', [none, none])).toEqual({ cell: 2 });
+  });
 });

@@ -11,7 +11,11 @@ export function inOneMoment<T>(db: PooledDb, read: (tx: Db) => Promise<T>): Prom
 /** A study's inputs as rows. Call it within `inOneMoment`, or use `readStudyInputs`. */
 export async function selectStudyInputs(tx: Db, { studyId }: { studyId: string }) {
   const [head] = await tx
-    .select({ revision: study.revision, turnSpeedFraction: study.turnSpeedFraction })
+    .select({
+      revision: study.revision,
+      turnSpeedFraction: study.turnSpeedFraction,
+      losses: study.losses,
+    })
     .from(study)
     .where(eq(study.id, studyId));
   if (!head) return undefined;

@@ -1,5 +1,6 @@
 import type { Criterion } from '#contract/criterion.ts';
 import type { OrbitResult, SiteResult } from '#contract/evaluate.ts';
+import { noAscentInWords, PENDING, type FlownState } from '#contract/flown-results.ts';
 import { formatNumber, listInWords } from '#contract/format.ts';
 import type { QuantityKey } from '#contract/quantity.ts';
 import type { RankingCell } from '#contract/ranking.ts';
@@ -13,6 +14,8 @@ export interface ComputedFigure {
 /** What a site's computed criteria are read from; results stand in the order of the manifest. */
 export interface SiteFlight {
   result: SiteResult;
+  /** Where the losses are those of flown ascents: what is flown for each orbit; the result is as flown. */
+  states?: readonly FlownState[];
   lowestInclinationDeg: number;
   flightsPerYear: readonly number[];
 }
@@ -21,80 +24,105 @@ const MISSING: ComputedFigure = { cell: null };
 const NO_VEHICLE: ComputedFigure = { cell: null, note: 'no vehicle yet' };
 const KG_PER_TONNE = 1000;
 
-const turnOf = (orbit: OrbitResult): number | null =>
+/** One orbit of a site with why it gives no payload, in words. */
+interface Leg {
+  orbit: OrbitResult;
+  /** Why it gives none for certain; null where it gives one or nobody can say. */
+  fails: string | null;
+  /** What stands where nobody can say. */
+  untold: ComputedFigure;
+}
+
+const turnOf = ({ orbit }: Leg): number | null =>
   orbit.way === 'out-of-reach' ? null : orbit.turnDeg + orbit.planeChangeDeg;
 
-/** Why an orbit gives no payload; null where it gives one. */
-function failing(orbit: OrbitResult): string | null {
+function failing(orbit: OrbitResult, state: FlownState | undefined): string | null {
   if (orbit.way === 'out-of-reach') return 'out of reach';
+  if (state) return state.kind === 'none' ? noAscentInWords(state) : null;
   return orbit.shortfallMps === null
     ? null
     : `falls short by ${formatNumber(Math.ceil(orbit.shortfallMps))} m/s`;
 }
 
-function payload(orbit: OrbitResult): ComputedFigure {
-  const note = failing(orbit);
-  if (note) return { cell: 0, note };
-  return orbit.payloadKg === null ? NO_VEHICLE : { cell: orbit.payloadKg };
+function legsOf({ result, states }: SiteFlight): Leg[] {
+  return result.orbits.map((orbit, at) => ({
+    orbit,
+    fails: failing(orbit, states?.[at]),
+    untold: states ? { cell: null, note: PENDING } : NO_VEHICLE,
+  }));
 }
 
-function payloadPerYear({ result, flightsPerYear }: SiteFlight): ComputedFigure {
-  if (result.payloadPerYearKg === null) return NO_VEHICLE;
-  const without = result.orbits.filter(
-    (orbit, at) => (flightsPerYear[at] ?? 0) > 0 && failing(orbit) !== null,
-  );
+function payload({ orbit, fails, untold }: Leg): ComputedFigure {
+  if (fails) return { cell: 0, note: fails };
+  return orbit.payloadKg === null ? untold : { cell: orbit.payloadKg };
+}
+
+function payloadPerYear(flight: SiteFlight): ComputedFigure {
+  const { result, flightsPerYear } = flight;
+  const legs = legsOf(flight);
+  if (result.payloadPerYearKg === null) return legs[0]?.untold ?? NO_VEHICLE;
+  const without = legs.filter(({ fails }, at) => (flightsPerYear[at] ?? 0) > 0 && fails !== null);
   const cell = result.payloadPerYearKg / KG_PER_TONNE;
   return without.length === 0
     ? { cell }
-    : { cell, note: `${listInWords(without.map(({ code }) => code))} counted as 0` };
+    : { cell, note: `${listInWords(without.map(({ orbit }) => orbit.code))} counted as 0` };
 }
 
 /** A figure per orbit, or the worst over the manifest: an orbit without one makes the whole `worst`. */
 function perOrbit(
-  orbits: readonly OrbitResult[],
-  figure: (orbit: OrbitResult) => number | null,
+  legs: readonly Leg[],
+  figure: (leg: Leg) => number | null,
   worst: (...figures: number[]) => number,
 ): ComputedFigure {
-  const unflown = orbits.filter((orbit) => failing(orbit) !== null);
-  const [first] = unflown;
+  const first = legs.find(({ fails }) => fails !== null);
   if (first) {
-    const words = failing(first) ?? '';
-    return { cell: 'worst', note: orbits.length === 1 ? words : `${first.code} ${words}` };
+    const words = first.fails ?? '';
+    return { cell: 'worst', note: legs.length === 1 ? words : `${first.orbit.code} ${words}` };
   }
-  const figures = orbits.map(figure).filter((one) => one !== null);
+  const figures = legs.map(figure).filter((one) => one !== null);
   return figures.length === 0 ? MISSING : { cell: worst(...figures) };
 }
 
+/** The first leg of which nobody can say what it carries. */
+const untoldOf = (legs: readonly Leg[]): Leg | undefined =>
+  legs.find(({ orbit, fails }) => fails === null && orbit.payloadKg === null);
+
 /** How many orbits give no payload; without a vehicle none of those within reach can be told. */
-function fallenShort(orbits: readonly OrbitResult[]): ComputedFigure {
-  const untold = orbits.some((orbit) => failing(orbit) === null && orbit.payloadKg === null);
-  return untold ? NO_VEHICLE : { cell: orbits.filter((orbit) => failing(orbit) !== null).length };
+function fallenShort(legs: readonly Leg[]): ComputedFigure {
+  return untoldOf(legs)?.untold ?? { cell: legs.filter(({ fails }) => fails !== null).length };
 }
 
 /** What a site lacks to reach an orbit: none where it brings payload there. An orbit fallen short has a figure here. */
-function shortfall(orbits: readonly OrbitResult[]): ComputedFigure {
-  const far = orbits.find(({ way }) => way === 'out-of-reach');
-  if (far) return { cell: 'worst', note: orbits.length === 1 ? 'out of reach' : `${far.code} out of reach` };
-  if (orbits.some(({ payloadKg, shortfallMps }) => payloadKg === null && shortfallMps === null))
-    return NO_VEHICLE;
-  return { cell: Math.max(...orbits.map(({ shortfallMps }) => shortfallMps ?? 0)) };
+function shortfall(legs: readonly Leg[]): ComputedFigure {
+  const none = legs.find(({ orbit, fails }) => fails !== null && orbit.shortfallMps === null);
+  if (none) {
+    const words = none.fails ?? '';
+    return { cell: 'worst', note: legs.length === 1 ? words : `${none.orbit.code} ${words}` };
+  }
+  return untoldOf(legs)?.untold ?? { cell: Math.max(...legs.map(({ orbit }) => orbit.shortfallMps ?? 0)) };
 }
 
 type Line = keyof OrbitResult['deltaVMps'];
 
+/** Lines that a flown ascent moves: while it is pending they are not known. */
+const FLOWN_LINES: ReadonlySet<Line> = new Set<Line>(['required', 'losses', 'dogleg', 'total']);
+
 /** The greatest sum of some lines of the Δv budget over the orbits. */
 const budget =
   (...lines: readonly Line[]) =>
-  (_: SiteFlight, orbits: readonly OrbitResult[]): ComputedFigure =>
-    perOrbit(
-      orbits,
-      ({ deltaVMps }) => lines.reduce((sum, line) => sum + (deltaVMps[line] ?? 0), 0),
+  ({ states }: SiteFlight, legs: readonly Leg[]): ComputedFigure => {
+    const pending = states && lines.some((line) => FLOWN_LINES.has(line)) ? untoldOf(legs) : undefined;
+    if (pending && legs.every(({ fails }) => fails === null)) return pending.untold;
+    return perOrbit(
+      legs,
+      ({ orbit }) => lines.reduce((sum, line) => sum + (orbit.deltaVMps[line] ?? 0), 0),
       Math.max,
     );
+  };
 
-const READERS: Record<QuantityKey, (flight: SiteFlight, orbits: readonly OrbitResult[]) => ComputedFigure> = {
+const READERS: Record<QuantityKey, (flight: SiteFlight, legs: readonly Leg[]) => ComputedFigure> = {
   'payload-per-year': payloadPerYear,
-  payload: (_, [orbit]) => (orbit ? payload(orbit) : MISSING),
+  payload: (_, [leg]) => (leg ? payload(leg) : MISSING),
   'delta-v': budget('total'),
   'required-speed': budget('required'),
   losses: budget('losses'),
@@ -102,13 +130,15 @@ const READERS: Record<QuantityKey, (flight: SiteFlight, orbits: readonly OrbitRe
   dogleg: budget('dogleg'),
   'plane-change': budget('planeChange'),
   transfer: budget('transfer'),
-  shortfall: (_, orbits) => shortfall(orbits),
+  shortfall: (_, legs) => shortfall(legs),
   'rotation-speed': ({ result }) => ({ cell: result.rotationSpeedMps }),
-  'rotation-gain': (_, orbits) => perOrbit(orbits, (orbit) => orbit.rotationGainMps, Math.min),
-  turn: (_, orbits) => perOrbit(orbits, turnOf, Math.max),
+  'rotation-gain': (_, legs) => perOrbit(legs, ({ orbit }) => orbit.rotationGainMps, Math.min),
+  turn: (_, legs) => perOrbit(legs, turnOf, Math.max),
   'lowest-inclination': ({ lowestInclinationDeg }) => ({ cell: lowestInclinationDeg }),
-  'orbits-fallen-short': (_, orbits) => fallenShort(orbits),
-  'orbits-out-of-reach': (_, orbits) => ({ cell: orbits.filter(({ way }) => way === 'out-of-reach').length }),
+  'orbits-fallen-short': (_, legs) => fallenShort(legs),
+  'orbits-out-of-reach': (_, legs) => ({
+    cell: legs.filter(({ orbit }) => orbit.way === 'out-of-reach').length,
+  }),
 };
 
 /** Quantities that need no target orbit. */
@@ -124,8 +154,8 @@ export function computedFigure(
   orbitIndex: number | null,
   flight: SiteFlight,
 ): ComputedFigure {
-  const { orbits } = flight.result;
-  const asked = orbitIndex === null ? orbits : orbits.slice(orbitIndex, orbitIndex + 1);
+  const legs = legsOf(flight);
+  const asked = orbitIndex === null ? legs : legs.slice(orbitIndex, orbitIndex + 1);
   if (quantity === null) return MISSING;
   if (asked.length === 0 && !OF_THE_SITE.has(quantity)) return MISSING;
   return READERS[quantity](flight, asked);

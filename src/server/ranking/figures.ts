@@ -1,5 +1,6 @@
 import type { Criterion } from '#contract/criterion.ts';
 import type { SiteResult } from '#contract/evaluate.ts';
+import { flownSite } from '#contract/flown-results.ts';
 import type { RankingFigures } from '#contract/ranking.ts';
 import type { InputSite, StudyInputs } from '#contract/study-inputs.ts';
 import { toSite } from '#contract/to-core.ts';
@@ -15,9 +16,15 @@ import type { RankingSnapshot } from './read-snapshot.ts';
 const REFERENCE_ALTITUDE_KM = 185;
 
 /** Figures of every site under every weighed criterion, computed and entered. */
-export function rankingFigures({ inputs, criteria, entered, evidence }: RankingSnapshot): RankingFigures {
+export function rankingFigures({
+  inputs,
+  flown,
+  criteria,
+  entered,
+  evidence,
+}: RankingSnapshot): RankingFigures {
   const weighed = criteria.filter(({ source }) => source !== 'text');
-  const flights = weighed.some(({ source }) => source === 'computed') ? flightsOf(inputs) : [];
+  const flights = weighed.some(({ source }) => source === 'computed') ? flightsOf(inputs, flown) : [];
   const notes: RankingFigures['notes'] = [];
   const cells = inputs.sites.map(({ siteId }, site) =>
     weighed.map((criterion, place) => {
@@ -83,12 +90,18 @@ function orbitIndexOf({ orbits }: StudyInputs, { orbitId }: Criterion): number |
   return index < 0 ? orbits.length : index;
 }
 
-function flightsOf(inputs: StudyInputs): SiteFlight[] {
+function flightsOf(inputs: StudyInputs, flown: RankingSnapshot['flown']): SiteFlight[] {
   const speed = circularSpeed(radiusOf(fromKilometres(REFERENCE_ALTITUDE_KM)));
   const flightsPerYear = inputs.orbits.map((orbit) => orbit.flightsPerYear);
   const lowest = (site: InputSite): number => toDegrees(lowestInclination(padOf(toSite(site)), speed));
   return evaluateStudy(inputs).map((result: SiteResult, at) => {
     const site = inputs.sites[at];
-    return { result, flightsPerYear, lowestInclinationDeg: site ? lowest(site) : 0 };
+    const states = flown?.[at];
+    return {
+      result: states ? flownSite(result, states, flightsPerYear) : result,
+      ...(states ? { states } : {}),
+      flightsPerYear,
+      lowestInclinationDeg: site ? lowest(site) : 0,
+    };
   });
 }
