@@ -245,7 +245,7 @@ export class Course {
     return Math.max(this.cuts[place] as number, 1);
   }
 
-  /** Steps to where a figure is zero, if it changes sign within the step that was made. */
+  /** Steps to where a figure is zero within the step that was made; to its start where it does not change sign. */
   private locate(h: number, figure: () => number): void {
     const at = (part: number): number => {
       this.again(part);
@@ -253,7 +253,7 @@ export class Course {
     };
     const atStart = at(0);
     const atEnd = at(h);
-    this.again(rootBetween(at, 0, h, atStart, atEnd, 1e-9));
+    this.again(atStart * atEnd <= 0 ? rootBetween(at, 0, h, atStart, atEnd, 1e-9) : 0);
   }
 
   private readonly overPressure = (): number => {

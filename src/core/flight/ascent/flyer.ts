@@ -257,6 +257,16 @@ export class Flyer {
     return Math.sqrt(wx * wx + wy * wy + (state[5] as number) ** 2);
   }
 
+  /** Angle of the air-relative velocity over the geocentric horizontal, rad; the vertical at rest. */
+  pathNow(): number {
+    const { state } = this;
+    const [x, y, z] = [state[0] as number, state[1] as number, state[2] as number];
+    // The Earth's turning carries across the radius: r · w = r · v.
+    const climb = x * (state[3] as number) + y * (state[4] as number) + z * (state[5] as number);
+    const moved = Math.sqrt(x * x + y * y + z * z) * this.relativeSpeed();
+    return moved > 0 ? Math.asin(Math.min(1, Math.max(-1, climb / moved))) : Math.PI / 2;
+  }
+
   /** Heading of the air-relative velocity, clockwise from north, rad in (−π, π]; the vertical is the ellipsoid's. */
   headingNow(): number {
     const { state, omega } = this;

@@ -19,15 +19,29 @@ import { roughPayload } from './rocket.ts';
 
 /** Losses of a first guess at the payload, m/s: the middle of the usual ones, back-pressure among them. */
 const ROUGH_LOSSES = 1750;
-/** Kick and tangents to start from, in the order tried. */
-const STARTS: readonly (readonly [tilt: number, first: number, last: number])[] = [
-  [0.1, 0.5, 0],
-  [0.15, 0.4, 0],
-  [0.06, 0.7, -0.1],
-  [0.22, 0.25, 0],
-  [0.04, 1, -0.3],
-  [0.3, 0.5, 0],
+/** A place to start from: the kick's tilt, or the path it is to lead to when the upper stages begin; the tangents. */
+interface Start {
+  /** rad */
+  readonly tilt?: number;
+  /** Flight-path angle over the ground at the start of the upper stages, rad. */
+  readonly path?: number;
+  readonly first: number;
+  readonly last: number;
+}
+
+/** Starts in the order tried: what serves most vehicles, then paths from middling to steep and flat. */
+const STARTS: readonly Start[] = [
+  { tilt: 0.1, first: 0.5, last: 0 },
+  { path: 0.35, first: 0.45, last: 0 },
+  { path: 0.6, first: 0.25, last: 0 },
+  { path: 0.2, first: 0.7, last: -0.1 },
+  { path: 0.9, first: 0.1, last: 0 },
+  { path: 0.08, first: 1, last: -0.3 },
 ];
+/** Tilts between which a path is looked for, and the halvings spent on it. */
+const LEAST_TILT = 2e-3;
+const MOST_TILT = 0.8;
+const HALVINGS = 9;
 const LIMITS = { iterations: 40, stride: 8 };
 /** The plane is turned by no more than this at a time when a dogleg is led up to, rad. */
 const TURN_STEP = 0.15;
@@ -74,19 +88,33 @@ const aboveCoasting = ({ radius, course }: Attempt): number =>
 const legInclination = ({ pad, way }: Attempt): number =>
   inclinationFlown(pad.geocentricLatitude, way.inertialAzimuth);
 
+/** The tilt whose gravity turn leads to a path when the upper stages begin: the more tilt, the flatter. */
+function tiltFor(attempt: Attempt, variables: Float64Array, path: number): number {
+  const problem = problemOf(attempt, [], undefined);
+  problem.all.set(variables);
+  let [low, high] = [LEAST_TILT, MOST_TILT];
+  for (let k = 0; k < HALVINGS; k++) {
+    const middle = Math.sqrt(low * high);
+    problem.all[TILT] = middle;
+    if (problem.flyFirst() && attempt.course.flyer.pathNow() > path) low = middle;
+    else high = middle;
+  }
+  return low;
+}
+
 /** The variables of a start; the plane is the target's, or the one the way reaches. */
-function startOf(attempt: Attempt, [tilt, first, last]: (typeof STARTS)[number]): Float64Array {
+function startOf(attempt: Attempt, { tilt, path, first, last }: Start): Float64Array {
   const { way, target, course } = attempt;
   const after = afterInjection(attempt);
   const inclination = changesPlane(attempt) ? legInclination(attempt) : target.inclination;
   const variables = new Float64Array(VARIABLES);
-  variables[TILT] = tilt;
   variables[AZIMUTH] = way.launchAzimuth;
   variables[FIRST_TANGENT] = first;
   variables[LAST_TANGENT] = last;
   variables[COAST] = aboveCoasting(attempt) * COAST_GUESS;
   variables[INCLINATION] = inclination;
   variables[SIZE] = roughPayload(course.stack, way.requiredSpeed + ROUGH_LOSSES + after(inclination));
+  variables[TILT] = tilt ?? tiltFor(attempt, variables, path ?? 0);
   return variables;
 }
 
@@ -129,16 +157,15 @@ function alongEdge(attempt: Attempt, from: Float64Array, edge: number): Ended {
  */
 export function searchWay(attempt: Attempt, warm: Float64Array | undefined, edge: number | undefined): Found {
   const before = attempt.course.flights;
-  const starts = STARTS.map((start) => startOf(attempt, start));
-  if (warm !== undefined) starts.unshift(warm);
   let best: Ended = {
     search: { outcome: 'cannot-be-flown', iterations: 0, residual: Infinity },
     variables: new Float64Array(VARIABLES),
   };
   let tried = 0;
-  for (const start of starts) {
+  for (const start of warm === undefined ? STARTS : [warm, ...STARTS]) {
     tried += 1;
-    const found = edge === undefined ? finish(attempt, start, edge) : alongEdge(attempt, start, edge);
+    const from = start instanceof Float64Array ? start : startOf(attempt, start);
+    const found = edge === undefined ? finish(attempt, from, edge) : alongEdge(attempt, from, edge);
     if (found.search.residual <= best.search.residual) best = found;
     if (found.search.outcome === 'converged') break;
   }

@@ -13,6 +13,7 @@ import { launchPointOf } from '#core/flight/ascent/launch-point.ts';
 import { Maximiser } from '#core/flight/ascent/maximise.ts';
 import {
   AZIMUTH,
+  COAST,
   FIRST_TANGENT,
   LAST_TANGENT,
   Operational,
@@ -29,7 +30,7 @@ import { isPermitted } from '#core/flight/sectors.ts';
 import { toDegrees } from '#core/units.ts';
 import type { Radians } from '#core/units.ts';
 import library from '#seed/vehicles.json' with { type: 'json' };
-import { anyOrbit, anySite, orbitOf, SEED, siteAt } from '#tests/support/flights.ts';
+import { anyOrbit, anySite, anyVehicle, orbitOf, SEED, siteAt } from '#tests/support/flights.ts';
 
 const SETTINGS = { turnSpeedFraction: 0.6, headingSpeed: 500 };
 const vehicles = library.vehicles.map((vehicle) => ({
@@ -250,6 +251,14 @@ describe('an ascent', () => {
     }
   });
 
+  test('to a high parking orbit coasts before its upper stage, and carries more for it', () => {
+    const high = orbitOf(800, 800, 51.6, 'auto', 800);
+    const ascent = flown(rowan, siteAt(10), high);
+    expectWhole(ascent, high);
+    expect(ascent.variables[COAST]).toBeGreaterThan(30);
+    expect(flown(rowan, siteAt(10), orbitOf(800, 800, 51.6)).variables[COAST]).toBe(0);
+  });
+
   test('of any site and orbit closes its account or says why there is none', () => {
     fc.assert(
       fc.property(anySite, anyOrbit, fc.nat(1), (site, target, k) => {
@@ -264,6 +273,35 @@ describe('an ascent', () => {
         expect(nearest).toBe(true);
       }),
       { ...SEED, numRuns: 80 },
+    );
+  }, 60_000);
+
+  test('of any vehicle does the same', () => {
+    const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });
+    const anyFigures = fc.record({
+      area: between(0.1, 20),
+      boosterArea: between(0.1, 3),
+      coefficient: between(0, 1.5),
+      verticalRise: between(0, 20),
+      kick: between(1, 20),
+      dynamicPressureLimit: fc.oneof(fc.constant(Infinity), between(5000, 60_000)),
+      accelerationLimit: fc.oneof(fc.constant(Infinity), between(15, 80)),
+      fairingHeating: fc.constantFrom(0, 1135),
+    });
+    fc.assert(
+      fc.property(anySite, anyOrbit, anyVehicle, anyFigures, (site, target, vehicle, figures) => {
+        const { coefficient, ...rest } = figures;
+        const drag = [
+          [0, coefficient],
+          [1.1, 1.5 * coefficient],
+          [4, coefficient],
+        ] as const;
+        const flyer = new AscentFlyer({ ...vehicle, ascent: { ...rest, drag } }, SETTINGS);
+        const ascent = flyer.fly(padOf(site), targetOf(target));
+        expect(ascent.flights).toBeLessThan(12_000);
+        if (ascent.kind === 'flown') expectWhole(ascent, target);
+      }),
+      { ...SEED, numRuns: 60 },
     );
   }, 60_000);
 });
