@@ -93,7 +93,7 @@ test('a rating is chosen by its steps with the keyboard alone', async ({ open, b
   const step = (values[rating.id] ?? 0) === 4 ? 3 : 4;
   await cell.click();
   await page.keyboard.press('Enter');
-  await expect(page.getByRole('radio', { checked: true })).toBeFocused();
+  await expect(page.locator('.fig-editor').getByRole('radio', { checked: true })).toBeFocused();
   await page.keyboard.press(String(step));
   await expect.poll(async () => (await siteOf(page, study, name)).values[rating.id]).toBe(step);
 });
@@ -119,7 +119,8 @@ test('someone else’s change of the same figure meanwhile is a choice between t
     data: { version, values: { [entered.id]: old + 1 }, particulars: { [entered.id]: null } },
   });
   expect(answer.status()).toBe(200);
-  await field.press('Enter');
+  // Not on the field, which gives way to the choice.
+  await page.keyboard.press('Enter');
   await expect(page.getByText('while you were typing')).toBeVisible();
   await page.getByRole('button', { name: `Put ${old + 3}` }).click();
   await expect.poll(async () => (await siteOf(page, study, name)).values[entered.id]).toBe(old + 3);
@@ -185,7 +186,7 @@ test('figures without a source are found, given one and evidence, and the file c
     .getByRole('button', { name: `of ${name},` })
     .first()
     .click();
-  await expect(stranger.getByText('Figures are an engineer’s or a lead’s to enter.')).toBeVisible();
+  await expect(stranger.getByText('Figures are an engineer’s or a lead’s to enter.').first()).toBeVisible();
   await expect(stranger.getByRole('button', { name: /^Save the figure/ })).toHaveCount(0);
   const refused = await stranger.request.delete(address.replace(/\/file$/, ''), {
     headers: fromApp(baseURL),

@@ -34,7 +34,9 @@ function begun(pressed: string | null, rating: boolean): string | null {
  * was. What cannot stand keeps its text and says why; what someone else changed meanwhile is for the person to choose.
  */
 export function FigureEditor(props: FigureEditorProps) {
-  const { studyId, site, criterion, shown, onSaved, onLeave, onOpen } = props;
+  const { studyId, site, criterion, onSaved, onLeave, onOpen } = props;
+  // As the editor was opened on it, whatever arrives in the grid meanwhile.
+  const [shown] = useState(props.shown);
   const rating = criterion.source === 'rating';
   const start = rating ? String(shown.value ?? '') : entryText(shown);
   const first = begun(props.pressed, rating);

@@ -13,6 +13,7 @@ import {
   ScrollApiModule,
   TextFilterModule,
   type GridApi,
+  type GridOptions,
   type IRowNode,
 } from 'ag-grid-community';
 import { AgGridReact } from 'ag-grid-react';
@@ -75,6 +76,20 @@ const rowClasses = {
   'rk-row-aside': kindIs('set-aside'),
 };
 
+/** Given as the same objects every time, so that a new model alone makes the grid sort and draw. */
+const STEADY: GridOptions<GridLine> = {
+  getRowId: ({ data }) => data.id,
+  getRowHeight: ({ data }) => (data?.kind === 'band' ? BAND_HEIGHT : ROW_HEIGHT),
+  isFullWidthRow: ({ rowNode }) => isBand(rowNode as IRowNode<GridLine>),
+  postSortRows: ({ nodes }) => keepGroups(nodes),
+  rowSelection: {
+    mode: 'singleRow',
+    checkboxes: false,
+    enableClickSelection: true,
+    isRowSelectable: (node) => !isBand(node),
+  },
+};
+
 export default function RankingGrid(props: RankingGridProps) {
   const { model, sheet, barWidth, hidden, filtersShown, chosen, onChoose, onView, onShown, desk } = props;
   const typed = desk.locked === undefined;
@@ -118,24 +133,15 @@ export default function RankingGrid(props: RankingGridProps) {
             rowData={lines}
             columnDefs={columns}
             defaultColDef={defaults}
-            getRowId={({ data }) => data.id}
-            getRowHeight={({ data }) => (data?.kind === 'band' ? BAND_HEIGHT : ROW_HEIGHT)}
+            {...STEADY}
             domLayout={tall ? 'normal' : 'autoHeight'}
             suppressRowVirtualisation={!tall}
             suppressColumnVirtualisation={!tall}
             headerHeight={HEADER_HEIGHT}
             floatingFiltersHeight={FILTER_HEIGHT}
-            isFullWidthRow={({ rowNode }) => isBand(rowNode as IRowNode<GridLine>)}
             fullWidthCellRenderer={DrawnBand}
-            postSortRows={({ nodes }) => keepGroups(nodes)}
             alwaysPassFilter={isBand}
             rowClassRules={rowClasses}
-            rowSelection={{
-              mode: 'singleRow',
-              checkboxes: false,
-              enableClickSelection: true,
-              isRowSelectable: (node) => !isBand(node),
-            }}
             animateRows={!matchMedia('(prefers-reduced-motion: reduce)').matches}
             ensureDomOrder
             suppressCellFocus={false}
