@@ -1,4 +1,5 @@
 import { describe, expect, test } from 'vitest';
+import type { FlownState } from '#contract/flown-results.ts';
 import type { MemoBlock, MemoModel, MemoTable } from '#contract/memo.ts';
 import { composeMemo } from '#server/memo/compose.ts';
 import { inventedFacts } from './invented.ts';
@@ -125,5 +126,49 @@ describe('the document', () => {
       ({ cells }) => cells[1]?.text,
     );
     expect(assumptions).toEqual(['1,320 m/s', '185 m/s', '15 m/s', '40 m/s', '42 kg', '0.6']);
+  });
+});
+
+describe('with flown losses', () => {
+  const flown: FlownState = {
+    kind: 'flown',
+    figures: {
+      converged: true,
+      reason: null,
+      payloadKg: 4_612.4,
+      flownInclinationDeg: 28,
+      burnOutS: 521.7,
+      launchHeadingDeg: 91.2,
+      maxDynamicPressurePa: 34_120,
+      idealDeltaVMps: 8_925.4,
+      relativeSpeedMps: 7_390.3,
+      centrifugalMps: 14.8,
+      lossesMps: { gravity: 1_250.2, drag: 59.9, steering: 150.4, backPressure: 89.4 },
+      remainderMps: -13,
+    },
+  };
+  const states: FlownState[] = [flown, { kind: 'none', reason: 'falls-short' }, { kind: 'pending' }];
+  const model = composeMemo(
+    inventedFacts({ sites: 3, orbits: 2, flown: (site) => states[site] ?? { kind: 'pending' } }),
+  );
+
+  test('every ascent’s parts add up to its ideal Δv, and the payload stands beside', () => {
+    const [ascents] = titled(model, /^Flown ascents to /);
+    const texts = ascents?.rows.map(({ cells }) => cells.map(({ text }) => text)) ?? [];
+    const row = texts.find((cells) => cells.at(-1) === '4,612') ?? [];
+    expectClosed(row.slice(2, 8), row[8] ?? '');
+  });
+
+  test('what fell short and what is not flown yet is said in place of figures, in every table', () => {
+    // Sites stand in the order of their ranks, so the words are looked for anywhere in the second column.
+    for (const { caption, rows } of titled(model, /^(Flown ascents to|Δv to|Payload to each orbit)/)) {
+      const words = rows.map(({ cells }) => cells[1]?.text ?? '').filter((text) => /[a-z]{4}/.test(text));
+      expect(
+        words.filter((text) => text !== 'direct' && text !== 'dogleg' && text !== 'plane change').sort(),
+        caption,
+      ).toEqual(['falls short', 'not flown yet']);
+    }
+    expect(JSON.stringify(model)).toContain('2 ascents of the listed sites are not flown yet');
+    expect(JSON.stringify(model)).not.toContain('no ascent is flown');
   });
 });

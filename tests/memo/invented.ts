@@ -1,4 +1,5 @@
 /* Invented facts of any size for the memo's tests: figures are arbitrary, sums are true sums. */
+import type { FlownState } from '#contract/flown-results.ts';
 import { agreementOf } from '#contract/agreement-model.ts';
 import { DrawQuery } from '#contract/sensitivity.ts';
 import { sensitivityOf } from '#contract/sensitivity-model.ts';
@@ -35,6 +36,8 @@ export interface Invented {
   members?: MemberWeights[];
   /** Sites whose first figure has a low, a high and a source. */
   uncertain?: number;
+  /** Flown ascents, by site and orbit; left out: entered losses. */
+  flown?: (site: number, orbit: number) => FlownState;
 }
 
 const uuid = (kind: number, index: number): string =>
@@ -278,6 +281,15 @@ export function inventedFacts(wanted: Invented): MemoFacts {
     },
     inputs,
     results,
+    flown:
+      wanted.flown === undefined
+        ? null
+        : new Map(
+            inputs.sites.map(({ siteId }, site) => [
+              siteId,
+              inputs.orbits.map((_, orbit) => wanted.flown?.(site, orbit) ?? { kind: 'pending' }),
+            ]),
+          ),
     decimals: figures.criteria.map((_, place) => decimalsOf(figures, place)),
     ranking: presentRanking(model, 'study'),
     figures,

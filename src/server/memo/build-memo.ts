@@ -1,3 +1,6 @@
+import type { SiteResult } from '#contract/evaluate.ts';
+import { flownSite } from '#contract/flown-results.ts';
+import type { InputSite } from '#contract/study-inputs.ts';
 import { formatDateUtc } from '#contract/format.ts';
 import { MAX_PAGE_SIZE } from '#contract/list.ts';
 import type { MemoModel, MemoPaper } from '#contract/memo.ts';
@@ -14,7 +17,7 @@ import { agreementOf } from '#contract/agreement-model.ts';
 import { DrawQuery, type Sensitivity } from '#contract/sensitivity.ts';
 import { rankingFigures } from '#server/ranking/figures.ts';
 import { runSensitivity, type RunSensitivity } from '#server/ranking/read-sensitivity.ts';
-import { readSnapshot } from '#server/ranking/read-snapshot.ts';
+import { readSnapshot, type RankingSnapshot } from '#server/ranking/read-snapshot.ts';
 import { readMemberWeights } from '#server/weights/member-weights.ts';
 import { composeMemo } from './compose.ts';
 import type { MemoFacts } from './facts.ts';
@@ -47,13 +50,15 @@ export async function loadMemoFacts(
   const query = DrawQuery.parse({});
   const drawn = await run({ figures, statement: snapshot.study, weights: 'study', query });
   const sites = listedSites({ ranking, inputs }).map(({ site }) => site);
-  const flights = evaluateStudy({ ...inputs, sites });
+  const flown = flownOf(snapshot, sites);
+  const flights = flightsOf(snapshot, sites, flown);
   return {
     paper,
     date: formatDateUtc(now),
     origin: publicOrigin(env()),
     study,
     inputs,
+    flown,
     results: new Map(sites.flatMap(({ siteId }, at) => (flights[at] ? [[siteId, flights[at]]] : []))),
     decimals: figures.criteria.map((_, place) => decimalsOf(figures, place)),
     ranking,
@@ -65,6 +70,22 @@ export async function loadMemoFacts(
     members: agreementOf(ready, members),
     checksum: canonicalInputs(snapshot).checksum,
   };
+}
+
+type Flown = MemoFacts['flown'];
+
+function flownOf({ inputs, flown }: RankingSnapshot, sites: readonly InputSite[]): Flown {
+  if (flown === null) return null;
+  const bySite = new Map(inputs.sites.map(({ siteId }, at) => [siteId, flown[at] ?? []]));
+  return new Map(sites.map(({ siteId }) => [siteId, bySite.get(siteId) ?? []]));
+}
+
+function flightsOf({ inputs }: RankingSnapshot, sites: InputSite[], flown: Flown): SiteResult[] {
+  const flightsPerYear = inputs.orbits.map((orbit) => orbit.flightsPerYear);
+  return evaluateStudy({ ...inputs, sites }).map((result, at) => {
+    const states = flown?.get(sites[at]?.siteId ?? '');
+    return states ? flownSite(result, states, flightsPerYear) : result;
+  });
 }
 
 /** The study's memo as it stands now. @throws AppError 'not-found' */

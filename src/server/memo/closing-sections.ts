@@ -1,14 +1,16 @@
 import type { MemoBlock, MemoCaution } from '#contract/memo.ts';
 import type { MemoFacts } from './facts.ts';
 
-export const ESTIMATES: MemoCaution = {
+export const estimates = ({ flown }: Pick<MemoFacts, 'flown'>): MemoCaution => ({
   kind: 'caution',
   strong: 'Estimates for comparing sites, not flight data.',
-  text: 'Closed formulas and entered losses; no ascent is flown.',
-};
+  text:
+    flown === null
+      ? 'Closed formulas and entered losses; no ascent is flown.'
+      : 'Closed formulas, and ascents flown by a point-mass model of the vehicle.',
+});
 
-const CAUTIONS: MemoCaution[] = [
-  ESTIMATES,
+const FURTHER: MemoCaution[] = [
   {
     kind: 'caution',
     strong: 'Nothing downrange is screened in this memo.',
@@ -22,7 +24,7 @@ const CAUTIONS: MemoCaution[] = [
 ];
 
 /** What the figures are not. */
-export const cautionBlocks = (): MemoBlock[] => [...CAUTIONS];
+export const cautionBlocks = (facts: MemoFacts): MemoBlock[] => [estimates(facts), ...FURTHER];
 
 /** How a reader comes to the same figures. */
 export function recomputeBlocks({ study, inputs, origin, checksum, date }: MemoFacts): MemoBlock[] {

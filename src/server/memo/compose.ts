@@ -3,7 +3,7 @@ import { listInWords } from '#contract/format.ts';
 import { acceptabilityBlocks } from './acceptability.ts';
 import { agreementBlocks } from './agreement.ts';
 import { candidateBlocks } from './candidates.ts';
-import { attributionBlocks, cautionBlocks, ESTIMATES, recomputeBlocks } from './closing-sections.ts';
+import { attributionBlocks, cautionBlocks, estimates, recomputeBlocks } from './closing-sections.ts';
 import { criteriaBlocks } from './criteria.ts';
 import { enteredBlocks } from './entered.ts';
 import type { MemoFacts } from './facts.ts';
@@ -32,7 +32,7 @@ function sectionsOf(facts: MemoFacts): MemoSection[] {
   const printed = printedSites(facts);
   const detail = rankingDetail(facts);
   return numbered([
-    { id: 'recommendation', heading: null, blocks: [...rankingBlocks(facts), ESTIMATES] },
+    { id: 'recommendation', heading: null, blocks: [...rankingBlocks(facts), estimates(facts)] },
     ...changeSection(facts),
     { id: 'candidates', heading: 'Candidate sites', blocks: candidateBlocks(facts, printed) },
     { id: 'requirement', heading: 'Requirement and assumptions', blocks: requirementBlocks(facts) },
@@ -41,10 +41,14 @@ function sectionsOf(facts: MemoFacts): MemoSection[] {
     { id: 'agreement', heading: 'Agreement among members', blocks: agreementBlocks(facts) },
     { id: 'sensitivity', heading: 'Does the ranking hold?', blocks: holdBlocks(facts) },
     { id: 'acceptability', heading: 'Rank acceptability', blocks: acceptabilityBlocks(facts) },
-    { id: 'flight', heading: 'Flight: Δv and payload', blocks: [ESTIMATES, ...flightBlocks(facts, printed)] },
+    {
+      id: 'flight',
+      heading: 'Flight: Δv and payload',
+      blocks: [estimates(facts), ...flightBlocks(facts, printed)],
+    },
     { id: 'entered', heading: 'Entered figures, sources and evidence', blocks: enteredBlocks(facts) },
     { id: 'method', heading: 'Method and constants', blocks: methodBlocks() },
-    { id: 'cautions', heading: 'Cautions', blocks: cautionBlocks() },
+    { id: 'cautions', heading: 'Cautions', blocks: cautionBlocks(facts) },
     { id: 'recompute', heading: 'How to recompute it', blocks: recomputeBlocks(facts) },
     { id: 'attributions', heading: 'Data and type', blocks: attributionBlocks() },
   ]);

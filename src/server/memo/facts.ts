@@ -2,6 +2,7 @@ import type { SiteResult } from '#contract/evaluate.ts';
 import type { MemoPaper } from '#contract/memo.ts';
 import type { Ranking } from '#contract/ranking.ts';
 import type { MembersAgreement } from '#contract/agreement-model.ts';
+import type { FlownState } from '#contract/flown-results.ts';
 import type { Evidence } from '#contract/evidence.ts';
 import type { CriterionGroup } from '#contract/criterion.ts';
 import type { RankingFigures } from '#contract/ranking.ts';
@@ -29,6 +30,8 @@ export interface MemoFacts {
   inputs: StudyInputs;
   /** Flight of every listed site by its id, orbits in the order of the manifest. */
   results: ReadonlyMap<string, SiteResult>;
+  /** Flown ascents of every listed site by its id, a state an orbit; null where the losses are entered. */
+  flown: ReadonlyMap<string, readonly FlownState[]> | null;
   /** Decimals of every criterion's figures, by its place. */
   decimals: readonly number[];
   ranking: Ranking;

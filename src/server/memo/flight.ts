@@ -1,10 +1,12 @@
 import { closedSums, weightedDecimals } from '#core/printed/closing.ts';
 import type { FlownOrbit, OrbitResult } from '#contract/evaluate.ts';
+import { noAscentInWords, type FlownState } from '#contract/flown-results.ts';
 import { formatNumber } from '#contract/format.ts';
 import type { MemoBlock, MemoCell, MemoTable } from '#contract/memo.ts';
 import type { InputOrbit } from '#contract/study-inputs.ts';
 import { cell, figure, figures, markOf, row, runsOf, table, words } from './cells.ts';
 import type { MemoFacts } from './facts.ts';
+import { flownBlocks, stateAt } from './flown.ts';
 import { leftOut, type PrintedSite, type PrintedSites } from './printed-sites.ts';
 
 /** Orbits side by side in one table. */
@@ -20,20 +22,28 @@ const wayInWords = ({ way }: FlownOrbit): string => (way === 'plane-change' ? 'p
 const fallsShort = (shortfallMps: number): string =>
   `falls short by ${formatNumber(Math.ceil(shortfallMps))} m/s`;
 
-function payloadText(orbit: OrbitResult | undefined, decimals: number): string {
+function payloadText(orbit: OrbitResult | undefined, state: FlownState | null, decimals: number): string {
   if (!isFlown(orbit)) return 'out of reach';
+  const instead = state && noAscentInWords(state);
+  if (instead) return instead;
   if (orbit.shortfallMps !== null) return fallsShort(orbit.shortfallMps);
   return orbit.payloadKg === null ? '–' : figure(orbit.payloadKg, decimals);
 }
 
 /** The Δv budget of one orbit, every line of it, a row a site. */
 function budgetTable(
-  { inputs, printed }: { inputs: MemoFacts['inputs']; printed: PrintedSites },
+  { facts, printed }: { facts: MemoFacts; printed: PrintedSites },
   at: number,
   orbit: InputOrbit,
 ): MemoTable {
-  const results = printed.sites.map((one) => ({ one, result: one.result?.orbits[at] }));
-  const flown = results.flatMap(({ result }) => (isFlown(result) ? [result] : []));
+  const { inputs } = facts;
+  const results = printed.sites.map((one) => ({
+    one,
+    result: one.result?.orbits[at],
+    state: stateAt(facts, one, at),
+  }));
+  const isTold = ({ state }: (typeof results)[number]): boolean => state === null || state.kind === 'flown';
+  const flown = results.flatMap((one) => (isTold(one) && isFlown(one.result) ? [one.result] : []));
   const sums = flown.map(({ deltaVMps }) => ({
     parts: LINES.map((line) => deltaVMps[line]),
     total: deltaVMps.total,
@@ -41,7 +51,10 @@ function budgetTable(
   const closed = closedSums(sums, 0);
   const text = (value: number): string => figure(value, closed.decimals);
   let next = 0;
-  const rows = results.map(({ one, result }) => {
+  const rows = results.map(({ one, result, state }) => {
+    const instead = state && noAscentInWords(state);
+    if (isFlown(result) && instead)
+      return row([cell(one.site.name), { text: instead, span: 10 }], markOf(one));
     if (!isFlown(result))
       return row(
         [cell(one.site.name), { text: 'out of reach: no way turns less than 60°', span: 10 }],
@@ -55,7 +68,7 @@ function budgetTable(
         cell(formatNumber(result.launchAzimuthDeg, 1)),
         ...(sum?.parts ?? []).map((part) => cell(text(part))),
         cell(text(sum?.total ?? 0)),
-        cell(payloadText(result, 0)),
+        cell(payloadText(result, state, 0)),
       ],
       markOf(one),
     );
@@ -78,7 +91,7 @@ function budgetTable(
     rows,
     [
       ...(inputs.vehicle
-        ? [lossesNote(inputs.vehicle.lossesMps)]
+        ? [facts.flown ? FLOWN_NOTE : lossesNote(inputs.vehicle.lossesMps)]
         : ['No vehicle: losses and reserve count as 0.']),
       ...(closed.adjusted
         ? ['Lines are rounded so that each row adds up; none lies a step of its last digit from its figure.']
@@ -87,6 +100,9 @@ function budgetTable(
     ],
   );
 }
+
+const FLOWN_NOTE =
+  'Losses: flown, each site its own; a dogleg is flown within them. Their kinds stand under Flown ascents.';
 
 const lossesNote = ({
   gravity,
@@ -131,7 +147,7 @@ function payloadTables(facts: MemoFacts, { sites }: PrintedSites): MemoTable[] {
       ],
       sites.map((one) =>
         row(
-          [cell(one.site.name), ...payloadCells(one, run, decimals), ...(last ? [yearCell(one)] : [])],
+          [cell(one.site.name), ...payloadCells(facts, one, run, decimals), ...(last ? [yearCell(one)] : [])],
           markOf(one),
         ),
       ),
@@ -141,10 +157,12 @@ function payloadTables(facts: MemoFacts, { sites }: PrintedSites): MemoTable[] {
 }
 
 const payloadCells = (
-  { result }: PrintedSite,
+  facts: MemoFacts,
+  one: PrintedSite,
   run: readonly { at: number }[],
   decimals: number,
-): MemoCell[] => run.map(({ at }) => cell(payloadText(result?.orbits[at], decimals)));
+): MemoCell[] =>
+  run.map(({ at }) => cell(payloadText(one.result?.orbits[at], stateAt(facts, one, at), decimals)));
 
 const yearCell = ({ result }: PrintedSite): MemoCell =>
   cell(result?.payloadPerYearKg == null ? '–' : figure(result.payloadPerYearKg / 1000, 1), true);
@@ -189,8 +207,9 @@ export function flightBlocks(facts: MemoFacts, printed: PrintedSites): MemoBlock
       },
     ];
   return [
-    ...inputs.orbits.map((orbit, at) => budgetTable({ inputs, printed }, at, orbit)),
+    ...inputs.orbits.map((orbit, at) => budgetTable({ facts, printed }, at, orbit)),
     ...payloadTables(facts, printed),
     ...gainTables(facts, printed),
+    ...flownBlocks(facts, printed),
   ];
 }

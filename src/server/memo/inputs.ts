@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto';
 import canonicalize from 'canonicalize';
+import { ASCENT_METHOD } from '#contract/ascent-job.ts';
 import type { EvaluateInput } from '#contract/evaluate.ts';
 import type { RankingSnapshot } from '#server/ranking/read-snapshot.ts';
 import { weightsByName } from './inputs-weights.ts';
@@ -8,7 +9,7 @@ import { weightsByName } from './inputs-weights.ts';
  * Everything a memo's figures follow from, without the study's own ids and in an order of its own, so that the same
  * inputs are the same text wherever they were entered. `evaluate` may be posted to the interface as it is.
  */
-function inputsOf({ inputs, criteria, groups, entered, study }: RankingSnapshot) {
+function inputsOf({ inputs, flown, criteria, groups, entered, study }: RankingSnapshot) {
   const orbitCode = new Map(inputs.orbits.map(({ orbitId, code }) => [orbitId, code]));
   const nameOf = new Map(criteria.map(({ id, name }) => [id, name]));
   const groupName = new Map(groups.map(({ id, name }) => [id, name]));
@@ -28,6 +29,8 @@ function inputsOf({ inputs, criteria, groups, entered, study }: RankingSnapshot)
   };
   return {
     evaluate,
+    // Flown ascents follow from the same inputs by this version of their method.
+    ...(flown === null ? {} : { losses: { flown: ASCENT_METHOD } }),
     criteria: criteria.map(
       ({ name, unit, direction, source, quantity, orbitId, levels, shape, groupId, steps, limit }) => ({
         name,

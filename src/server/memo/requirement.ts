@@ -75,15 +75,16 @@ function stagesTable({ boosters, stages }: VehicleInput): MemoTable {
 }
 
 /** Everything else that the figures rest on, one assumption a row. */
-function assumptionsTable({ inputs }: MemoFacts): MemoTable {
+function assumptionsTable({ inputs, flown }: MemoFacts): MemoTable {
   const { vehicle, settings } = inputs;
+  const loss = flown === null ? 'entered with the vehicle' : 'entered; not used, losses are flown';
   const mps = (name: string, value: number, source: string) =>
     row([cell(name), cell(`${needed(value)} m/s`), cell(source)]);
   const rows = vehicle
     ? [
-        mps('Gravity loss', vehicle.lossesMps.gravity, 'entered with the vehicle'),
-        mps('Drag loss', vehicle.lossesMps.drag, 'entered with the vehicle'),
-        mps('Steering loss', vehicle.lossesMps.steering, 'entered with the vehicle'),
+        mps('Gravity loss', vehicle.lossesMps.gravity, loss),
+        mps('Drag loss', vehicle.lossesMps.drag, loss),
+        mps('Steering loss', vehicle.lossesMps.steering, loss),
         mps('Reserve', vehicle.reserveMps, 'entered with the vehicle'),
         row([
           cell('Fairing'),
