@@ -2,6 +2,7 @@ import { createDocument, type ZodOpenApiPathsObject } from 'zod-openapi';
 import { EvaluateInput, EvaluateOutput } from '../evaluate.ts';
 import { ascentOperations } from './ascents.ts';
 import { corridorOperations } from './corridors.ts';
+import { downrangeOperations } from './downrange.ts';
 import { describeOperation, type Operations, type Verb } from './operation.ts';
 import { peopleOperations } from './people.ts';
 import { siteOperations } from './sites.ts';
@@ -23,6 +24,7 @@ export const operations: Operations = {
   },
   ...ascentOperations,
   ...corridorOperations,
+  ...downrangeOperations,
   ...weighingOperations,
   ...studyOperations,
   ...studyAscentOperations,
