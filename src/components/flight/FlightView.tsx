@@ -1,27 +1,12 @@
 import { useCallback, useMemo, useState } from 'react';
-import {
-  Button,
-  ButtonLink,
-  Caution,
-  EmptyState,
-  Finding,
-  Notice,
-  Stale,
-  Tabs,
-} from '#components/ui/index.ts';
-import { useAddressParam } from '#components/live/address.ts';
-import { useApi, useFinding, useStep } from '#components/live/hooks.ts';
+import { Button, ButtonLink, EmptyState, Finding, Notice, Stale } from '#components/ui/index.ts';
+import { useApi } from '#components/live/hooks.ts';
 import { useStudyEvents, type LiveEvent } from '#components/live/study-events.ts';
-import { formatCount, formatNumber } from '#contract/format.ts';
-import type { SiteResult } from '#contract/evaluate.ts';
+import type { StudySettings } from '#contract/requirement.ts';
 import type { StudyInputs } from '#contract/study-inputs.ts';
 import { computeFlights } from './compute.ts';
-import { manifestFinding, orbitFinding, type FlightFinding } from './finding.ts';
-import { MANIFEST } from './heading.ts';
-import { ManifestTable } from './ManifestTable.tsx';
-import { OrbitSheet } from './OrbitSheet.tsx';
-import { byTotal, manifestRows, rowsOf } from './rows.ts';
-import { manifestFact, nameOf, orbitFact } from './words.ts';
+import { FlightSheets } from './FlightSheets.tsx';
+import type { FlownLocks } from './flown/LossesBar.tsx';
 
 interface FlightViewProps {
   studyId: string;
@@ -30,22 +15,8 @@ interface FlightViewProps {
   /** From the address: the orbit's and the site's code. */
   orbitCode: string | null;
   siteCode: string | null;
-}
-
-function Head({ finding, studyId }: { finding: FlightFinding; studyId: string }) {
-  useFinding(finding.heading);
-  return (
-    <Finding
-      why={
-        <p>
-          {finding.why} {finding.decides && <b>{finding.decides}</b>}
-        </p>
-      }
-      actions={<ButtonLink href={`/api/v1/studies/${studyId}/evaluation`}>All results as JSON</ButtonLink>}
-    >
-      {finding.heading}
-    </Finding>
-  );
+  settings: StudySettings;
+  locks: FlownLocks;
 }
 
 /** What is missing before anything can be flown. */
@@ -69,77 +40,9 @@ function Missing({ studyId, inputs }: { studyId: string; inputs: StudyInputs }) 
   );
 }
 
-interface SheetsProps {
-  studyId: string;
-  inputs: StudyInputs;
-  results: readonly SiteResult[];
-  orbitCode: string | null;
-  siteCode: string | null;
-}
-
-function Sheets({ studyId, inputs, results, orbitCode, siteCode }: SheetsProps) {
-  const first = inputs.orbits[0]?.code ?? MANIFEST;
-  const [orbit, setOrbit] = useAddressParam('orbit', orbitCode);
-  const [site, setSite] = useAddressParam('site', siteCode);
-  const known = orbit === MANIFEST || inputs.orbits.some(({ code }) => code === orbit);
-  const value = known && orbit !== null ? orbit : first;
-  const index = inputs.orbits.findIndex(({ code }) => code === value);
-  const rows = useMemo(() => byTotal(rowsOf(inputs, results, index)), [inputs, results, index]);
-  const year = useMemo(() => manifestRows(inputs, results), [inputs, results]);
-  const shown = value === MANIFEST ? year : rows;
-  // Without a choice in the address the first row is the chosen one: its azimuths and ways stand below.
-  const chosen = inputs.sites.find(({ code }) => code === site)?.code ?? shown[0]?.site.code ?? '';
-  useStep((step) => {
-    const here = shown.findIndex((row) => row.site.code === chosen);
-    const next = shown[(here + step + shown.length) % shown.length];
-    if (next) setSite(next.site.code);
-  });
-  const inclination = rows[0]?.result.inclinationDeg ?? 0;
-  const finding = value === MANIFEST ? manifestFinding(year, inputs.orbits) : orbitFinding(rows, inclination);
-  const tabs = [
-    ...inputs.orbits.map((one, i) => ({
-      value: one.code,
-      name: nameOf(one),
-      fact: orbitFact(one, results[0]?.orbits[i]?.inclinationDeg ?? 0),
-    })),
-    { value: MANIFEST, name: 'Whole manifest', fact: manifestFact(inputs.orbits) },
-  ];
-  return (
-    <>
-      <Head finding={finding} studyId={studyId} />
-      <Tabs label="Target orbit" tabs={tabs} value={value} onChange={setOrbit}>
-        {value === MANIFEST ? (
-          <ManifestTable
-            rows={year}
-            orbits={inputs.orbits}
-            hasVehicle={inputs.vehicle !== null}
-            chosenCode={chosen}
-            onChoose={setSite}
-          />
-        ) : (
-          <OrbitSheet
-            inputs={inputs}
-            results={results}
-            rows={rows}
-            orbitIndex={index}
-            chosenCode={chosen}
-            onChoose={setSite}
-          />
-        )}
-      </Tabs>
-      <div className="mt-10">
-        <Caution>
-          <b>Estimates for comparing sites, not flight data.</b> Closed-form Δv with entered losses; no ascent
-          has been flown. {formatCount(inputs.sites.length * inputs.orbits.length, 'result')} of revision{' '}
-          {formatNumber(inputs.revision)}.
-        </Caution>
-      </div>
-    </>
-  );
-}
-
 /** The Flight section: sites × orbits, worked out in the browser by the code that the server runs. */
-export function FlightView({ studyId, initial, orbitCode, siteCode }: FlightViewProps) {
+export function FlightView({ initial, ...props }: FlightViewProps) {
+  const { studyId } = props;
   const address = `/api/v1/studies/${studyId}/evaluation/inputs`;
   const { data, error, isLoading, mutate } = useApi<StudyInputs>(address, {
     ...(initial ? { fallbackData: initial, revalidateOnMount: false } : {}),
@@ -174,7 +77,7 @@ export function FlightView({ studyId, initial, orbitCode, siteCode }: FlightView
   return (
     <>
       {behind && <Stale revision={data.revision} />}
-      <Sheets studyId={studyId} inputs={data} results={results} orbitCode={orbitCode} siteCode={siteCode} />
+      <FlightSheets {...props} inputs={data} results={results} />
     </>
   );
 }

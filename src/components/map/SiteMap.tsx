@@ -72,19 +72,24 @@ function useMapView(props: SiteMapProps, scene: MapScene) {
   useEffect(() => view?.setProjection(props.projection), [view, props.projection]);
   useEffect(() => view?.setPlacing(props.placing), [view, props.placing]);
   useEffect(() => {
-    const chosen = latest.current.sites.find(({ id }) => id === props.chosenId);
-    if (chosen && chosenHere.current !== props.chosenId) view?.flyTo(chosen);
+    const { sites, flights } = latest.current;
+    const chosen = sites.find(({ id }) => id === props.chosenId);
+    // A flight is shown whole, below.
+    if (chosen && !flights && chosenHere.current !== props.chosenId) view?.flyTo(chosen);
     chosenHere.current = null;
   }, [view, props.chosenId]);
+  useEffect(() => {
+    if (props.flights) view?.fitAll(false);
+  }, [view, props.flights]);
   return { holder, canvas, view, fault };
 }
 
 function DrawnMap(props: SiteMapProps) {
-  const { sites, chosenId, tracks, flownAzimuthDeg, layers, onSectors } = props;
+  const { sites, chosenId, tracks, flownAzimuthDeg, layers, flights, moment, onSectors } = props;
   const [draft, setDraft] = useState<readonly SectorDeg[] | null>(null);
   const scene = useMemo(
-    () => ({ sites, chosenId, tracks, flownAzimuthDeg, layers, draft }),
-    [sites, chosenId, tracks, flownAzimuthDeg, layers, draft],
+    () => ({ sites, chosenId, tracks, flownAzimuthDeg, layers, flights, moment, draft }),
+    [sites, chosenId, tracks, flownAzimuthDeg, layers, flights, moment, draft],
   );
   const { holder, canvas, view, fault } = useMapView(props, scene);
   const chosen = sites.find(({ id }) => id === chosenId);

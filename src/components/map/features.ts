@@ -1,6 +1,13 @@
 import type { Feature, FeatureCollection, LineString, Point, Position } from 'geojson';
 import { formatNumber } from '#contract/format.ts';
-import { TILE_LATITUDE_DEG, type LngLat, type MapSite, type MapTrack } from './types.ts';
+import {
+  TILE_LATITUDE_DEG,
+  type LngLat,
+  type MapFlight,
+  type MapMoment,
+  type MapSite,
+  type MapTrack,
+} from './types.ts';
 
 export const onTiles = ({ latitudeDeg }: MapSite): boolean => Math.abs(latitudeDeg) <= TILE_LATITUDE_DEG;
 
@@ -40,6 +47,43 @@ export function trackFeatures(tracks: readonly MapTrack[], chosenId: string | nu
           properties: { name, chosen: siteId === chosenId },
           geometry: { type: 'LineString', coordinates: coordinates as Position[] },
         })),
+    ),
+  );
+}
+
+/** Flown ascents: the line over the ground, and the trace of impact points. */
+export function flightFeatures(flights: readonly MapFlight[], chosenId: string | null): FeatureCollection {
+  return collect(
+    flights.flatMap(({ siteId, name, ground, impacts }) =>
+      (
+        [
+          ['ground', ground],
+          ['impacts', impacts],
+        ] as const
+      ).flatMap(([kind, line]) =>
+        runs(line, ([, latitude]) => Math.abs(latitude) <= TILE_LATITUDE_DEG).map(
+          (coordinates): Feature<LineString> => ({
+            type: 'Feature',
+            properties: { name, kind, chosen: siteId === chosenId },
+            geometry: { type: 'LineString', coordinates: coordinates as Position[] },
+          }),
+        ),
+      ),
+    ),
+  );
+}
+
+/** Where the vehicle is at a moment, and where it would come down. */
+export function momentFeatures(moment: MapMoment | undefined): FeatureCollection {
+  const places = [
+    ['impact', moment?.impact],
+    ['vehicle', moment?.vehicle],
+  ] as const;
+  return collect(
+    places.flatMap(([kind, coordinates]): Feature<Point>[] =>
+      coordinates
+        ? [{ type: 'Feature', properties: { kind }, geometry: { type: 'Point', coordinates } }]
+        : [],
     ),
   );
 }

@@ -1,13 +1,20 @@
 import { Map, type GeoJSONSource, type LngLatLike, type MapMouseEvent } from 'maplibre-gl';
 import { boundsOf } from './bounds.ts';
-import { onTiles, padFeatures, tickFeatures, trackFeatures } from './features.ts';
+import {
+  flightFeatures,
+  momentFeatures,
+  onTiles,
+  padFeatures,
+  tickFeatures,
+  trackFeatures,
+} from './features.ts';
 import { imageScale, imagesOf } from './images.ts';
 import { prepareLibrary } from './library.ts';
 import { drawOverlay, innerOf, padsInView } from './overlay.ts';
 import { padFrame, type PadFrame } from './pad-frame.ts';
 import { onThemeChange, readPalette } from './palette.ts';
 import { layersOf, styleOf } from './style.ts';
-import type { LngLat, MapScene, MapSite, Projection } from './types.ts';
+import type { LngLat, MapFlight, MapScene, MapSite, Projection } from './types.ts';
 
 interface Hooks {
   readonly onChoose: (siteId: string) => void;
@@ -143,7 +150,7 @@ export class MapView {
   }
 
   fitAll(animate = true): void {
-    const box = boundsOf(this.#scene.sites);
+    const box = boundsOf([...this.#scene.sites, ...placesOf(this.#scene.flights ?? [])]);
     if (!box) return;
     const corners: [LngLatLike, LngLatLike] = [
       [box.west, Math.max(-80, box.south)],
@@ -178,6 +185,7 @@ export class MapView {
     const { sites, chosenId, tracks, layers } = this.#scene;
     const chosen = sites.filter(({ id }) => id === chosenId);
     const chosenMoved = before?.chosenId !== chosenId;
+    this.#feedFlights(before, chosenMoved);
     if (before?.sites !== sites) void this.#source('pads')?.setData(padFeatures(sites));
     if (before?.sites !== sites || chosenMoved) {
       void this.#source('chosen')?.setData(padFeatures(chosen));
@@ -187,6 +195,13 @@ export class MapView {
     const shown = tracks.filter(({ siteId }) => (siteId === chosenId ? layers.track : layers.otherTracks));
     void this.#source('tracks')?.setData(trackFeatures(shown, chosenId));
     void this.#source('ticks')?.setData(tickFeatures(shown, chosenId));
+  }
+
+  #feedFlights(before: MapScene | undefined, chosenMoved: boolean): void {
+    const { flights, moment, chosenId } = this.#scene;
+    if (before?.flights !== flights || chosenMoved)
+      void this.#source('flights')?.setData(flightFeatures(flights ?? [], chosenId));
+    if (before?.moment !== moment) void this.#source('moment')?.setData(momentFeatures(moment));
   }
 
   #repaint(): void {
@@ -230,6 +245,15 @@ export class MapView {
     if (!this.#placing) this.map.getCanvas().style.cursor = this.#padAt(event.point) ? 'pointer' : '';
   }
 }
+
+/** Places of flights, each longitude brought within half a turn of zero. */
+const placesOf = (flights: readonly MapFlight[]) =>
+  flights.flatMap(({ ground, impacts }) =>
+    [...ground, ...impacts].map(([longitude, latitudeDeg]) => ({
+      longitudeDeg: longitude - 360 * Math.round(longitude / 360),
+      latitudeDeg,
+    })),
+  );
 
 /** --time-move in ms: nothing when motion is reduced. */
 function moveTime(): number {

@@ -164,6 +164,41 @@ function tracks(p: Palette): LayerSpecification[] {
   ];
 }
 
+function flights(p: Palette): LayerSpecification[] {
+  const colour: ExpressionSpecification = ['case', ['get', 'chosen'], p.chosen, p.ink];
+  const width: ExpressionSpecification = ['case', ['get', 'chosen'], 2.2, 1.2];
+  const round = { 'line-join': 'round', 'line-sort-key': ['to-number', ['get', 'chosen']] } as const;
+  return [
+    {
+      id: 'flight-impacts',
+      type: 'line',
+      source: 'flights',
+      filter: ['==', ['get', 'kind'], 'impacts'],
+      layout: structuredClone(round) as object,
+      paint: { 'line-color': colour, 'line-width': width, 'line-dasharray': [3, 1] },
+    },
+    {
+      id: 'flight',
+      type: 'line',
+      source: 'flights',
+      filter: ['==', ['get', 'kind'], 'ground'],
+      layout: structuredClone(round) as object,
+      paint: { 'line-color': colour, 'line-width': width },
+    },
+    {
+      id: 'moment',
+      type: 'circle',
+      source: 'moment',
+      paint: {
+        'circle-radius': 5,
+        'circle-color': ['match', ['get', 'kind'], 'vehicle', p.chosen, p.sea],
+        'circle-stroke-color': ['match', ['get', 'kind'], 'vehicle', p.sea, p.chosen],
+        'circle-stroke-width': ['match', ['get', 'kind'], 'vehicle', 1, 2],
+      },
+    },
+  ];
+}
+
 function pads(p: Palette): LayerSpecification[] {
   const label: NonNullable<SymbolLayerSpecification['layout']> = {
     'text-field': ['get', 'name'],
@@ -211,6 +246,7 @@ export const layersOf = (palette: Palette): LayerSpecification[] => [
   ...ground(palette),
   ...names(palette),
   ...tracks(palette),
+  ...flights(palette),
   ...pads(palette),
 ];
 
@@ -228,6 +264,8 @@ export function styleOf(palette: Palette, projection: Projection): StyleSpecific
       chosen: empty,
       tracks: empty,
       ticks: empty,
+      flights: empty,
+      moment: empty,
     },
     layers: layersOf(palette),
   };

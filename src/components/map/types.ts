@@ -31,6 +31,22 @@ export interface MapTrack {
   readonly ticks: readonly MapTick[];
 }
 
+/** A flown ascent; longitudes may run on past 180°, so that no line jumps. */
+export interface MapFlight {
+  readonly siteId: string;
+  /** Along the line over the ground. */
+  readonly name: string;
+  readonly ground: readonly LngLat[];
+  /** Trace of where it would come down, moment by moment. */
+  readonly impacts: readonly LngLat[];
+}
+
+/** One moment of the chosen flight. */
+export interface MapMoment {
+  readonly vehicle: LngLat | null;
+  readonly impact: LngLat | null;
+}
+
 export interface MapLayers {
   readonly sectors: boolean;
   readonly track: boolean;
@@ -47,6 +63,8 @@ export interface MapScene {
   /** The launch azimuth flown from the chosen pad, degrees clockwise from north; null where there is none. */
   readonly flownAzimuthDeg: number | null;
   readonly layers: MapLayers;
+  readonly flights?: readonly MapFlight[] | undefined;
+  readonly moment?: MapMoment | undefined;
   /** The chosen pad's sectors while a handle is moved; they are not saved yet. */
   readonly draft: readonly SectorDeg[] | null;
 }

@@ -1,7 +1,6 @@
-import { TrajectoryPoint } from '#contract/ascent.ts';
+import type { TrajectoryPoint } from '#contract/ascent.ts';
 import type { AscentPair, StudyAscentDetail } from '#contract/study-ascents.ts';
 import type { InputOrbit, InputSite } from '#contract/study-inputs.ts';
-import { z } from '#contract/zod.ts';
 import type { PooledDb } from '#db/client.ts';
 import { loadStudyInputs } from '#server/evaluate/study-inputs.ts';
 import { notFound } from '#server/errors.ts';
@@ -24,7 +23,7 @@ export async function flownTrajectory(
   const inputs = await loadStudyInputs(db, studyId);
   const site = inputs.sites.find((one) => one.siteId === siteId);
   const orbit = inputs.orbits.find((one) => one.orbitId === orbitId);
-  const points = z.array(TrajectoryPoint).parse(ascent.trajectory);
+  const points = ascent.trajectory;
   if (!site || !orbit || points.length === 0)
     throw notFound('This ascent was flown without reaching its orbit: there is no trajectory.');
   return { site, orbit, ascent, points };
