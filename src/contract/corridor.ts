@@ -105,7 +105,11 @@ const Expectation = z
   })
   .meta({ description: 'Indicative, by the formula of 14 CFR part 420 appendix C with the inputs shown' });
 
-const Zone = z.strictObject({ kind: z.literal('exclusion-zone'), ...area });
+const Zone = z.strictObject({
+  kind: z.literal('exclusion-zone'),
+  areaKm2: z.number().meta({ description: 'Of the published shape' }),
+  ...area,
+});
 const Corridor = z.strictObject({
   kind: z.literal('corridor'),
   azimuthDeg: z.number(),

@@ -37,6 +37,8 @@ describe('a corridor over the interface', () => {
     const { features } = ask(input);
     expect(features.map(({ properties }) => properties.kind)).toEqual(['exclusion-zone', 'corridor']);
     expect(features.map((one) => ringsOf(one).length)).toEqual(pieces);
+    // π D² + 2 D D_OEZ of the small class, published.
+    expect(features[0].properties.areaKm2).toBeWithin(42.738, 1e-3);
     for (const ring of features.flatMap(ringsOf)) {
       expect(ring.at(-1)).toEqual(ring[0]);
       expect(ring.length).toBeGreaterThanOrEqual(4);

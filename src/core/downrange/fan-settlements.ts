@@ -10,6 +10,8 @@ import { MEAN_RADIUS, ROUGH_ERROR, directionOf, dot } from './strip.ts';
 export interface FanCounts {
   readonly people: Float64Array;
   readonly settlements: Float64Array;
+  /** Settlements without a figure of people. */
+  readonly withoutFigure: Float64Array;
   readonly excludedPeople: Float64Array;
   readonly excludedSettlements: Float64Array;
 }
@@ -92,15 +94,18 @@ function withinReach({ shape, start }: Corridor, settlements: Settlements): numb
 class Tally {
   readonly people: Runs;
   readonly settlements: Runs;
+  readonly withoutFigure: Runs;
 
   constructor(count: number) {
     this.people = new Runs(count);
     this.settlements = new Runs(count);
+    this.withoutFigure = new Runs(count);
   }
 
   add(from: number, to: number, people: number): void {
     this.people.add(from, to, people);
     this.settlements.add(from, to, 1);
+    if (people === 0) this.withoutFigure.add(from, to, 1);
   }
 }
 
@@ -142,6 +147,7 @@ export function countFan(corridors: readonly Corridor[], settlements: Settlement
   return {
     people: inside.people.sums(),
     settlements: inside.settlements.sums(),
+    withoutFigure: inside.withoutFigure.sums(),
     excludedPeople: excluded.people.sums(),
     excludedSettlements: excluded.settlements.sums(),
   };

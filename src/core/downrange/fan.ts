@@ -20,6 +20,8 @@ export interface Spoke {
   /** In the corridor's settlements, by the gazetteer. */
   readonly people: number;
   readonly settlements: number;
+  /** Of these, without a figure of people: unknown, not none. */
+  readonly withoutFigure: number;
   /** Null where spreading is switched off. */
   readonly spread: SpreadCount | null;
   /** In the settlements of the overflight exclusion zone. */
@@ -51,6 +53,7 @@ export function azimuthFan(
     first: firstLand(world.map, strip.path, shape.range, shape.circleRadius),
     people: counts.people[azimuthDeg] as number,
     settlements: counts.settlements[azimuthDeg] as number,
+    withoutFigure: counts.withoutFigure[azimuthDeg] as number,
     spread: spread?.[azimuthDeg] ?? null,
     excludedPeople: counts.excludedPeople[azimuthDeg] as number,
     excludedSettlements: counts.excludedSettlements[azimuthDeg] as number,

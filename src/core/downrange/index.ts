@@ -5,6 +5,7 @@
  * - `worldOf(decodeLand(bytes), decodeSettlements(bytes)): World`: prepared once.
  * - `corridorOf(start, azimuthDeg, vehicleClass, range): Corridor`, `surveyCorridor(world, corridor, settings)`:
  *   land, people and casualty expectation of one corridor and its overflight exclusion zone.
+ * - `drawCorridor(corridor): Drawing`: its rings and lines for a map.
  * - `azimuthFan(world, start, vehicleClass, range, placeDensity): Spoke[]`, then `openSectors(fan, limits)` and
  *   `inclinationsOpened(pad, sectors, injectionSpeed)`.
  * - `surroundingsOf(world, place, placeDensity)`: people near a site, nearest settlements and coast.
@@ -23,6 +24,8 @@ export { corridorOf } from './corridor.ts';
 export type { Corridor, Position } from './corridor.ts';
 export { decodeLand } from './data/land-data.ts';
 export { decodeSettlements } from './data/settlement-data.ts';
+export { drawCorridor } from './drawing.ts';
+export type { Drawing } from './drawing.ts';
 export { AZIMUTHS, azimuthFan } from './fan.ts';
 export type { Spoke } from './fan.ts';
 export { between } from './geodesic.ts';

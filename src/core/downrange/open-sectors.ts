@@ -20,7 +20,13 @@ export interface FanLimits {
 export interface OpenSector {
   readonly fromDeg: number;
   readonly toDeg: number;
+  /** False where somewhere in it people are unknown, so that a limit on people is kept only as far as is known. */
+  readonly complete: boolean;
 }
+
+/** Whether everyone in an azimuth's corridor is known of, by the data. */
+const isComplete = ({ withoutFigure, spread }: Spoke): boolean =>
+  withoutFigure === 0 && (spread === null || spread.unknownLand === 0);
 
 /** Whether one azimuth keeps within the limits. A line that never leaves land has no clear distance. */
 export function keepsWithin(spoke: Spoke, { clearDistance, people, exclusionEmpty }: FanLimits): boolean {
@@ -38,18 +44,21 @@ export function keepsWithin(spoke: Spoke, { clearDistance, people, exclusionEmpt
  */
 export function openSectors(fan: readonly Spoke[], limits: FanLimits): OpenSector[] {
   const open = fan.map((spoke) => keepsWithin(spoke, limits));
-  if (open.length > 0 && open.every(Boolean)) return [{ fromDeg: 0, toDeg: 360 }];
+  if (open.length > 0 && open.every(Boolean))
+    return [{ fromDeg: 0, toDeg: 360, complete: fan.every(isComplete) }];
   const count = open.length;
   const starts = open.flatMap((is, at) => (is && !open[(at + count - 1) % count] ? [at] : []));
   return starts.flatMap((fromDeg) => {
     let length = 0;
     while (open[(fromDeg + length + 1) % count]) length += 1;
-    return length === 0 ? [] : [{ fromDeg, toDeg: (fromDeg + length) % count }];
+    if (length === 0) return [];
+    const held = Array.from({ length: length + 1 }, (_, step) => fan[(fromDeg + step) % count] as Spoke);
+    return [{ fromDeg, toDeg: (fromDeg + length) % count, complete: held.every(isComplete) }];
   });
 }
 
 /** Degrees of azimuth that sectors hold together. */
-export const openWidth = (sectors: readonly OpenSector[]): number =>
+export const openWidth = (sectors: readonly Pick<OpenSector, 'fromDeg' | 'toDeg'>[]): number =>
   sectors.reduce(
     (sum, { fromDeg, toDeg }) => sum + (toDeg > fromDeg ? toDeg - fromDeg : toDeg - fromDeg + 360),
     0,
@@ -77,7 +86,7 @@ function inclinationsOf(pad: Pad, sector: Sectors, injectionSpeed: MetresPerSeco
  */
 export function inclinationsOpened(
   pad: Pad,
-  sectors: readonly OpenSector[],
+  sectors: readonly Pick<OpenSector, 'fromDeg' | 'toDeg'>[],
   injectionSpeed: MetresPerSecond,
 ): OpenInclinations[] {
   const spans = sectors

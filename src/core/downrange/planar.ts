@@ -1,4 +1,5 @@
 import { geoEquirectangular, geoStream } from 'd3-geo';
+import type { LineString, Polygon } from 'geojson';
 import type { Position } from './corridor.ts';
 
 /** Plane degrees: what GeoJSON means by a straight line between two positions (RFC 7946, section 3.1.1). */
@@ -19,22 +20,25 @@ function turning(ring: readonly Position[]): number {
   }, 0);
 }
 
-/** The rings of a polygon cut at the date line by the sphere's own clipping. */
-function cutRing(ring: readonly Position[]): Position[][] {
-  const rings: Position[][] = [];
+/** The pieces of a shape cut at the date line by the sphere's own clipping. */
+function cut(shape: Polygon | LineString): Position[][] {
+  const pieces: Position[][] = [];
   const sink = {
-    point: (x: number, y: number) => rings.at(-1)?.push([x, y]),
-    lineStart: () => rings.push([]),
+    point: (x: number, y: number) => pieces.at(-1)?.push([x, y]),
+    lineStart: () => pieces.push([]),
     lineEnd: () => undefined,
     polygonStart: () => undefined,
     polygonEnd: () => undefined,
     sphere: () => undefined,
   };
+  geoStream(shape, plate.stream(sink));
+  return pieces;
+}
+
+function cutRing(ring: readonly Position[]): Position[][] {
   // The library takes what lies to the right of a ring for its inside.
   const clockwise = [...ring].reverse();
-  const closed = [...clockwise, clockwise[0] as Position];
-  geoStream({ type: 'Polygon', coordinates: [closed] }, plate.stream(sink));
-  return rings;
+  return cut({ type: 'Polygon', coordinates: [[...clockwise, clockwise[0] as Position]] });
 }
 
 /**
@@ -46,3 +50,7 @@ export function planarRings(ring: readonly Position[]): Position[][] {
   const rings = crossesDateLine(ring) ? cutRing(ring) : [[...ring]];
   return rings.map((one) => (turning(one) < 0 ? [...one].reverse() : one));
 }
+
+/** A line on the Earth as lines in the plane of degrees, cut at the date line. */
+export const planarLines = (line: readonly Position[]): Position[][] =>
+  cut({ type: 'LineString', coordinates: [...line] });

@@ -17,11 +17,12 @@ import {
   type Position,
   type World,
 } from '#core/downrange/index.ts';
+import { exclusionArea } from '#core/downrange/shape.ts';
 import { metres } from '#core/units.ts';
 
 type Zone = CorridorOutput['features'][0];
 type Expectation = CorridorOutput['features'][1]['properties']['casualtyExpectation'];
-type AreaProperties = Omit<Zone['properties'], 'kind' | 'firstLandKm'>;
+type AreaProperties = Omit<Zone['properties'], 'kind' | 'areaKm2' | 'firstLandKm'>;
 
 const SQUARE_MILE = 1609.344 ** 2;
 const km = (length: number): number => length / 1000;
@@ -126,6 +127,7 @@ export function corridorCollection(world: World, input: CorridorInput): Corridor
     geometry: geometryOf(survey.exclusion.rings),
     properties: {
       kind: 'exclusion-zone',
+      areaKm2: km2(exclusionArea(corridor.shape)),
       ...areaProperties(world, survey.exclusion),
       firstLandKm: land && land.distance <= exclusionLength + circleRadius ? km(land.distance) : null,
     },

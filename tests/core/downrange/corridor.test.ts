@@ -1,7 +1,13 @@
 import fc from 'fast-check';
 import geographicLib from 'geographiclib-geodesic';
 import { describe, expect, test } from 'vitest';
-import { NAUTICAL_MILE as NM, corridorOf, type Place, VEHICLE_CLASSES } from '#core/downrange/index.ts';
+import {
+  NAUTICAL_MILE as NM,
+  corridorOf,
+  drawCorridor,
+  type Place,
+  VEHICLE_CLASSES,
+} from '#core/downrange/index.ts';
 import { containsPlace, isExcluded, placed } from '#core/downrange/corridor.ts';
 import { destination } from '#core/downrange/geodesic.ts';
 import { circleOutline, corridorOutline, exclusionOutline } from '#core/downrange/outline.ts';
@@ -193,5 +199,35 @@ describe('planarRings', () => {
     }
     const cut = rings.reduce((sum, one) => sum + areaOf(one), 0);
     expect(cut).toBeWithin(areaOf(ring), { kind: 'rel', value: 1e-4 });
+  });
+});
+
+describe('drawCorridor', () => {
+  test('draws the published widths square to the flight line, across the date line too', () => {
+    const start = { latitudeDeg: -30, longitudeDeg: 179.7 };
+    const drawing = drawCorridor(corridorOf(start, 70, 'medium', RANGE));
+    expect(drawing.widths.map(({ rangeNm }) => rangeNm)).toEqual([10, 100, 5000]);
+    expect(drawing.flightLine).toHaveLength(2);
+    drawing.widths.forEach(({ rangeNm, lines }, at) => {
+      // The piece's ends lie the published width apart: half of it to each side of the geodesic.
+      const ends = [lines[0]?.[0], lines.at(-1)?.at(-1)] as [[number, number], [number, number]];
+      const centre = regulationPlace(-30, 179.7, 70, rangeNm);
+      for (const [longitude, latitude] of ends)
+        expect(apart(centre, [latitude, longitude])).toBeWithin(
+          CLASS_DIMENSIONS.medium.halfWidths[at] as number,
+          1,
+        );
+    });
+    for (const line of [...drawing.flightLine, ...drawing.widths.flatMap(({ lines }) => lines)])
+      line.forEach(([longitude], at) => {
+        const [before] = line[Math.max(0, at - 1)] as [number, number];
+        expect(Math.abs(longitude - before)).toBeLessThan(180);
+      });
+    const short = drawCorridor(corridorOf(start, 70, 'medium', metres(500 * NM)));
+    expect(short.widths.map(({ rangeNm }) => rangeNm)).toEqual([10, 100]);
+    expect(areaOf(short.circle[0] ?? []) + areaOf(short.circle[1] ?? [])).toBeWithin(
+      Math.PI * CLASS_DIMENSIONS.medium.circleRadius ** 2,
+      { kind: 'rel', value: 1e-3 },
+    );
   });
 });

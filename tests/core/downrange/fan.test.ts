@@ -44,6 +44,7 @@ describe('a fan over the shipped world', () => {
         expect(fan[azimuthDeg]).toMatchObject({
           people: world.settlements.sum(inside).people,
           settlements: inside.length,
+          withoutFigure: world.settlements.sum(inside).withoutFigure,
           excludedPeople: world.settlements.sum(excluded).people,
           excludedSettlements: excluded.length,
         });
@@ -138,6 +139,7 @@ describe('openSectors', () => {
     first: { coast: 0, land: null },
     people: 0,
     settlements: 0,
+    withoutFigure: 0,
     spread: null,
     excludedPeople: 0,
     excludedSettlements: 0,
@@ -149,7 +151,7 @@ describe('openSectors', () => {
 
   test('run from the first whole degree to the last, through north too', () => {
     const fan = fanOf((at) => ({ people: at >= 95 && at < 342 ? 101 : 100 }));
-    expect(openSectors(fan, limits)).toEqual([{ fromDeg: 342, toDeg: 94 }]);
+    expect(openSectors(fan, limits)).toEqual([{ fromDeg: 342, toDeg: 94, complete: true }]);
     expect(openWidth(openSectors(fan, limits))).toBe(112);
   });
 
@@ -159,7 +161,7 @@ describe('openSectors', () => {
         fanOf(() => ({})),
         limits,
       ),
-    ).toEqual([{ fromDeg: 0, toDeg: 360 }]);
+    ).toEqual([{ fromDeg: 0, toDeg: 360, complete: true }]);
     expect(openWidth([{ fromDeg: 0, toDeg: 360 }])).toBe(360);
     expect(
       openSectors(
@@ -185,14 +187,25 @@ describe('openSectors', () => {
       return { people: 60, spread: { people: 50, unknownLand: 0 } };
     });
     expect(openSectors(fan, { clearDistance: 500e3, people: null, exclusionEmpty: true })).toEqual([
-      { fromDeg: 270, toDeg: 359 },
+      { fromDeg: 270, toDeg: 359, complete: true },
     ]);
     expect(openSectors(fan, { clearDistance: 300e3, people: 100, exclusionEmpty: true })).toEqual([
-      { fromDeg: 0, toDeg: 89 },
+      { fromDeg: 0, toDeg: 89, complete: true },
     ]);
     expect(openSectors(fan, { clearDistance: null, people: null, exclusionEmpty: false })).toEqual([
-      { fromDeg: 0, toDeg: 360 },
+      { fromDeg: 0, toDeg: 360, complete: true },
     ]);
+  });
+
+  test('say where people are unknown', () => {
+    const fan = fanOf((at) => {
+      if (at === 40) return { withoutFigure: 1, settlements: 1 };
+      if (at === 140) return { spread: { people: 1, unknownLand: 5e6 } };
+      return { people: at === 90 || at >= 180 ? 101 : 0 };
+    });
+    expect(openSectors(fan, limits).map(({ complete }) => complete)).toEqual([false, false]);
+    const known = fanOf((at) => ({ people: at >= 180 ? 101 : 0, spread: { people: 1, unknownLand: 0 } }));
+    expect(openSectors(known, limits)).toEqual([{ fromDeg: 0, toDeg: 179, complete: true }]);
   });
 });
 
