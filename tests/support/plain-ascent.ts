@@ -177,16 +177,18 @@ function flown(
   const flow = phase.fixedFlow + phase.mainFlow;
   const limit = (phase.fixedThrust + phase.mainThrust) / phase.accelerationLimit;
   const full = (state.mass - Math.max(endMass, limit)) / flow;
-  const free = across(state, full, longest, (now) => ratesOf(now, phase, stack, aim, false));
+  const step = Math.min(longest, (0.12 * Math.max(endMass, limit)) / flow);
+  const free = across(state, full, step, (now) => ratesOf(now, phase, stack, aim, false));
   if (limit <= endMass) return free;
   const exhaust = phase.mainThrust / phase.mainFlow;
   const held = (exhaust / phase.accelerationLimit) * Math.log(limit / endMass);
-  return across(free, held, longest, (now) => ratesOf(now, phase, stack, aim, true));
+  const shorter = Math.min(longest, (0.12 * free.mass * Math.exp((-flow * held) / free.mass)) / flow);
+  return across(free, held, shorter, (now) => ratesOf(now, phase, stack, aim, true));
 }
 
 /**
- * An ascent from lift-off to its end mass, in the steps that core makes: 2 s in rise and kick, 4 s in the gravity turn,
- * 16 s above the air. The limit of dynamic pressure is not looked at.
+ * An ascent from lift-off to its end mass, in the steps that core makes: 2 s in rise and kick, 1 s early in the gravity turn, then
+ * 4 s, 16 s above the air. The limit of dynamic pressure is not looked at.
  */
 export function plainAscent(stack: Stack, steering: PlainSteering): PlainState {
   const normal = A / Math.sqrt(1 - E2 * Math.sin(steering.latitude) ** 2);
@@ -211,11 +213,16 @@ export function plainAscent(stack: Stack, steering: PlainSteering): PlainState {
       upper ??= tangent(state, steering);
       state = flown(state, phase, stack, endMass, 16, upper);
     } else {
-      for (const boundary of [stack.verticalRise, stack.verticalRise + stack.kick]) {
+      const kicked = stack.verticalRise + stack.kick;
+      for (const [boundary, step] of [
+        [stack.verticalRise, 2],
+        [kicked, 2],
+        [kicked + 40, 1],
+      ] as const) {
         const aim = aims(state.time);
         const seconds = boundary - state.time;
         if (seconds > 1e-8) {
-          state = across(state, seconds, 2, (now) => ratesOf(now, phase, stack, aim, false));
+          state = across(state, seconds, step, (now) => ratesOf(now, phase, stack, aim, false));
         }
       }
       state = flown(state, phase, stack, endMass, 4, aims(state.time));

@@ -82,7 +82,7 @@ describe('the Runge–Kutta step', () => {
   test('is of order four: half the step, a sixteenth of the error', () => {
     const ends = [32, 16, 8, 4, 1].map((longest) => {
       const course = coasting(EARTH);
-      course.steps = { rise: longest, air: longest, space: longest, most: 10_000 };
+      course.steps = { rise: longest, turn: longest, air: longest, space: longest, most: 10_000 };
       course.coast(640);
       return course.flyer.state.slice(0, 3);
     });
@@ -108,7 +108,7 @@ describe('linear-tangent steering', () => {
     };
     const phase = { ...emptyPhase, mainThrust: alpha * 1000, duration: seconds };
     const course = new Course(new Flyer(flat, vacuum, [[0, 0]]), plainStack([phase], 1000, 0));
-    course.steps = { rise: 0.5, air: 0.5, space: 0.5, most: 10_000 };
+    course.steps = { rise: 0.5, turn: 0.5, air: 0.5, space: 0.5, most: 10_000 };
     course.start(Float64Array.of(radius, 0, 0), 0);
     // Just enough of a flight eastward to tell the plane.
     const { state } = course.flyer;

@@ -11,7 +11,7 @@ import { reference } from '#tests/support/reference.ts';
 const AXES = ['x', 'y', 'z', 'vx', 'vy', 'vz', 'mass'];
 
 describe('the four-phase ascent, flown open-loop from its steering table', () => {
-  const course = benchmarkCourse({ rise: 0.5, air: 0.5, space: 2, most: 10_000 });
+  const course = benchmarkCourse({ rise: 0.5, turn: 0.5, air: 0.5, space: 2, most: 10_000 });
   const { flyer } = course;
   const figures = new Map<string, number>([['0 lift-off mass', flyer.state[MASS]!]]);
   let pressure = 0;
@@ -64,7 +64,7 @@ test.each(sounding.filter(({ id }) => id !== 'C157'))(
     const flow = 20;
     const burn: Phase = { ...emptyPhase, mainThrust: flow * 9.80665 * 250, mainFlow: flow, endMass: 400 };
     const course = onPad(flyer, burn, 1000);
-    course.steps = { rise: 0.05, air: 0.05, space: 0.05, most: 10_000 };
+    course.steps = { rise: 0.05, turn: 0.05, air: 0.05, space: 0.05, most: 10_000 };
     flyer.steering.mode = VERTICAL;
     const stack = { ...course.stack, verticalRise: 1000 };
     const up = new Course(flyer, stack);
@@ -103,7 +103,7 @@ test.each(sounding.filter(({ id }) => id === 'C157'))(
       endMass: 600,
     };
     const course = new Course(flyer, { ...plainStack([burn], 1000, 1), verticalRise: 1000 });
-    course.steps = { rise: 0.05, air: 0.05, space: 0.05, most: 10_000 };
+    course.steps = { rise: 0.05, turn: 0.05, air: 0.05, space: 0.05, most: 10_000 };
     flyer.steering.up.set([1, 0, 0]);
     course.start(Float64Array.of(radius, 0, 0), 0);
     course.fly(burn, 600);
@@ -128,7 +128,7 @@ function gravityTurn(massRatio: number): Record<string, number> {
   // [derived] 130 m are reached after 8.020041502 s.
   const rise = 8.020041502;
   const course = new Course(flyer, { ...plainStack([burn], mass, 0.5), verticalRise: rise });
-  course.steps = { rise: 0.05, air: 0.1, space: 0.25, most: 10_000 };
+  course.steps = { rise: 0.05, turn: 0.05, air: 0.1, space: 0.25, most: 10_000 };
   flyer.accounting = true;
   flyer.steering.up.set([1, 0, 0]);
   course.start(Float64Array.of(radius, 0, 0), 0);
