@@ -1,4 +1,4 @@
-import { describe, expect, test } from 'vitest';
+import { describe, expect, test, vi } from 'vitest';
 import {
   REMEMBERED_CASUALTY_AREAS,
   NAUTICAL_MILE as NM,
@@ -16,6 +16,9 @@ import { halfWidthAt, shapeOf } from '#core/downrange/shape.ts';
 import { LONGEST_RANGE } from '#core/downrange/vehicle-class.ts';
 import { boxWorld } from '#tests/support/downrange-world.ts';
 import { reference } from '#tests/support/reference.ts';
+
+// The whole world is read, and geodesics are many.
+vi.setConfig({ testTimeout: 60_000, hookTimeout: 60_000 });
 
 const MILE = 1609.344;
 const small = shapeOf('small', LONGEST_RANGE);

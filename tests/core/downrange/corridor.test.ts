@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import geographicLib from 'geographiclib-geodesic';
-import { describe, expect, test } from 'vitest';
+import { describe, expect, test, vi } from 'vitest';
 import {
   NAUTICAL_MILE as NM,
   corridorOf,
@@ -17,6 +17,9 @@ import { metres } from '#core/units.ts';
 import { SEED } from '#tests/support/flights.ts';
 import { regulationPlace } from '#tests/support/regulation-geodesic.ts';
 import { reference } from '#tests/support/reference.ts';
+
+// The whole world is read, and geodesics are many.
+vi.setConfig({ testTimeout: 60_000, hookTimeout: 60_000 });
 
 const { Geodesic } = geographicLib;
 const wgs84 = Geodesic.WGS84;

@@ -1,4 +1,4 @@
-import { beforeAll, describe, expect, test } from 'vitest';
+import { beforeAll, describe, expect, test, vi } from 'vitest';
 import {
   AZIMUTHS,
   NAUTICAL_MILE as NM,
@@ -16,6 +16,9 @@ import { isExcluded } from '#core/downrange/corridor.ts';
 import { padOf } from '#core/flight/index.ts';
 import { fromDegrees, metres, metresPerSecond, radians, toDegrees } from '#core/units.ts';
 import { boxWorld, shippedWorld, uniforms } from '#tests/support/downrange-world.ts';
+
+// The whole world is read, and geodesics are many.
+vi.setConfig({ testTimeout: 60_000, hookTimeout: 60_000 });
 
 const DENSITY = 1500 / 1e6;
 const RANGE = metres(5000 * NM);
@@ -64,7 +67,7 @@ describe('a fan over the shipped world', () => {
       expect(fan[azimuthDeg]?.first).toEqual(survey.first);
     }
     expect(azimuthFan(world, start, 'small', RANGE, null).every(({ spread }) => spread === null)).toBe(true);
-  }, 60_000);
+  });
 });
 
 /**
@@ -130,7 +133,7 @@ describe('a fan where the coast is symmetric', () => {
     expect(fan[0]?.first).toMatchObject({ coast: 0 });
     expect(fan[0]?.first.land?.distance).toBeWithin(arc(5, 14), 0.1);
     expect(fan[180]?.first).toEqual({ coast: 0, land: null });
-  }, 60_000);
+  });
 });
 
 describe('openSectors', () => {

@@ -2,7 +2,7 @@ import { createRequire } from 'node:module';
 import geographicLib from 'geographiclib-geodesic';
 import { feature } from 'topojson-client';
 import type { GeometryCollection, Topology } from 'topojson-specification';
-import { beforeAll, describe, expect, test } from 'vitest';
+import { beforeAll, describe, expect, test, vi } from 'vitest';
 import { ringArea } from '#core/downrange/area.ts';
 import { placed } from '#core/downrange/corridor.ts';
 import { NAUTICAL_MILE as NM, between, corridorOf, type Place } from '#core/downrange/index.ts';
@@ -13,6 +13,9 @@ import { planarRings } from '#core/downrange/planar.ts';
 import { metres } from '#core/units.ts';
 import { boxWorld, shippedWorld } from '#tests/support/downrange-world.ts';
 import { reference } from '#tests/support/reference.ts';
+
+// The whole world is read, and geodesics are many.
+vi.setConfig({ testTimeout: 60_000, hookTimeout: 60_000 });
 
 const wgs84 = geographicLib.Geodesic.WGS84;
 const THOUSANDTH = { kind: 'rel', value: 1e-3 } as const;

@@ -1,4 +1,4 @@
-import { beforeAll, describe, expect, test } from 'vitest';
+import { beforeAll, describe, expect, test, vi } from 'vitest';
 import { NAUTICAL_MILE as NM, corridorOf, type Place, type World } from '#core/downrange/index.ts';
 import { decodeSettlements, encodeSettlements } from '#core/downrange/data/settlement-data.ts';
 import { inCorridor } from '#core/downrange/shape.ts';
@@ -6,6 +6,9 @@ import { surroundingsOf } from '#core/downrange/surroundings.ts';
 import { metres } from '#core/units.ts';
 import { shippedWorld } from '#tests/support/downrange-world.ts';
 import { reference } from '#tests/support/reference.ts';
+
+// The whole world is read, and geodesics are many.
+vi.setConfig({ testTimeout: 60_000, hookTimeout: 60_000 });
 
 let world: World;
 beforeAll(() => {

@@ -1,5 +1,5 @@
 import fc from 'fast-check';
-import { describe, expect, test } from 'vitest';
+import { describe, expect, test, vi } from 'vitest';
 import { between } from '#core/downrange/geodesic.ts';
 import { NAUTICAL_MILE as NM, VEHICLE_CLASSES } from '#core/downrange/index.ts';
 import { clearance, polarError, radiusBetween } from '#core/downrange/polar.ts';
@@ -7,6 +7,9 @@ import { halfWidthAt, shapeOf } from '#core/downrange/shape.ts';
 import { ROUGH_ERROR, Strip, directionOf } from '#core/downrange/strip.ts';
 import { metres } from '#core/units.ts';
 import { SEED } from '#tests/support/flights.ts';
+
+// The whole world is read, and geodesics are many.
+vi.setConfig({ testTimeout: 60_000, hookTimeout: 60_000 });
 
 const RADIAN = Math.PI / 180;
 const bounded = (min: number, max: number) => fc.double({ min, max, noNaN: true });

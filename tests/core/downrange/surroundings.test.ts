@@ -1,8 +1,11 @@
 import geographicLib from 'geographiclib-geodesic';
-import { beforeAll, describe, expect, test } from 'vitest';
+import { beforeAll, describe, expect, test, vi } from 'vitest';
 import { surroundingsOf, type World } from '#core/downrange/index.ts';
 import { nearestCoast } from '#core/downrange/coast.ts';
 import { boxWorld, shippedWorld } from '#tests/support/downrange-world.ts';
+
+// The whole world is read, and geodesics are many.
+vi.setConfig({ testTimeout: 60_000, hookTimeout: 60_000 });
 
 const { Geodesic } = geographicLib;
 const DENSITY = 1500 / 1e6;
