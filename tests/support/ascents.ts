@@ -1,7 +1,7 @@
 import { AirTable } from '#core/flight/ascent/air-table.ts';
 import { exponentialAir } from '#core/flight/ascent/atmosphere.ts';
 import { Course } from '#core/flight/ascent/course.ts';
-import type { Steps } from '#core/flight/ascent/course.ts';
+import type { Steps } from '#core/flight/ascent/pace.ts';
 import { Flyer } from '#core/flight/ascent/flyer.ts';
 import { NODES } from '#core/flight/ascent/modes.ts';
 import type { Planet } from '#core/flight/ascent/planet.ts';

@@ -12,34 +12,16 @@ import {
   PRESSURE_HELD,
   VERTICAL,
 } from './modes.ts';
+import { INSTANT, poweredStep, stepAt, STEPS, turnSettles } from './pace.ts';
+import type { Steps } from './pace.ts';
 import type { Phase, Stack } from './stack.ts';
-
-/** Longest steps in seconds: in rise and kick, early in the gravity turn, later in the air, above it. */
-export interface Steps {
-  readonly rise: number;
-  readonly turn: number;
-  readonly air: number;
-  readonly space: number;
-  /** Steps in one stretch, more than any ascent has: past them it is given up. */
-  readonly most: number;
-}
-
-export const STEPS: Steps = { rise: 2, turn: 1, air: 4, space: 16, most: 600 };
 
 /** A vehicle this far below the ellipsoid has come down. */
 const DOWN = -1000;
-/** What rounding leaves of a phase, in seconds. */
-const INSTANT = 1e-8;
+/** The fairing stays on below this height, whatever the heating. */
+const THICK_AIR = 45_000;
 /** Stretches in one flight, more than any ascent has: past them it is given up. */
 const MOST_STRETCHES = 64;
-/** Seconds for which the gravity turn of a slow vehicle is quick: it turns by g cos γ / v. */
-const EARLY_TURN = 40;
-/** A step burns no more than this share of what is left aboard: acceleration grows as the mass goes. */
-const MOST_BURNT = 0.12;
-/** And none is made shorter than this for it, s. */
-const SHORTEST = 0.5;
-/** Heights below which air still asks for the shorter steps. */
-const THIN_AIR = 45_000;
 
 /** Told of every state passed through: the start of each phase, and each step. */
 export type Observer = (flyer: Flyer) => void;
@@ -126,34 +108,7 @@ export class Course {
     const { flyer } = this;
     flyer.throttle = COASTING;
     flyer.probe();
-    return this.stretch(seconds, this.stepAt());
-  }
-
-  /** The longest step of a stretch: by where the vehicle is, and by how much of its mass it burns. */
-  private longestStep({ fixedFlow, mainFlow }: Phase, seconds: number): number {
-    const { throttle, state } = this.flyer;
-    const m = state[MASS] as number;
-    const flow = fixedFlow + mainFlow;
-    if (flow === 0) return this.stepAt();
-    const least = throttle === ACCELERATION_HELD ? m * Math.exp((-flow * seconds) / m) : m - flow * seconds;
-    return Math.min(this.stepAt(), Math.max(SHORTEST, (MOST_BURNT * least) / flow));
-  }
-
-  /** Whether the gravity turn has just begun. */
-  private turnsEarly(): boolean {
-    const { verticalRise, kick } = this.stack;
-    return this.flyer.time < verticalRise + kick + EARLY_TURN - INSTANT;
-  }
-
-  private stepAt(): number {
-    const { flyer, steps } = this;
-    // The throttle that holds a pressure jumps where the air's layers meet: short steps keep the pressure near.
-    if (flyer.throttle === PRESSURE_HELD) return steps.rise / 4;
-    if (flyer.throttle !== COASTING) {
-      if (flyer.steering.mode <= KICK) return steps.rise;
-      if (flyer.steering.mode === GRAVITY_TURN && this.turnsEarly()) return steps.turn;
-    }
-    return flyer.height < THIN_AIR ? steps.air : steps.space;
+    return this.stretch(seconds, stepAt(flyer, this.stack, this.steps));
   }
 
   /**
@@ -172,7 +127,7 @@ export class Course {
       if (!started) this.observer?.(flyer);
       if (left <= 0) break;
       const seconds = Math.min(left, boundary - flyer.time);
-      if (!this.stretch(seconds, this.longestStep(phase, seconds))) return false;
+      if (!this.stretch(seconds, poweredStep(flyer, this.stack, this.steps, phase, seconds))) return false;
     }
     return true;
   }
@@ -205,7 +160,8 @@ export class Course {
     const kicked = verticalRise + kick;
     steering.mode = time < kicked - INSTANT ? KICK : GRAVITY_TURN;
     if (steering.mode === KICK) return kicked;
-    return time < kicked + EARLY_TURN - INSTANT ? kicked + EARLY_TURN : Infinity;
+    const settles = turnSettles(stack);
+    return time < settles - INSTANT ? settles : Infinity;
   }
 
   /**
@@ -318,7 +274,7 @@ export class Course {
 
   /** The fairing leaves when ½ρv³ has fallen below its limit, above the thick air. */
   private heatingEvent(h: number): boolean {
-    if (this.stack.fairingHeating === 0 || this.fairing === 0 || this.flyer.height < THIN_AIR) return false;
+    if (this.stack.fairingHeating === 0 || this.fairing === 0 || this.flyer.height < THICK_AIR) return false;
     if (this.overHeating() > 0) return false;
     this.again(0);
     if (this.overHeating() > 0) this.locate(h, this.overHeating);
