@@ -87,7 +87,7 @@ const tabsOf = ({ orbits }: StudyInputs, results: readonly SiteResult[]) => [
 export function FlightSheets(props: FlightSheetsProps) {
   const { studyId, inputs, results, settings, locks } = props;
   const { value, index, rows, year, site, setOrbit, setSite } = useChoice(props);
-  const { losses, busy, error, choose } = useLosses(studyId, settings);
+  const { losses, shown: shownLosses, busy, error, choose } = useLosses(studyId, settings);
   const flown = useFlown(studyId, inputs, index);
   const first = losses === 'flown' && !flown.reading;
   const wholeManifest = value === MANIFEST;
@@ -144,7 +144,7 @@ export function FlightSheets(props: FlightSheetsProps) {
     <>
       <Head finding={first ? flownFinding : closedFinding} studyId={studyId} />
       <LossesBar
-        losses={losses}
+        losses={shownLosses}
         onLosses={(next) => void choose(next)}
         saving={busy}
         refused={error?.message ?? null}

@@ -79,8 +79,12 @@ function useMapView(props: SiteMapProps, scene: MapScene) {
     chosenHere.current = null;
   }, [view, props.chosenId]);
   useEffect(() => {
-    if (props.flights) view?.fitAll(false);
-  }, [view, props.flights]);
+    const [first] = latest.current.sites;
+    if (!view || !props.flights) return;
+    // A sphere has no frame that a long flight would fit: it is turned to the pad.
+    if (props.projection === 'globe' && first) view.flyTo(first);
+    else view.fitAll(false);
+  }, [view, props.flights, props.projection]);
   return { holder, canvas, view, fault };
 }
 

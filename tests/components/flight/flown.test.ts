@@ -240,7 +240,9 @@ describe('results', () => {
       ['S1', 2_000],
       ['S3', null],
     ]);
-    expect(flownManifestFinding(years).heading).toBe('Flown, Site 2 carries most: 10.0 t a year.');
+    expect(flownManifestFinding(years).heading).toBe(
+      'Whole manifest, flown: Site 2 carries most, 10.0 t a year.',
+    );
     expect(flownManifestFinding(years).decides).toBe('1 ascent not flown yet.');
   });
 
@@ -251,10 +253,10 @@ describe('results', () => {
       id(101),
     );
     const finding = flownOrbitFinding(rows, 'Polar');
-    expect(finding.heading).toBe('Flown, Site 2 carries most to Polar: 2,000 kg.');
+    expect(finding.heading).toBe('Polar, flown: Site 2 carries most, 2,000 kg.');
     expect(finding.why).toContain('Site 1 carries least of those that reach it, 1,000 kg less.');
     expect(finding.decides).toBe('1 figure is of inputs that changed since.');
     const missing = flownRows([site(1)], [ascent(1, 1, { state: 'missing', figures: null })], id(101));
-    expect(flownOrbitFinding(missing, 'Polar').heading).toBe('No ascent to Polar has been flown yet.');
+    expect(flownOrbitFinding(missing, 'Polar').heading).toBe('Polar: no ascent has been flown yet.');
   });
 });

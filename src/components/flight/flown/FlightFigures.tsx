@@ -134,12 +134,7 @@ function DrawnFlight({ studyId, inputs, orbit, flight, other, onChoose }: DrawnF
         {mapOpen ? (
           <>
             <Suspense fallback={<p role="status">Reading the map…</p>}>
-              <FlightMap
-                flights={mapped}
-                timeS={timeS}
-                headingDeg={flight.figures.launchHeadingDeg}
-                onChoose={onChoose}
-              />
+              <FlightMap flights={mapped} timeS={timeS} onChoose={onChoose} />
             </Suspense>
             <p className="caption mt-2">
               Line: over the ground. Dashed: where the vehicle would come down if its engines stopped, without

@@ -13,11 +13,10 @@ interface FlightMapProps {
   flights: readonly MappedFlight[];
   /** Of the first flight. */
   timeS: number;
-  headingDeg: number | null;
   onChoose: (code: string) => void;
 }
 
-const LAYERS = { sectors: true, track: true, otherTracks: false };
+const LAYERS = { sectors: false, track: false, otherTracks: false };
 
 const padOf = ({ siteId, ...site }: InputSite): MapSite => ({ ...site, id: siteId });
 
@@ -29,7 +28,7 @@ const toMap = ({ site, path }: MappedFlight): MapFlight => ({
 });
 
 /** The flight over the ground and where it would come down, with its place at the moment chosen. */
-export function FlightMap({ flights, timeS, headingDeg, onChoose }: FlightMapProps) {
+export function FlightMap({ flights, timeS, onChoose }: FlightMapProps) {
   const [projection, setProjection] = useState<Projection>('flat');
   const sites = useMemo(() => flights.map(({ site }) => padOf(site)), [flights]);
   const drawn = useMemo(() => flights.map(toMap), [flights]);
@@ -40,7 +39,7 @@ export function FlightMap({ flights, timeS, headingDeg, onChoose }: FlightMapPro
       sites={sites}
       chosenId={sites[0]?.id ?? null}
       tracks={[]}
-      flownAzimuthDeg={headingDeg}
+      flownAzimuthDeg={null}
       layers={LAYERS}
       flights={drawn}
       moment={moment}

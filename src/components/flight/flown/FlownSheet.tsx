@@ -43,7 +43,7 @@ export function FlownSheet(props: FlownSheetProps) {
     <>
       <Panel
         title={title}
-        caption="Three degrees of freedom, every specific impulse in vacuum: back-pressure is a line of its own. What is left at injection covers transfer, plane change and reserve."
+        caption="Three degrees of freedom, every specific impulse in vacuum: back-pressure is a line of its own. The lines add up to the ideal Δv; a centrifugal gain stands with a minus. What is left at injection covers transfer, plane change and reserve."
       >
         {anything ? (
           <FlownTable

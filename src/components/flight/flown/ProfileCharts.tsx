@@ -8,7 +8,7 @@ import { momentAt, PROFILES, type Along, type Moment, type ProfileKey } from './
 
 const WIDTH = 800;
 const LEFT = 52;
-const RIGHT = 660;
+const RIGHT = 640;
 const HEIGHT = 112;
 const GAP = 30;
 const ROW = 15;
@@ -109,10 +109,10 @@ function Profile({ profile, flown, other, along, limit, top, x }: PanelProps) {
             {code}
           </text>
         ))}
-      <text className="strong" x={RIGHT + 28} y={top + 12}>
+      <text className="strong" x={RIGHT + 48} y={top + 12}>
         {name}
       </text>
-      <text className="label-2" x={RIGHT + 28} y={top + 28}>
+      <text className="label-2" x={RIGHT + 48} y={top + 28}>
         {unit}
       </text>
     </g>

@@ -31,8 +31,8 @@ export function flownOrbitFinding(rows: readonly FlownRow[], orbitName: string):
     return {
       heading:
         open === rows.length
-          ? `No ascent to ${orbitName} has been flown yet.`
-          : `No site has payload to ${orbitName}.`,
+          ? `${orbitName}: no ascent has been flown yet.`
+          : `${orbitName}, flown: no site has payload.`,
       why: METHOD,
       decides: openWords(open, stale),
     };
@@ -42,7 +42,7 @@ export function flownOrbitFinding(rows: readonly FlownRow[], orbitName: string):
       ? ''
       : ` ${last.site.name} carries least of those that reach it, ${formatNumber(spread)} kg less.`;
   return {
-    heading: `Flown, ${best.site.name} carries most to ${orbitName}: ${formatNumber(payloadOf(best))} kg.`,
+    heading: `${orbitName}, flown: ${best.site.name} carries most, ${formatNumber(payloadOf(best))} kg.`,
     why: METHOD + range,
     decides: openWords(open, stale),
   };
@@ -55,7 +55,7 @@ export function flownManifestFinding(years: readonly FlownYear[]): FlightFinding
   const carried = best?.payloadPerYearKg ?? null;
   const heading =
     !best || carried === null
-      ? 'The manifest’s flown payload needs every orbit flown.'
-      : `Flown, ${best.site.name} carries most: ${formatNumber(carried / 1000, 1)} t a year.`;
+      ? 'The manifest’s flown payload waits for every orbit to be flown.'
+      : `Whole manifest, flown: ${best.site.name} carries most, ${formatNumber(carried / 1000, 1)} t a year.`;
   return { heading, why: METHOD, decides: openWords(open, stale) };
 }

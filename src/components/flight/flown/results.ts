@@ -25,7 +25,7 @@ export function flownRows(
     .sort((a, b) => rankOf(b) - rankOf(a));
 }
 
-/** The lines of a flown budget to injection, in the order they are printed; the centrifugal gain is taken off. */
+/** The lines of a flown budget to injection, in the order they are printed; a centrifugal gain is taken off. */
 export const ACCOUNT_LINES = [
   'required speed',
   'remainder',
@@ -33,7 +33,7 @@ export const ACCOUNT_LINES = [
   'drag',
   'steering',
   'back-pressure',
-  'centrifugal gain',
+  'centrifugal',
 ] as const;
 
 /** A flight's ideal Δv as the sum of its lines; undefined where it met no orbit. */

@@ -1,4 +1,4 @@
-import { useCallback } from 'react';
+import { useCallback, useState } from 'react';
 import { send } from '#components/live/api.ts';
 import { useAction, useApi } from '#components/live/hooks.ts';
 import { announceSaved, type Saved } from '#components/live/saved.ts';
@@ -21,8 +21,11 @@ export function useLosses(studyId: string, initial: StudySettings) {
   );
   useStudyEvents(studyId, onEvent);
   const { busy, error, run } = useAction();
+  /** Shown in the control while it is on its way. */
+  const [wanted, setWanted] = useState<LossesSource | null>(null);
   const kept = data ?? initial;
   const choose = async (losses: LossesSource): Promise<void> => {
+    setWanted(losses);
     const done = await run(async () => {
       const saved = await send<StudySettings & Saved>('PATCH', address, { losses, version: kept.version });
       announceSaved(saved);
@@ -30,6 +33,7 @@ export function useLosses(studyId: string, initial: StudySettings) {
     });
     // Refused because somebody else changed the settings: what holds now is shown, and can be chosen from.
     if (!done) await mutate();
+    setWanted(null);
   };
-  return { losses: kept.losses, busy, error, choose };
+  return { losses: kept.losses, shown: wanted ?? kept.losses, busy, error, choose };
 }
