@@ -2,6 +2,7 @@ import { containsPlace, isExcluded } from './corridor.ts';
 import type { Corridor } from './corridor.ts';
 import { between } from './geodesic.ts';
 import { clearance, polarError, radiusBetween, reachOf, widestTurns } from './polar.ts';
+import { Tally } from './runs.ts';
 import type { Settlements } from './settlements.ts';
 import type { Shape } from './shape.ts';
 import { MEAN_RADIUS, ROUGH_ERROR, directionOf, dot } from './strip.ts';
@@ -17,40 +18,6 @@ export interface FanCounts {
 }
 
 const RADIAN = Math.PI / 180;
-
-/** Adds to all of a run of whole degrees at once; sums are taken when every run is known. */
-class Runs {
-  readonly #steps: Float64Array;
-
-  constructor(readonly count: number) {
-    this.#steps = new Float64Array(count + 1);
-  }
-
-  /** From one whole degree to another, both included; they may run past north. */
-  add(from: number, to: number, value: number): void {
-    if (to < from) return;
-    if (to - from >= this.count - 1) return this.#span(0, this.count - 1, value);
-    const first = ((from % this.count) + this.count) % this.count;
-    const last = first + to - from;
-    this.#span(first, Math.min(last, this.count - 1), value);
-    if (last >= this.count) this.#span(0, last - this.count, value);
-  }
-
-  #span(from: number, to: number, value: number): void {
-    this.#steps[from] = (this.#steps[from] as number) + value;
-    this.#steps[to + 1] = (this.#steps[to + 1] as number) - value;
-  }
-
-  sums(): Float64Array {
-    const sums = new Float64Array(this.count);
-    let sum = 0;
-    for (let at = 0; at < this.count; at += 1) {
-      sum += this.#steps[at] as number;
-      sums[at] = sum;
-    }
-    return sums;
-  }
-}
 
 /** One settlement as the launch point sees it. */
 interface Sight {
@@ -90,23 +57,48 @@ function withinReach({ shape, start }: Corridor, settlements: Settlements): numb
   return found;
 }
 
-/** The sums of a fan while it is counted. */
-class Tally {
-  readonly people: Runs;
-  readonly settlements: Runs;
-  readonly withoutFigure: Runs;
+/** A fan's corridors, with what is worked out once for all of them. */
+interface Fan {
+  readonly corridors: readonly Corridor[];
+  readonly shape: Shape;
+  readonly launch: Corridor;
+  /** The widest turn at which a place at a distance lies inside. */
+  readonly widest: (distance: number) => number;
+}
 
-  constructor(count: number) {
-    this.people = new Runs(count);
-    this.settlements = new Runs(count);
-    this.withoutFigure = new Runs(count);
-  }
+/** Whole degrees at which something holds, each a run of its own. */
+const degreesWhere = (fan: Fan, holds: (corridor: Corridor) => boolean): number[] =>
+  fan.corridors.flatMap((corridor, degree) => (holds(corridor) ? [degree] : []));
 
-  add(from: number, to: number, people: number): void {
-    this.people.add(from, to, people);
-    this.settlements.add(from, to, 1);
-    if (people === 0) this.withoutFigure.add(from, to, 1);
+function countSettlement(
+  fan: Fan,
+  settlements: Settlements,
+  at: number,
+  inside: Tally,
+  excluded: Tally,
+): void {
+  const { corridors, shape, launch, widest } = fan;
+  const [place, direction, people] = [
+    settlements.place(at),
+    settlements.direction(at),
+    settlements.people(at),
+  ];
+  const { distance, azimuthDeg } = between(launch.start, place);
+  if (distance < (shape.exclusionLength + shape.circleRadius) * 1.01)
+    for (const degree of degreesWhere(fan, (corridor) => isExcluded(corridor, place, direction)))
+      excluded.add(degree, degree, people);
+  const near = polarError(distance);
+  if (distance > shape.range - 2 * near || distance < shape.circleRadius + 2 * near) {
+    // At the circle and at the corridor's end: few places, and more than one edge to mind.
+    for (const degree of degreesWhere(fan, (corridor) => containsPlace(corridor, place, direction)))
+      inside.add(degree, degree, people);
+    return;
   }
+  const count = corridors.length;
+  const holds = (degree: number): boolean =>
+    containsPlace(corridors[((degree % count) + count) % count] as Corridor, place, direction);
+  const sight = { distance, azimuthDeg, radius: radiusBetween(launch.strip.up, direction), holds };
+  inside.add(...runOf(shape, sight, widest(distance)), people);
 }
 
 /**
@@ -116,34 +108,12 @@ class Tally {
  * @param corridors of one shape from one launch point, at 0°, 1°, 2° … all the way round
  */
 export function countFan(corridors: readonly Corridor[], settlements: Settlements): FanCounts {
-  const [first] = corridors;
-  if (!first) throw new RangeError('countFan: no corridors');
-  const { shape, start, strip } = first;
-  const count = corridors.length;
-  const [inside, excluded] = [new Tally(count), new Tally(count)];
-  const widest = widestTurns(shape);
-  const corridorAt = (degree: number): Corridor => corridors[((degree % count) + count) % count] as Corridor;
-  const zoneReach = (shape.exclusionLength + shape.circleRadius) * 1.01;
-  for (const at of withinReach(first, settlements)) {
-    const [place, direction, people] = [
-      settlements.place(at),
-      settlements.direction(at),
-      settlements.people(at),
-    ];
-    const { distance, azimuthDeg } = between(start, place);
-    const holds = (degree: number): boolean => containsPlace(corridorAt(degree), place, direction);
-    const near = polarError(distance);
-    if (distance < zoneReach)
-      for (let degree = 0; degree < count; degree += 1)
-        if (isExcluded(corridorAt(degree), place, direction)) excluded.add(degree, degree, people);
-    if (distance > shape.range - 2 * near || distance < shape.circleRadius + 2 * near) {
-      // At the circle and at the corridor's end: few places, and more than one edge to mind.
-      for (let degree = 0; degree < count; degree += 1) if (holds(degree)) inside.add(degree, degree, people);
-      continue;
-    }
-    const sight = { distance, azimuthDeg, radius: radiusBetween(strip.up, direction), holds };
-    inside.add(...runOf(shape, sight, widest(distance)), people);
-  }
+  const [launch] = corridors;
+  if (!launch) throw new RangeError('countFan: no corridors');
+  const { shape } = launch;
+  const fan: Fan = { corridors, shape, launch, widest: widestTurns(shape) };
+  const [inside, excluded] = [new Tally(corridors.length), new Tally(corridors.length)];
+  for (const at of withinReach(launch, settlements)) countSettlement(fan, settlements, at, inside, excluded);
   return {
     people: inside.people.sums(),
     settlements: inside.settlements.sums(),
