@@ -145,7 +145,9 @@ export const ConvergedAscent = z
     flownInclinationDeg: z.number(),
     burnOutS: z.number(),
     launchHeadingDeg: z.number().meta({ description: 'Flown at the speed the sectors are checked at' }),
-    maxDynamicPressurePa: z.number(),
+    maxDynamicPressurePa: z.number().meta({
+      description: 'Above the limit only where what does not throttle, the boosters, exceeds it alone',
+    }),
     idealDeltaVMps: z.number().meta({
       description:
         'Vacuum specific impulse: relative speed + gravity + drag + steering + back-pressure − centrifugal',

@@ -5,12 +5,13 @@ import { radiusOf } from '../orbit.ts';
 import type { Pad } from '../pad.ts';
 import { isPermitted } from '../sectors.ts';
 import type { Edge } from '../sectors.ts';
-import type { FlightSettings, FlownWay } from '../types.ts';
+import type { FlightSettings, Flown, FlownWay } from '../types.ts';
 import { accountFor } from './account.ts';
 import type { Account } from './account.ts';
 import { AirTable } from './air-table.ts';
 import { standardAir } from './atmosphere.ts';
 import { searchWay } from './search-way.ts';
+import { changesPlane } from './attempt.ts';
 import type { Attempt } from './attempt.ts';
 import type { Found } from './search-way.ts';
 import { Course } from './course.ts';
@@ -74,6 +75,8 @@ const none = (reason: NoAscent, { starts, flights } = { starts: 0, flights: 0 })
   flights,
 });
 
+/** How far the plane flown may lie beside the one asked for, rad, where none is changed afterwards. */
+const PLANE = 2e-7;
 /** What an account may leave open, m/s. */
 const OPEN = 0.1;
 
@@ -84,6 +87,17 @@ function better(best: Ascent | undefined, next: Ascent): Ascent {
   if (best === undefined) return next;
   if (next.kind === 'not-flown') return best;
   return best.kind === 'flown' && best.payload >= next.payload ? best : next;
+}
+
+/**
+ * The way the closed form takes, by each profile that injects at another speed: to the closed form profiles cost about
+ * the same, to a vehicle that pushes little the burn to perigee speed does not.
+ */
+function profilesOf(flight: Flown, target: Target): FlownWay[] {
+  const other = target.injections.find(
+    ({ profile, speed }) => profile !== flight.profile && Math.abs(speed - flight.injectionSpeed) > 1,
+  );
+  return other === undefined ? [flight] : [flight, { ...flight, profile: other.profile }];
 }
 
 /** Flies ascents of one vehicle: what they share is laid out once. */
@@ -133,11 +147,12 @@ export class AscentFlyer {
     if (flight.kind === 'out-of-reach') return none('out-of-reach');
     if (!this.liftsOff()) return none('does-not-lift-off');
     const dearest = flight.kind === 'direct' ? -Infinity : flight.budget.total + DEARER;
+    const sure = profilesOf(flight, target);
     let best: Ascent | undefined;
     const made = { starts: 0, flights: 0 };
-    for (const way of [flight, ...flight.others].slice(0, MOST_WAYS)) {
+    for (const way of [...sure, ...flight.others].slice(0, MOST_WAYS)) {
       // One that is flown stands, unless another may be as good: the closed form tells turns only roughly.
-      if (best?.kind === 'flown' && way.budget.total > dearest) break;
+      if (best?.kind === 'flown' && !sure.includes(way) && way.budget.total > dearest) break;
       const flown = this.flyWay(this.attempt(pad, target, way), warm);
       made.starts += flown.starts;
       made.flights += flown.flights;
@@ -184,6 +199,8 @@ export class AscentFlyer {
     if (payload < 0) return none('falls-short', found);
     const account = accountFor(attempt, variables);
     if (account === undefined || !(Math.abs(account.open) < OPEN)) return none('did-not-converge', found);
+    const beside = Math.abs(account.inclination - attempt.target.inclination);
+    if (!changesPlane(attempt) && !(beside < PLANE)) return none('did-not-converge', found);
     return { kind: 'flown', payload, way: attempt.way, account, variables, starts, flights };
   }
 }

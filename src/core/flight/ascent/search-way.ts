@@ -27,16 +27,19 @@ interface Start {
   readonly path?: number;
   readonly first: number;
   readonly last: number;
+  /** Share of the rough payload: losses of a vehicle that pushes little are more than the usual. */
+  readonly share: number;
 }
 
 /** Starts in the order tried: what serves most vehicles, then paths from middling to steep and flat. */
 const STARTS: readonly Start[] = [
-  { tilt: 0.1, first: 0.5, last: 0 },
-  { path: 0.35, first: 0.45, last: 0 },
-  { path: 0.6, first: 0.25, last: 0 },
-  { path: 0.2, first: 0.7, last: -0.1 },
-  { path: 0.9, first: 0.1, last: 0 },
-  { path: 0.08, first: 1, last: -0.3 },
+  { tilt: 0.1, first: 0.5, last: 0, share: 1 },
+  { path: 0.35, first: 0.45, last: 0, share: 1 },
+  { path: 0.6, first: 0.5, last: 0, share: 0.6 },
+  { path: 0.2, first: 0.7, last: -0.1, share: 0.9 },
+  { path: 0.9, first: 0.4, last: 0, share: 0.3 },
+  { path: 0.6, first: 0.25, last: 0, share: 1 },
+  { path: 0.08, first: 1, last: -0.3, share: 1 },
 ];
 /** Tilts between which a path is looked for, and the halvings spent on it. */
 const LEAST_TILT = 2e-3;
@@ -103,7 +106,7 @@ function tiltFor(attempt: Attempt, variables: Float64Array, path: number): numbe
 }
 
 /** The variables of a start; the plane is the target's, or the one the way reaches. */
-function startOf(attempt: Attempt, { tilt, path, first, last }: Start): Float64Array {
+function startOf(attempt: Attempt, { tilt, path, first, last, share }: Start): Float64Array {
   const { way, target, course } = attempt;
   const after = afterInjection(attempt);
   const inclination = changesPlane(attempt) ? legInclination(attempt) : target.inclination;
@@ -113,16 +116,28 @@ function startOf(attempt: Attempt, { tilt, path, first, last }: Start): Float64A
   variables[LAST_TANGENT] = last;
   variables[COAST] = aboveCoasting(attempt) * COAST_GUESS;
   variables[INCLINATION] = inclination;
-  variables[SIZE] = roughPayload(course.stack, way.requiredSpeed + ROUGH_LOSSES + after(inclination));
+  const deltaV = way.requiredSpeed + ROUGH_LOSSES + after(inclination);
+  variables[SIZE] = share * roughPayload(course.stack, deltaV);
   variables[TILT] = tilt ?? tiltFor(attempt, variables, path ?? 0);
   return variables;
 }
 
 const STEERED = [TILT, AZIMUTH, SIZE, FIRST_TANGENT, LAST_TANGENT, YAW];
 
+/** From the equator into its plane nothing leads out of it, and nothing may: the flight is due east or due west. */
+const staysOnEquator = ({ pad, target, way }: Attempt): boolean =>
+  way.kind === 'direct' && Math.abs(pad.sinLatitude) < 1e-9 && target.sinInclination < 1e-9;
+
+/** The variables that are chosen at last. */
+function activeOf(attempt: Attempt, edge: number | undefined): readonly number[] {
+  if (edge === undefined && staysOnEquator(attempt))
+    return [TILT, SIZE, FIRST_TANGENT, LAST_TANGENT, INCLINATION];
+  return changesPlane(attempt) ? [...STEERED, INCLINATION] : STEERED;
+}
+
 /** The last search of a way: as large a payload as can be, the coast free where one pays. */
 function finish(attempt: Attempt, from: Float64Array, edge: number | undefined): Ended {
-  const active = changesPlane(attempt) ? [...STEERED, INCLINATION] : STEERED;
+  const active = activeOf(attempt, edge);
   const found = search(problemOf(attempt, active, edge), from);
   if (found.search.outcome !== 'converged' || aboveCoasting(attempt) === 0) return found;
   const coasting = search(problemOf(attempt, [...active, COAST], edge), found.variables);

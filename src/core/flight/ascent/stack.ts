@@ -20,7 +20,7 @@ export interface Phase {
   readonly dropped: number;
   /** Whether the fairing leaves at the end as well. */
   readonly dropsFairing: boolean;
-  /** 0 for the first stage and what burns beside it, then 1, 2 … */
+  /** 0 for what climbs by rise, kick and gravity turn; above 0 for what the linear tangent steers, and may inject. */
   readonly stage: number;
 }
 

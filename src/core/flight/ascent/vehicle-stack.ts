@@ -6,6 +6,9 @@ const SEA_LEVEL_PRESSURE = 101_325;
 /** A vehicle of one stage leaves the gravity turn when this share of its propellant is gone: it is above the air. */
 const ONE_STAGE_TURN = 0.6;
 
+/** A core that burns on for this long after its boosters part, in seconds, is steered as upper stages are. */
+const SUSTAINS = 120;
+
 /** What a flown ascent needs of a vehicle beside what the closed form does. */
 export interface AscentFigures {
   /** m² of the core and what it carries, and of one booster. */
@@ -70,6 +73,13 @@ function stagePhase(stage: Stage, figures: AscentFigures, endMass: number, index
   };
 }
 
+/** Whether the core burns on so long after its boosters part that it does most of its work above the air. */
+function sustains(core: Stage, boosters: Boosters | undefined): boolean {
+  if (boosters === undefined || boosters.count === 0) return false;
+  const together = boosters.propellantMass / massFlow(boosters);
+  return core.propellantMass / massFlow(core) - together > SUSTAINS;
+}
+
 /** One stage flown in two: the gravity turn, and above the air what upper stages do. */
 function splitStage(stage: Stage, figures: AscentFigures, endMass: number): Phase[] {
   const whole = stagePhase(stage, figures, endMass, 0);
@@ -96,8 +106,11 @@ export function stackOf(vehicle: AscentVehicle): Stack {
     boosters === undefined || count === 0 ? [] : [parallelPhase(boosters, core, ascent, liftOffMass)];
   stages.forEach((stage, index) => {
     const endMass = above - stage.propellantMass;
-    const flown =
-      stages.length === 1 ? splitStage(stage, ascent, endMass) : [stagePhase(stage, ascent, endMass, index)];
+    const sustaining = index === 0 && sustains(core, boosters);
+    const split = stages.length === 1 && !sustaining;
+    const flown = split
+      ? splitStage(stage, ascent, endMass)
+      : [stagePhase(stage, ascent, endMass, sustaining ? 1 : index)];
     const leaves = ascent.fairingHeating === 0 && index + 1 === vehicle.fairingLeavesAfterStage;
     phases.push(...flown.map((phase, k) => ({ ...phase, dropsFairing: leaves && k === flown.length - 1 })));
     above = endMass - stage.dryMass;

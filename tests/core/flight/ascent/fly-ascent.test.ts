@@ -251,6 +251,31 @@ describe('an ascent', () => {
     }
   });
 
+  test('under auto is flown by the profile that carries more', () => {
+    const by = (profile: TargetOrbit['profile']) =>
+      flown(rowan, siteAt(28.5), orbitOf(150, 400, 51.6, profile)).payload;
+    expect(by('auto')).toBeWithin(Math.max(by('direct'), by('parking')), 0.05);
+    expect(Math.abs(by('direct') - by('parking'))).toBeGreaterThan(50);
+  });
+
+  test('of a core that burns on for minutes after its boosters is steered by the tangent from there', () => {
+    const vehicle = vehicles[1]!.core;
+    const [core, second] = vehicle.stages as [(typeof vehicle.stages)[0], (typeof vehicle.stages)[0]];
+    // Less thrust at a better impulse: three minutes alone.
+    const slow = {
+      ...core,
+      vacuumThrust: 2.4e6 as typeof core.vacuumThrust,
+      vacuumImpulse: 400 as typeof core.vacuumImpulse,
+      seaLevelImpulse: 340 as typeof core.vacuumImpulse,
+    };
+    const boosters = { ...vehicle.boosters!, count: 4 };
+    const sustainer = new AscentFlyer({ ...vehicle, boosters, stages: [slow, second] }, SETTINGS);
+    const ascent = flown(sustainer, siteAt(13), orbit);
+    expectWhole(ascent, orbit);
+    // A gravity turn of five minutes would have fallen over: the losses stay those of a common ascent.
+    expect(ascent.account.losses.gravity + ascent.account.losses.steering).toBeLessThan(2200);
+  });
+
   test('to a high parking orbit coasts before its upper stage, and carries more for it', () => {
     const high = orbitOf(800, 800, 51.6, 'auto', 800);
     const ascent = flown(rowan, siteAt(10), high);
