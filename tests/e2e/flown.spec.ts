@@ -70,7 +70,7 @@ test('the study’s losses are chosen, move the revision, and go stale with an i
   const study = await newStudy(page.request, baseURL, 'Losses chosen in the browser');
   await page.goto(flight(study, '?orbit=LOW'));
   await awake(page);
-  const revision = page.locator('[data-revision-number]');
+  const revision = page.locator('[data-revision-number]').first();
   const before = Number(await revision.textContent());
   await bar(page).locator('label', { hasText: 'Flown' }).click();
   await expect(bar(page).getByRole('radio', { name: 'Flown' })).toBeChecked();
