@@ -21,7 +21,8 @@ import { exclusionArea } from '#core/downrange/shape.ts';
 import { metres } from '#core/units.ts';
 
 type Zone = CorridorOutput['features'][0];
-type Expectation = CorridorOutput['features'][1]['properties']['casualtyExpectation'];
+type Whole = CorridorOutput['features'][1];
+type Expectation = Whole['properties']['casualtyExpectation'];
 type AreaProperties = Omit<Zone['properties'], 'kind' | 'areaKm2' | 'firstLandKm'>;
 
 const SQUARE_MILE = 1609.344 ** 2;
@@ -110,29 +111,33 @@ function casualtyAreasOf({ settings, vehicleClass }: CorridorInput): CasualtyAre
   return [near * SQUARE_MILE, middle * SQUARE_MILE, far * SQUARE_MILE];
 }
 
-/** One corridor surveyed, as GeoJSON. @throws RangeError as corridorOf */
-export function corridorCollection(world: World, input: CorridorInput): CorridorOutput {
-  const { azimuthDeg, vehicleClass, rangeNm, settings, ...start } = input;
-  const corridor = corridorOf(start, azimuthDeg, vehicleClass, metres(rangeNm * NAUTICAL_MILE));
-  const survey = surveyCorridor(world, corridor, {
-    placeDensity: settings.placeDensityPerKm2 / 1e6,
-    spreads: settings.spreadPeople,
-    casualtyAreas: casualtyAreasOf(input),
-  });
-  const { coast, land } = survey.first;
-  const { exclusionLength, circleRadius } = corridor.shape;
-  const nameOf = (country: number) => world.map.country(country);
-  const zone: Zone = {
+function zoneFeature(
+  world: World,
+  { shape }: Corridor,
+  { exclusion, first: { land } }: CorridorSurvey,
+): Zone {
+  const length = shape.exclusionLength + shape.circleRadius;
+  return {
     type: 'Feature',
-    geometry: geometryOf(survey.exclusion.rings),
+    geometry: geometryOf(exclusion.rings),
     properties: {
       kind: 'exclusion-zone',
-      areaKm2: km2(exclusionArea(corridor.shape)),
-      ...areaProperties(world, survey.exclusion),
-      firstLandKm: land && land.distance <= exclusionLength + circleRadius ? km(land.distance) : null,
+      areaKm2: km2(exclusionArea(shape)),
+      ...areaProperties(world, exclusion),
+      firstLandKm: land && land.distance <= length ? km(land.distance) : null,
     },
   };
-  const whole: CorridorOutput['features'][1] = {
+}
+
+function corridorFeature(
+  world: World,
+  corridor: Corridor,
+  survey: CorridorSurvey,
+  input: CorridorInput,
+): Whole {
+  const { coast, land } = survey.first;
+  const { azimuthDeg, vehicleClass, rangeNm } = input;
+  return {
     type: 'Feature',
     geometry: geometryOf(survey.corridor.rings),
     properties: {
@@ -142,19 +147,30 @@ export function corridorCollection(world: World, input: CorridorInput): Corridor
       rangeNm,
       ...areaProperties(world, survey.corridor),
       firstLandKm: land && km(land.distance),
-      firstLandName: land && nameOf(land.country).name,
+      firstLandName: land && world.map.country(land.country).name,
       coastKm: coast === null ? null : km(coast),
       overland: survey.stretches.map(({ from, to, country }) => {
-        const { code, name } = nameOf(country);
+        const { code, name } = world.map.country(country);
         return { fromKm: km(from), toKm: km(to), code, name };
       }),
       largestSettlements: largestSettlements(world, corridor, survey.corridor.settlements),
       casualtyExpectation: expectationOf(world, survey.expectation, input),
     },
   };
+}
+
+/** One corridor surveyed, as GeoJSON. @throws RangeError as corridorOf */
+export function corridorCollection(world: World, input: CorridorInput): CorridorOutput {
+  const { azimuthDeg, vehicleClass, rangeNm, settings, ...start } = input;
+  const corridor = corridorOf(start, azimuthDeg, vehicleClass, metres(rangeNm * NAUTICAL_MILE));
+  const survey = surveyCorridor(world, corridor, {
+    placeDensity: settings.placeDensityPerKm2 / 1e6,
+    spreads: settings.spreadPeople,
+    casualtyAreas: casualtyAreasOf(input),
+  });
   return {
     type: 'FeatureCollection',
-    features: [zone, whole],
+    features: [zoneFeature(world, corridor, survey), corridorFeature(world, corridor, survey, input)],
     regulation: REGULATION,
     cautions: [...cautions],
     attributions: attributions.map(({ what, source, licence }) => `${what}: ${source}, ${licence}`),
