@@ -132,6 +132,7 @@ export class Flyer {
     const gy = equatorial * y;
     const gz = central * (1 + oblate * (3 - 5 * s2)) * z;
 
+    // Beyond the ellipsoid's radius b/√(1 − e² cos²φ′), less what the normal leans from it: to 2e-7 of the height.
     const surface = this.polarRadius / Math.sqrt(1 - e2 * (1 - s2));
     const height = (r - surface) * (1 - 0.5 * e2 * e2 * s2 * (1 - s2));
     air.look(height);

@@ -27,20 +27,6 @@ export const EARTH: Planet = {
   standardGravity: constants.standardGravity.value,
 };
 
-/**
- * Height above the ellipsoid of a point in the meridian plane, to 2e-7 of itself: the distance beyond the ellipsoid's
- * radius at the geocentric latitude, b/√(1 − e² cos²φ′), less what the normal leans from the radius.
- * @param radius distance from the centre in m
- * @param sinSquared sin²φ′
- * @see references.wgs84, tests/core/flight/ascent/planet.test.ts
- */
-export function heightAt(planet: Planet, radius: number, sinSquared: number): number {
-  const e2 = planet.eccentricitySquared;
-  const polar = planet.equatorialRadius * Math.sqrt(1 - e2);
-  const surface = polar / Math.sqrt(1 - e2 * (1 - sinSquared));
-  return (radius - surface) * (1 - 0.5 * e2 * e2 * sinSquared * (1 - sinSquared));
-}
-
 /** Geodetic place of a point. */
 export interface GeodeticPlace {
   /** rad, north positive. */
@@ -52,7 +38,7 @@ export interface GeodeticPlace {
 /**
  * Geodetic latitude and height by Bowring's formula, iterated until the latitude stands.
  * @param axisDistance p ≥ 0 and `z`, north positive, in m
- * @see references.wgs84, tests/core/flight/ascent/planet.test.ts
+ * @see references.wgs84, tests/core/flight/ascent/integration.test.ts
  */
 export function geodeticOf(planet: Planet, axisDistance: number, z: number): GeodeticPlace {
   const e2 = planet.eccentricitySquared;
