@@ -9,6 +9,7 @@ import { study } from '#db/schema/study.ts';
 import type { FlyAscent } from '#server/ascents/fly-batch.ts';
 import { testDatabase } from '#tests/support/database.ts';
 import { flownStudy, flownVehicle, type FlownStudy } from '#tests/support/flown-study.ts';
+import { expectSoon } from '#tests/support/soon.ts';
 import { standInFlight } from '#tests/support/stand-in-flight.ts';
 
 const { db } = await testDatabase();
@@ -50,7 +51,7 @@ const ask = ({ member }: FlownStudy, input = {}) => askAscents(db, { member, inp
 const read = ({ member: { studyId } }: FlownStudy, query = {}) =>
   readAscents(db, { studyId, query: AscentsQuery.parse(query) });
 const counts = async (which: FlownStudy) =>
-  Object.fromEntries(Object.entries((await read(which)).counts).filter(([, n]) => n > 0));
+  Object.fromEntries(Object.entries((await read(which, { list: 'false' })).counts).filter(([, n]) => n > 0));
 const until = (which: FlownStudy, wanted: Record<string, number>) =>
   vi.waitFor(async () => expect(await counts(which)).toEqual(wanted), { timeout: 10_000, interval: 50 });
 const latitudes = (flown: readonly AscentTask[]) => flown.map((task) => task.site.latitudeDeg);
@@ -270,6 +271,24 @@ test('screens hear that ascents move on, some times a second however many are fl
   expect(told).toBeLessThanOrEqual(2 * seconds + 2);
   expect(own).toContain(`{"studyId":"${trial.member.studyId}","objects":["ascent"]}`);
   expect(others).not.toContain('event: progress');
+});
+
+test('thousands are asked for, looked at and cancelled in a moment', async () => {
+  const latitudesDeg = Array.from({ length: 2_000 }, (_, i) => -60 + i / 50);
+  const trial = await flownStudy(db, { latitudesDeg, inclinationsDeg: [60, 70, 80] });
+  const soon = async <T>(what: string, goalMs: number, work: () => Promise<T>): Promise<T> => {
+    const started = performance.now();
+    const result = await work();
+    expectSoon(what, performance.now() - started, goalMs);
+    return result;
+  };
+  expect(await soon('asking for 6,000 ascents', 2_000, () => ask(trial))).toMatchObject({ underWay: 6_000 });
+  expect(await soon('counting them', 500, () => counts(trial))).toEqual({ waiting: 6_000 });
+  const cancel = () => cancelAscents(db, { member: trial.member, scope: {} });
+  expect(await soon('cancelling them', 1_500, cancel)).toEqual({ cancelled: 6_000 });
+  const { rows } = await db.execute(`select count(*)::int as n from pgboss.job
+    where name = 'ascents' and state < 'completed'`);
+  expect(rows).toEqual([{ n: 0 }]);
 });
 
 test('what cannot be flown says why and asks for nothing', async () => {

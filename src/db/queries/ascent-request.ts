@@ -1,6 +1,6 @@
-import { and, desc, eq, inArray, isNull, sql } from 'drizzle-orm';
+import { and, desc, eq, isNull, sql } from 'drizzle-orm';
 import type { Db } from '../client.ts';
-import { ascent, ascentRequest } from '../schema/ascent.ts';
+import { ascentRequest } from '../schema/ascent.ts';
 import { user } from '../schema/auth.ts';
 
 interface Pair {
@@ -31,15 +31,12 @@ export async function writeRequests(
       cancelled_at = null`);
 }
 
-const live = (studyId: string) => and(eq(ascentRequest.studyId, studyId), isNull(ascentRequest.cancelledAt));
-
-/** What a study asks for that is not flown yet, of earlier inputs too. */
-export function listPending(db: Db, { studyId }: { studyId: string }): Promise<Request[]> {
+/** What a study asks for, flown or not, of earlier inputs too. */
+export function listLive(db: Db, { studyId }: { studyId: string }): Promise<Request[]> {
   return db
     .select({ siteId: ascentRequest.siteId, orbitId: ascentRequest.orbitId, hash: ascentRequest.hash })
     .from(ascentRequest)
-    .innerJoin(ascent, eq(ascent.hash, ascentRequest.hash))
-    .where(and(live(studyId), inArray(ascent.state, ['waiting', 'flying'])));
+    .where(and(eq(ascentRequest.studyId, studyId), isNull(ascentRequest.cancelledAt)));
 }
 
 /** Takes requests back. */
@@ -47,12 +44,32 @@ export async function cancelRequests(
   db: Db,
   { studyId, requests }: { studyId: string; requests: readonly Request[] },
 ): Promise<void> {
-  if (requests.length === 0) return;
-  await db.execute(sql`
-    update ascent_request r set cancelled_at = now()
-    from jsonb_to_recordset(${JSON.stringify(requests)}::jsonb) as old("siteId" uuid, "orbitId" uuid, hash text)
-    where r.study_id = ${studyId} and r.site_id = old."siteId" and r.orbit_id = old."orbitId"
-      and r.hash = old.hash and r.cancelled_at is null`);
+  const keys = requests.map(({ siteId, orbitId, hash }) => `${siteId} ${orbitId} ${hash}`);
+  const { siteId, orbitId, hash } = ascentRequest;
+  await db
+    .update(ascentRequest)
+    .set({ cancelledAt: sql`now()` })
+    .where(
+      and(
+        eq(ascentRequest.studyId, studyId),
+        isNull(ascentRequest.cancelledAt),
+        sql`${siteId}::text || ' ' || ${orbitId}::text || ' ' || ${hash} = any(${sql.param(keys)}::text[])`,
+      ),
+    );
+}
+
+/** Those of some flights that any study still asks for. */
+export async function stillAskedFor(db: Db, { hashes }: { hashes: readonly string[] }): Promise<Set<string>> {
+  const rows = await db
+    .selectDistinct({ hash: ascentRequest.hash })
+    .from(ascentRequest)
+    .where(
+      and(
+        sql`${ascentRequest.hash} = any(${sql.param([...hashes])}::text[])`,
+        isNull(ascentRequest.cancelledAt),
+      ),
+    );
+  return new Set(rows.map(({ hash }) => hash));
 }
 
 /** Everything a study ever asked for, latest first, with the name of who did. */
@@ -70,22 +87,6 @@ export function listRequests(db: Db, { studyId }: { studyId: string }) {
     .innerJoin(user, eq(user.id, ascentRequest.requestedBy))
     .where(eq(ascentRequest.studyId, studyId))
     .orderBy(desc(ascentRequest.requestedAt));
-}
-
-/** The last result of each site and orbit that a study asked for, of whatever inputs. */
-export function listLastResults(db: Db, { studyId }: { studyId: string }) {
-  return db
-    .selectDistinctOn([ascentRequest.siteId, ascentRequest.orbitId], {
-      siteId: ascentRequest.siteId,
-      orbitId: ascentRequest.orbitId,
-      hash: ascent.hash,
-      outcome: ascent.outcome,
-      finishedAt: ascent.finishedAt,
-    })
-    .from(ascentRequest)
-    .innerJoin(ascent, eq(ascent.hash, ascentRequest.hash))
-    .where(and(eq(ascentRequest.studyId, studyId), eq(ascent.state, 'done')))
-    .orderBy(ascentRequest.siteId, ascentRequest.orbitId, desc(ascentRequest.requestedAt));
 }
 
 /** The studies that ask for any of some flights. */

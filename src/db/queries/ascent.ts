@@ -1,4 +1,4 @@
-import { and, eq, inArray, ne, sql, type SQL } from 'drizzle-orm';
+import { and, count, eq, gt, inArray, lte, ne, or, sql, type SQL } from 'drizzle-orm';
 import type { Db } from '../client.ts';
 import { ascent, ascentVehicle, type AscentFailure } from '../schema/ascent.ts';
 
@@ -119,7 +119,10 @@ export async function insertAscents(
   }
 }
 
-/** A list of hashes as one parameter, however long. */
+/**
+ * A list of hashes as one parameter, however long. Nothing here joins flights with requests: of twenty thousand rows
+ * made a moment ago the planner knows nothing, and joins them by comparing each with each.
+ */
 const oneOf = (hashes: readonly string[]): SQL =>
   sql`${ascent.hash} = any(${sql.param([...hashes])}::text[])`;
 
@@ -143,70 +146,90 @@ export async function assignAscents(
   db: Db,
   { priority, batches }: { priority: number; batches: readonly { id: string; hashes: readonly string[] }[] },
 ): Promise<void> {
-  const rows = batches.flatMap(({ id, hashes }) => hashes.map((hash) => ({ id, hash })));
-  if (rows.length === 0) return;
+  const pairs = batches.flatMap(({ id, hashes }) => hashes.map((hash) => [hash, id] as const));
+  if (pairs.length === 0) return;
+  const batchOf = JSON.stringify(Object.fromEntries(pairs));
   await db.execute(sql`
-    update ascent set state = 'waiting', batch_id = new.id, attempts = 0, asked_at = now(),
-      priority = greatest(priority, ${priority}::integer)
-    from jsonb_to_recordset(${JSON.stringify(rows)}::jsonb) as new(id uuid, hash text)
-    where ascent.hash = new.hash`);
+    update ascent set state = 'waiting', batch_id = (${batchOf}::jsonb ->> hash)::uuid, attempts = 0,
+      asked_at = now(), priority = greatest(priority, ${priority}::integer)
+    where ${oneOf(pairs.map(([hash]) => hash))}`);
 }
 
 /**
- * Cancels those of some flights that nobody asks for any longer.
+ * Cancels flights that nobody asks for any longer; they have been locked.
  * @returns the batches that carried them and carry nothing else
  */
-export async function cancelUnasked(db: Db, { hashes }: { hashes: readonly string[] }): Promise<string[]> {
-  if (hashes.length === 0) return [];
-  await lockAscents(db, { hashes });
-  const { rows } = await db.execute<{ batchId: string }>(sql`
-    with cancelled as (
-      update ascent set state = 'cancelled'
-      where ${oneOf(hashes)} and state in ('waiting', 'flying') and not exists (
-        select 1 from ascent_request r where r.hash = ascent.hash and r.cancelled_at is null)
-      returning hash, batch_id)
-    select distinct batch_id as "batchId" from cancelled where batch_id is not null and not exists (
-      select 1 from ascent other where other.batch_id = cancelled.batch_id
-        and other.state in ('waiting', 'flying') and other.hash not in (select hash from cancelled))`);
-  return rows.map(({ batchId }) => batchId);
+export async function cancelFlights(db: Db, { hashes }: { hashes: readonly string[] }): Promise<string[]> {
+  const rows = await db
+    .update(ascent)
+    .set({ state: 'cancelled' })
+    .where(and(oneOf(hashes), underWay))
+    .returning({ batchId: ascent.batchId });
+  const batchIds = [...new Set(rows.flatMap(({ batchId }) => batchId ?? []))];
+  const busy = await db
+    .selectDistinct({ batchId: ascent.batchId })
+    .from(ascent)
+    .where(and(sql`${ascent.batchId} = any(${sql.param(batchIds)}::uuid[])`, underWay));
+  const stillNeeded = new Set(busy.map(({ batchId }) => batchId));
+  return batchIds.filter((batchId) => !stillNeeded.has(batchId));
 }
 
-/** States and results, without trajectories, of those hashes that were ever asked for. */
+/** States of those hashes that were ever asked for. */
 export function findAscents(db: Db, { hashes }: { hashes: readonly string[] }) {
   return db
     .select({
       hash: ascent.hash,
       state: ascent.state,
-      failures: ascent.failures,
-      outcome: ascent.outcome,
+      priority: ascent.priority,
+      askedAt: ascent.askedAt,
       finishedAt: ascent.finishedAt,
+      reason: sql<string | null>`${ascent.failures} -> -1 ->> 'reason'`,
     })
     .from(ascent)
     .where(oneOf(hashes));
 }
 
+/** Results, without trajectories, of hashes. */
+export function findOutcomes(db: Db, { hashes }: { hashes: readonly string[] }) {
+  return db
+    .select({ hash: ascent.hash, outcome: ascent.outcome })
+    .from(ascent)
+    .where(and(oneOf(hashes), eq(ascent.state, 'done')));
+}
+
 /** Over how long the pace of flying is taken. */
 const PACE_SECONDS = 30;
 
+/** How many flights of the whole queue come before the last of a priority that was asked for at a time, and it. */
+export async function countAhead(db: Db, last: { priority: number; askedAt: Date }): Promise<number> {
+  const [row] = await db
+    .select({ n: count() })
+    .from(ascent)
+    .where(
+      and(
+        underWay,
+        or(
+          gt(ascent.priority, last.priority),
+          and(eq(ascent.priority, last.priority), lte(ascent.askedAt, last.askedAt)),
+        ),
+      ),
+    );
+  return row?.n ?? 0;
+}
+
 /**
- * How many flights are before and among a study's own that are under way, and how many a second were flown of late.
- * The pace is counted from when the oldest that counts was asked for, so that a queue that has just begun is not
- * taken for a slow one.
+ * How many flights a second were flown of late, by all workers; null where none were. It is counted from when the
+ * first of them was asked for, so that a queue that has just begun is not taken for a slow one.
  */
-export async function queueAhead(db: Db, { studyId }: { studyId: string }) {
-  const { rows } = await db.execute<{ ahead: number; perSecond: number | null }>(sql`
-    with mine as (
-      select min(a.priority) as priority, max(a.asked_at) as asked_at
-      from ascent a join ascent_request r on r.hash = a.hash
-      where r.study_id = ${studyId} and r.cancelled_at is null and a.state in ('waiting', 'flying')),
-    late as (
-      select count(*) as flown, extract(epoch from now() - greatest(
-        min(asked_at), now() - make_interval(secs => ${PACE_SECONDS}))) as seconds
-      from ascent where state = 'done' and finished_at > now() - make_interval(secs => ${PACE_SECONDS}))
-    select
-      (select count(*) from ascent a, mine where a.state in ('waiting', 'flying') and (a.priority > mine.priority
-        or (a.priority = mine.priority and a.asked_at <= mine.asked_at)))::integer as ahead,
-      (select flown / nullif(seconds, 0) from late where flown > 0)::float8 as "perSecond"`);
-  const [row] = rows;
-  return row ?? { ahead: 0, perSecond: null };
+export async function recentPace(db: Db): Promise<number | null> {
+  const window = sql`now() - make_interval(secs => ${PACE_SECONDS})`;
+  const [row] = await db
+    .select({
+      pace: sql<
+        number | null
+      >`(count(*) / nullif(extract(epoch from now() - greatest(min(${ascent.askedAt}), ${window})), 0))::float8`,
+    })
+    .from(ascent)
+    .where(and(eq(ascent.state, 'done'), sql`${ascent.finishedAt} > ${window}`));
+  return row?.pace || null;
 }

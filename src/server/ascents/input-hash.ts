@@ -10,11 +10,9 @@ import {
 import type { StudyInputs } from '#contract/study-inputs.ts';
 import type { VehicleInput } from '#contract/vehicle.ts';
 
-/** SHA-256, in hexadecimal, of a value's canonical JSON (RFC 8785). */
-const sha256 = (value: unknown): string =>
-  createHash('sha256')
-    .update(canonicalize(value) ?? '', 'utf8')
-    .digest('hex');
+/** Canonical JSON (RFC 8785). */
+const canonical = (value: unknown): string => canonicalize(value) ?? '';
+const sha256 = (text: string): string => createHash('sha256').update(text, 'utf8').digest('hex');
 
 /** The hash of a vehicle as it is flown: its names and its entered losses are not flown with. */
 export function vehicleHash({
@@ -23,7 +21,7 @@ export function vehicleHash({
   lossesMps: _losses,
   ...flown
 }: VehicleInput): string {
-  return sha256(flown);
+  return sha256(canonical(flown));
 }
 
 const siteOf = ({ latitudeDeg, longitudeDeg, elevationM, permittedAzimuthsDeg }: AscentSite): AscentSite => ({
@@ -52,22 +50,28 @@ export interface PairTask {
 
 /**
  * Every site and orbit of a study as flights, each by the SHA-256 of its canonical inputs: method, site, orbit and
- * settings, and the vehicle by its own hash, so that twenty thousand are hashed without writing the vehicle out as
- * often.
+ * settings, and the vehicle by its own hash. Canonical JSON has its keys in order, so that of twenty thousand pairs
+ * each part is written out once and the whole is put together from them.
  */
 export function pairTasks(
   { sites, orbits, ...inputs }: Pick<StudyInputs, 'sites' | 'orbits' | 'settings'>,
   vehicle: VehicleInput,
 ): PairTask[] {
-  const flown = vehicleHash(vehicle);
   const settings = ascentSettings(inputs.settings);
-  const targets = orbits.map((orbit) => ({ orbitId: orbit.orbitId, orbit: orbitOf(orbit) }));
+  const head = `{"method":${ASCENT_METHOD},"orbit":`;
+  const tail = `,"vehicle":"${vehicleHash(vehicle)}"}`;
+  const targets = orbits.map(({ orbitId, ...row }) => {
+    const orbit = orbitOf(row);
+    return { orbitId, orbit, text: `${head}${canonical(orbit)},"settings":${canonical(settings)},"site":` };
+  });
   return sites.flatMap((row) => {
     const site = siteOf(row);
-    return targets.map(({ orbitId, orbit }) => {
-      const task = { site, orbit, settings };
-      const hash = sha256({ method: ASCENT_METHOD, ...task, vehicle: flown });
-      return { siteId: row.siteId, orbitId, hash, task };
-    });
+    const rest = canonical(site) + tail;
+    return targets.map(({ orbitId, orbit, text }) => ({
+      siteId: row.siteId,
+      orbitId,
+      hash: sha256(text + rest),
+      task: { site, orbit, settings },
+    }));
   });
 }
