@@ -132,9 +132,10 @@ describe('what is said of a flight', () => {
   test('progress counts what is asked for, and what is open', () => {
     const counts = { current: 10, stale: 3, waiting: 4, flying: 1, failed: 2, cancelled: 1, missing: 5 };
     expect(progressOf(counts)).toEqual({ underWay: 5, done: 12, asked: 17, open: 11, all: 26 });
-    expect([timeLeft(null), timeLeft(1), timeLeft(8), timeLeft(41), timeLeft(200)]).toEqual([
+    expect([null, 0, 0.4, 8, 41, 200].map(timeLeft)).toEqual([
       'the time left is not known yet',
-      'nearly done',
+      'the time left is not known yet',
+      'about 1 s left',
       'about 8 s left',
       'about 45 s left',
       'about 4 min left',

@@ -52,11 +52,10 @@ export function progressOf(counts: Counts): Progress {
   return { underWay, done, asked: done + underWay, open, all: counts.current + open + underWay };
 }
 
-/** "about 40 s left", "about 3 min left" */
+/** "about 40 s left", "about 3 min left"; of flights that wait, no time at all is none that anybody knows. */
 export function timeLeft(seconds: number | null): string {
-  if (seconds === null) return 'the time left is not known yet';
-  if (seconds < 2) return 'nearly done';
-  if (seconds < 90)
-    return `about ${formatNumber(seconds < 10 ? seconds : Math.ceil(seconds / 5) * 5)} s left`;
+  if (seconds === null || seconds <= 0) return 'the time left is not known yet';
+  if (seconds < 10) return `about ${formatNumber(Math.ceil(seconds))} s left`;
+  if (seconds < 90) return `about ${formatNumber(Math.ceil(seconds / 5) * 5)} s left`;
   return `about ${formatNumber(Math.ceil(seconds / 60))} min left`;
 }
