@@ -2,7 +2,7 @@ import { AscentFigures } from '#contract/ascent-job.ts';
 import type { FlownState } from '#contract/flown-results.ts';
 import type { StudyInputs } from '#contract/study-inputs.ts';
 import type { Db } from '#db/client.ts';
-import { findAscents } from '#db/queries/ascent.ts';
+import { findOutcomes } from '#db/queries/ascent.ts';
 import { pairTasks } from './input-hash.ts';
 import { obstacleOf } from './study-tasks.ts';
 
@@ -21,8 +21,7 @@ export async function readFlownStates(db: Db, inputs: StudyInputs): Promise<Flow
   const states = new Map<string, FlownState>();
   for (let from = 0; from < tasks.length; from += AT_ONCE) {
     const hashes = tasks.slice(from, from + AT_ONCE).map(({ hash }) => hash);
-    for (const { hash, state, outcome } of await findAscents(db, { hashes }))
-      if (state === 'done') states.set(hash, stateOf(outcome));
+    for (const { hash, outcome } of await findOutcomes(db, { hashes })) states.set(hash, stateOf(outcome));
   }
   return sites.map((_, site) =>
     orbits.map((_orbit, orbit) => {
