@@ -1,11 +1,9 @@
 import { PLACE_DENSITY_PER_KM2 } from '#core/downrange/index.ts';
 import { CasualtyAreasMi2, CorridorOutput, VehicleClass } from './corridor.ts';
+import { LONGEST_KM, SHORTEST_KM } from './downrange-range.ts';
 import { LatitudeDeg, LongitudeDeg } from './geography.ts';
 import { z } from './zod.ts';
 
-/** 20 and 5,000 nautical miles, as corridors have it. */
-export const SHORTEST_KM = 37.04;
-export const LONGEST_KM = 9260;
 /** More settlements than this are counted, not listed. */
 export const MOST_SETTLEMENTS = 2000;
 export const MOST_PLACES = 1000;
@@ -75,6 +73,7 @@ export const FanSpoke = z.strictObject({
   firstLandName: z.string().nullable(),
   people: z.int().meta({ description: 'Of the listed settlements in the corridor' }),
   settlements: z.int(),
+  settlementsWithoutFigure: z.int().meta({ description: 'Of these: their people are unknown, not none' }),
   spreadPeople: z.number().nullable(),
   unknownPeopleLandKm2: z.number().nullable(),
   excludedPeople: z.int().meta({ description: 'Of the settlements in the overflight exclusion zone' }),

@@ -2,7 +2,15 @@
 import type { StudyRole, StudyState } from './study.ts';
 
 /** The sections of a study that exist, in the order of the work. A section that is not built has no key. */
-export const SECTION_KEYS = ['requirement', 'sites', 'flight', 'criteria', 'ranking', 'memo'] as const;
+export const SECTION_KEYS = [
+  'requirement',
+  'sites',
+  'flight',
+  'downrange',
+  'criteria',
+  'ranking',
+  'memo',
+] as const;
 export type SectionKey = (typeof SECTION_KEYS)[number];
 
 export interface SectionFrame {

@@ -1,4 +1,5 @@
-import { VEHICLE_CLASSES, classOfVehicle, type VehicleClass } from '#core/downrange/index.ts';
+import { classOfVehicle } from '#core/downrange/class-of-vehicle.ts';
+import { VEHICLE_CLASSES, type VehicleClass } from '#core/downrange/vehicle-class.ts';
 import type { StudyInputs } from './study-inputs.ts';
 import { toVehicle } from './to-core.ts';
 

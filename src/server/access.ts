@@ -40,6 +40,7 @@ export const ROUTES: Readonly<Record<string, RouteRules>> = {
   '/studies/[studyId]/requirement': { GET: 'study:read' },
   '/studies/[studyId]/sites': { GET: 'study:read' },
   '/studies/[studyId]/flight': { GET: 'study:read' },
+  '/studies/[studyId]/downrange': { GET: 'study:read' },
   '/studies/[studyId]/criteria': { GET: 'study:read' },
   '/studies/[studyId]/ranking': { GET: 'study:read' },
   '/studies/[studyId]/memo': { GET: 'study:read' },

@@ -48,6 +48,7 @@ test('a blank study says what is to be done', async () => {
     requirement: { fact: 'to be written', outstanding: true },
     sites: { fact: 'none yet', outstanding: true },
     flight: { fact: 'no results yet', outstanding: true },
+    downrange: { fact: 'no sites yet', outstanding: true },
     criteria: { fact: 'none yet', outstanding: true },
     ranking: { fact: 'nothing to rank', outstanding: true },
     memo: { fact: 'draft', outstanding: false },
@@ -61,6 +62,7 @@ test('the example says what there is, and the ranking follows the study’s chan
     requirement: { fact: '5 orbits, Rowan M', outstanding: false },
     sites: { fact: '12 candidates' },
     flight: { fact: '60 results' },
+    downrange: { fact: 'corridors: screening', outstanding: false },
     criteria: { fact: '7, weights set', outstanding: false },
     ranking: { fact: '1 incomplete', outstanding: true },
   });

@@ -20,6 +20,8 @@ export interface SiteMapProps extends Omit<MapScene, 'draft'> {
   onPlace: (place: LngLat) => void;
   /** Saves the chosen pad's sectors; left out where they may not be changed. */
   onSectors?: ((siteId: string, sectors: readonly SectorDeg[]) => Promise<void>) | undefined;
+  /** Hands out the drawn map, for a section that adds layers of its own; null when it goes. */
+  onView?: ((view: MapView | null) => void) | undefined;
 }
 
 const projections = [
@@ -65,7 +67,11 @@ function useMapView(props: SiteMapProps, scene: MapScene) {
       },
     );
     setView(made);
-    return () => made.remove();
+    latest.current.onView?.(made);
+    return () => {
+      latest.current.onView?.(null);
+      made.remove();
+    };
   }, []);
 
   useEffect(() => view?.setScene(scene), [view, scene]);

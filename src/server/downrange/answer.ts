@@ -36,6 +36,7 @@ const spokeOf = ({ map }: World, spoke: Spoke): StudyFan['spokes'][number] => ({
   firstLandName: spoke.first.land && map.country(spoke.first.land.country).name,
   people: spoke.people,
   settlements: spoke.settlements,
+  settlementsWithoutFigure: spoke.withoutFigure,
   spreadPeople: spoke.spread && spoke.spread.people,
   unknownPeopleLandKm2: spoke.spread && spoke.spread.unknownLand / 1e6,
   excludedPeople: spoke.excludedPeople,

@@ -34,6 +34,10 @@ const factsOf = (row: Row, ranking: Fact): Record<SectionKey, Fact> => ({
     fact: row.sites * row.orbits === 0 ? 'no results yet' : formatCount(row.sites * row.orbits, 'result'),
     outstanding: row.sites * row.orbits === 0,
   },
+  downrange: {
+    fact: row.sites === 0 ? 'no sites yet' : 'corridors: screening',
+    outstanding: row.sites === 0,
+  },
   criteria: criteriaFact(row),
   ranking,
   memo: { fact: 'draft', outstanding: false },
@@ -43,6 +47,7 @@ const NAMES: Record<SectionKey, string> = {
   requirement: 'Requirement',
   sites: 'Sites',
   flight: 'Flight',
+  downrange: 'Downrange',
   criteria: 'Criteria',
   ranking: 'Ranking',
   memo: 'Memo',
