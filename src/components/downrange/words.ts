@@ -17,9 +17,10 @@ export const km = (length: number): string => `${formatNumber(length, length < 1
 export const roughly = (people: number): string =>
   formatNumber(people < 1000 ? Math.round(people) : Number(people.toPrecision(3)));
 
-/** A small number as casualties are expected in: 1.6 × 10⁻³ */
+/** A small number as casualties are expected in: 1.63 × 10⁻³; plain from 0.1 to 1,000. */
 export function formatPower(value: number): string {
   if (value === 0) return '0';
+  if (value >= 0.1 && value < 1000) return formatNumber(value, value < 10 ? 2 : 0);
   const [digits = '', exponent = '0'] = value.toExponential(2).split('e');
   const raised = [...String(Number(exponent))]
     .map((digit) => (digit === '-' ? '⁻' : ('⁰¹²³⁴⁵⁶⁷⁸⁹'[Number(digit)] ?? '')))
@@ -62,7 +63,7 @@ export function zoneFinding({ settlements, people, settlementsWithoutFigure, spr
       : '';
   const spread =
     spreadPeople !== null && spreadPeople >= 1
-      ? `; about ${roughly(spreadPeople)} more are spread over its land`
+      ? `; about ${roughly(spreadPeople)} ${settlements === 0 ? '' : 'more '}people are spread over its land`
       : '';
   return `${listed}${unknown}${spread}.`;
 }

@@ -43,7 +43,10 @@ describe('the finding', () => {
     type Zone = Parameters<typeof zoneFinding>[0];
     const zone = { settlements: 2, people: 300, settlementsWithoutFigure: 1, spreadPeople: 12.4 } as Zone;
     expect(zoneFinding(zone)).toBe(
-      'The overflight exclusion zone holds 2 listed settlements with 300 people, 1 of them without a figure; about 12 more are spread over its land.',
+      'The overflight exclusion zone holds 2 listed settlements with 300 people, 1 of them without a figure; about 12 more people are spread over its land.',
+    );
+    expect(zoneFinding({ ...zone, settlements: 0, people: 0, settlementsWithoutFigure: 0 })).toBe(
+      'The overflight exclusion zone holds no listed settlement; about 12 people are spread over its land.',
     );
   });
 
@@ -57,11 +60,12 @@ describe('the finding', () => {
 });
 
 test('small numbers stand with their power of ten', () => {
-  expect([1.6251e-3, 1e-4, 0, 5.445e-8].map(formatPower)).toEqual([
+  expect([1.6251e-3, 1e-4, 0, 5.445e-8, 1.908].map(formatPower)).toEqual([
     '1.63 × 10⁻³',
     '1.00 × 10⁻⁴',
     '0',
     '5.45 × 10⁻⁸',
+    '1.91',
   ]);
   expect([12.4, 1234.5, 2_345_678].map(roughly)).toEqual(['12', '1,230', '2,350,000']);
 });
