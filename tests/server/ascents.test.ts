@@ -241,6 +241,7 @@ test('a worker that is stopped lets the flight under way end and hands back the 
   await until(trial, { flying: 1, waiting: 2 });
   await stopped.stop();
   expect(await counts(trial)).toEqual({ current: 1, waiting: 2 });
+  expect((await read(trial)).secondsLeft).toBeGreaterThan(0);
   const flown = worker();
   await until(trial, { current: 3 });
   expect(latitudes(flown)).toEqual([57, 58]);

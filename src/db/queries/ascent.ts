@@ -1,4 +1,4 @@
-import { and, count, eq, gt, inArray, lte, ne, or, sql, type SQL } from 'drizzle-orm';
+import { and, count, eq, gt, inArray, lt, ne, or, sql, type SQL } from 'drizzle-orm';
 import type { Db } from '../client.ts';
 import { ascent, ascentVehicle, type AscentFailure } from '../schema/ascent.ts';
 
@@ -202,6 +202,8 @@ const PACE_SECONDS = 30;
 
 /** How many flights of the whole queue come before the last of a priority that was asked for at a time, and it. */
 export async function countAhead(db: Db, last: { priority: number; askedAt: Date }): Promise<number> {
+  // A Date leaves out what the column holds below a millisecond.
+  const after = new Date(last.askedAt.getTime() + 1);
   const [row] = await db
     .select({ n: count() })
     .from(ascent)
@@ -210,7 +212,7 @@ export async function countAhead(db: Db, last: { priority: number; askedAt: Date
         underWay,
         or(
           gt(ascent.priority, last.priority),
-          and(eq(ascent.priority, last.priority), lte(ascent.askedAt, last.askedAt)),
+          and(eq(ascent.priority, last.priority), lt(ascent.askedAt, after)),
         ),
       ),
     );
