@@ -2,6 +2,7 @@ import type { APIContext } from 'astro';
 import { z } from 'zod';
 import { AppError, type FieldError } from '#server/errors.ts';
 import { logError } from '#server/log.ts';
+import { storable } from '#server/storable.ts';
 
 /** An answer as RFC 9457 problem details. */
 export function problem(error: AppError, requestId?: string): Response {
@@ -84,18 +85,21 @@ const MAX_JSON_BYTES = 32 * 1024 * 1024;
 export async function readJson<T extends z.ZodType>(request: Request, schema: T): Promise<z.output<T>> {
   if (Number(request.headers.get('content-length') ?? 0) > MAX_JSON_BYTES)
     throw new AppError('too-large', 'The request is larger than 32 MB. Nothing was read.');
-  let body: unknown;
+  let [text, body]: [string, unknown] = ['', null];
   try {
-    body = JSON.parse(await request.text());
+    text = await request.text();
+    body = JSON.parse(text);
   } catch (cause) {
     throw new AppError('malformed-json', 'The body is not JSON. Nothing was saved.', { cause });
   }
-  return schema.parse(body);
+  const input = schema.parse(body);
+  // JSON as it travels writes what cannot be kept as an escape, never as it is.
+  return text.includes('\\u') ? storable(input) : input;
 }
 
-/** Reads and checks what the address asks for. @throws ZodError */
+/** Reads and checks what the address asks for; a parameter left empty is one left out. @throws AppError, ZodError */
 export const readQuery = <T extends z.ZodType>(url: URL, schema: T): z.output<T> =>
-  schema.parse(Object.fromEntries(url.searchParams));
+  storable(schema.parse(Object.fromEntries([...url.searchParams].filter(([, value]) => value !== ''))));
 
 /**
  * The version a write is based on: `If-Match` with the ETag, or `version` in the body.
