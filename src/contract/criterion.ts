@@ -106,13 +106,15 @@ export function levelFault(direction: 'more' | 'less', levels: CriterionLevels):
 }
 
 interface Levelled {
-  direction?: 'more' | 'less' | undefined;
+  direction?: Criterion['direction'] | undefined;
   levels?: CriterionLevels | undefined;
 }
-const levelsFit = (ctx: z.core.ParsePayload<Levelled>): void => {
-  const { direction: way, levels } = ctx.value;
+const refuseLevels = (ctx: z.core.ParsePayload, { direction: way, levels }: Levelled): void => {
   const fault = way && levels ? levelFault(way, levels) : null;
   if (fault) ctx.issues.push({ code: 'custom', message: fault, path: ['levels', 'best'], input: levels });
+};
+const levelsFit = (ctx: z.core.ParsePayload<Levelled>): void => {
+  refuseLevels(ctx, ctx.value);
 };
 
 const settings = {
@@ -140,7 +142,10 @@ export const ComputedInput = z
       scope === 'orbit' ? 'Choose the orbit it is for.' : 'It is for the whole manifest, not one orbit.';
     ctx.issues.push({ code: 'custom', message, path: ['orbitId'], input: orbitId });
   })
-  .check(levelsFit);
+  .check((ctx) => {
+    const { direction: way, quantity, levels } = ctx.value;
+    refuseLevels(ctx, { direction: way ?? QUANTITIES[quantity].direction, levels });
+  });
 
 export const EnteredInput = z
   .strictObject({ source: z.enum(['entered', 'text']), name, unit: unit.default(''), direction, ...settings })
@@ -153,7 +158,9 @@ export const RatingInput = z
     direction: direction.default('more'),
     steps: steps.default(DEFAULT_STEPS),
     ...settings,
-    levels: CriterionLevels.default({ mode: 'fixed', worst: 0, best: RATING_STEPS - 1 }),
+    levels: CriterionLevels.optional().meta({
+      description: 'Left out: fixed at the first and the last step',
+    }),
   })
   .check(levelsFit);
 
@@ -162,6 +169,14 @@ export const CriterionInput = z
   .meta({ id: 'CriterionInput' });
 export type CriterionInput = z.output<typeof CriterionInput>;
 export type CriterionDraft = z.input<typeof CriterionInput>;
+
+/** The levels of a new criterion; a rating without any runs over all its steps, the way it is better. */
+export function levelsOf({ levels, direction: way }: CriterionInput): CriterionLevels {
+  const last = RATING_STEPS - 1;
+  return (
+    levels ?? { mode: 'fixed', ...(way === 'less' ? { worst: last, best: 0 } : { worst: 0, best: last }) }
+  );
+}
 
 /** Only what is sent changes. `position` moves the criterion there and the others round it. */
 export const CriterionPatch = z

@@ -191,6 +191,13 @@ describe('shape, group and steps', () => {
     });
   });
 
+  test('levels of a computed one run the way its quantity is better, where no direction is given', () => {
+    const levels = { mode: 'fixed', worst: 8_000, best: 9_000 };
+    const given = { source: 'computed', quantity: 'delta-v', levels };
+    expect(CriterionInput.safeParse(given).error?.issues).toMatchObject([{ path: ['levels', 'best'] }]);
+    expect(CriterionInput.safeParse({ ...given, direction: 'more' }).success).toBe(true);
+  });
+
   test('a rating has five named steps, its levels 0 and 4, and keeps unit and source', async () => {
     const member = await studyWith(db, 'engineer');
     const rating = await add(member, { source: 'rating', name: 'Road access' });
@@ -200,6 +207,8 @@ describe('shape, group and steps', () => {
       steps: ['Very poor', 'Poor', 'Fair', 'Good', 'Very good'],
       levels: { mode: 'fixed', worst: 0, best: 4 },
     });
+    const noise = await add(member, { source: 'rating', name: 'Noise', direction: 'less' });
+    expect(noise.levels).toEqual({ mode: 'fixed', worst: 4, best: 0 });
     const steps = ['Track', 'Gravel', 'Two lanes', 'Trunk road', 'Motorway'];
     expect(await patch(member, rating.id, 1, { steps })).toMatchObject({ steps, version: 2 });
     await expect(patch(member, rating.id, 2, { source: 'entered' })).rejects.toMatchObject({

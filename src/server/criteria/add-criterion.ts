@@ -1,4 +1,4 @@
-import type { Criterion, CriterionInput } from '#contract/criterion.ts';
+import { levelsOf, type Criterion, type CriterionInput } from '#contract/criterion.ts';
 import { QUANTITIES, quantityName } from '#contract/quantity.ts';
 import type { Db, PooledDb } from '#db/client.ts';
 import { findOrbitName, insertCriterion, listCriteria, type NewCriterion } from '#db/queries/criterion.ts';
@@ -28,7 +28,7 @@ export async function addCriterion(
       values: {
         ...described,
         nameKey: await freeNameKey(tx, { studyId, name: described.name }),
-        ...levelColumns(input.levels),
+        ...levelColumns(levelsOf(input)),
         shape: input.shape,
         groupId: input.groupId,
         ...limitColumns(input.limit),

@@ -1,4 +1,4 @@
-import { CriterionInput } from '#contract/criterion.ts';
+import { CriterionInput, levelsOf } from '#contract/criterion.ts';
 import { pointsStatement } from '#contract/weights.ts';
 import { QUANTITIES, quantityName } from '#contract/quantity.ts';
 import { OrbitInput } from '#contract/requirement.ts';
@@ -36,7 +36,7 @@ function criterionOf(
   const groupKey = group === undefined ? null : ids.weighed.of(group);
   const orbitKey = orbitCode === undefined ? null : ids.orbits.of(orbitCode);
   const input = CriterionInput.parse(draft.source === 'computed' ? { ...draft, orbitId: orbitKey } : draft);
-  const settings = { ...levelColumns(input.levels), shape: input.shape, ...limitColumns(input.limit) };
+  const settings = { ...levelColumns(levelsOf(input)), shape: input.shape, ...limitColumns(input.limit) };
   if (input.source === 'rating')
     return {
       key,
