@@ -252,7 +252,7 @@ describe('adoption', () => {
     const { studyId, userId } = lead;
     expect(await readWeights(db, { studyId, userId, weights: 'study' })).toMatchObject({
       points: { [cost]: 20, [days]: 80 },
-      origin: { kind: 'apart' },
+      origin: { kind: 'apart', by: { userId, name: lead.name } },
       reason: 'The land was valued anew.',
     });
     expect((await readCriteria(db, { studyId })).find(({ id }) => id === cost)?.limit).toEqual({

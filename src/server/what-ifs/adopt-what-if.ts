@@ -161,7 +161,7 @@ async function writeStudyWeights({
   const statement = statementNow(items, said);
   const { method, points, order, judgements } = before;
   if (kept && isDeepStrictEqual(statement, { method, points, order, judgements })) return;
-  const origin = { kind: 'apart' as const };
+  const origin = { kind: 'apart' as const, by: { userId, name: member.name } };
   const row = await writeWeights(tx, {
     studyId,
     userId: null,
