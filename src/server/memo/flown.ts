@@ -40,14 +40,14 @@ function ascentTable(facts: MemoFacts, { sites }: PrintedSites, at: number, orbi
   return table(
     `Flown ascents to ${orbit.name === '' ? orbit.code : `${orbit.code}, ${orbit.name}`}`,
     [
-      words('Site', 17, true),
+      words('Site', 16, true),
       figures('Heading', '°', 8),
       figures('Relative speed', 'm/s', 9.5),
       figures('Gravity', 'm/s', 8.5),
       figures('Drag', 'm/s', 7.5),
       figures('Steering', 'm/s', 8.5),
-      figures('Back-pressure', 'm/s', 9.5),
-      figures('Centrifugal', 'm/s', 9.5),
+      figures('Back pressure', 'm/s', 9),
+      figures('Centrifugal', 'm/s', 11),
       figures('Ideal Δv', 'sum', 9.5, true),
       figures('Greatest q', 'kPa', 8.5),
       figures('Burn-out', 's', 8),
