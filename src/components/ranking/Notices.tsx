@@ -75,8 +75,8 @@ export function ConnectionNote() {
 export function EstimatesCaution() {
   return (
     <Caution>
-      <b>Estimates for comparing sites, not flight data.</b> Payload and Δv come from closed forms with the
-      losses entered; a ranking is only as good as its figures, criteria and weights.
+      <b>Estimates for comparing sites, not flight data.</b> Payload and Δv come from closed forms, with
+      losses entered or flown by a model; a ranking is only as good as its figures, criteria and weights.
     </Caution>
   );
 }
