@@ -80,6 +80,44 @@ test('sectors that keep within typed limits become the permitted azimuths, and a
   await expect.poll(read).toEqual(site.permittedAzimuthsDeg);
 });
 
+test('sectors changed by someone else meanwhile stand beside yours, and the person chooses', async ({
+  open,
+  baseURL,
+}) => {
+  const page = await open({ person: 'engineer' });
+  page.complaints.expect(/status of 409/);
+  page.complaints.expect(/Failed to load resource/);
+  const { study, site } = await openDownrange(page, baseURL, {
+    title: 'Downrange conflict',
+    query: '&range=1000&clear=400',
+  });
+  const address = `/api/v1/studies/${study}/sites/${site.id}`;
+  const use = page.getByRole('button', { name: 'Use as permitted azimuths' });
+  await expect(use).not.toHaveAttribute('aria-disabled', 'true', { timeout: 30_000 });
+  const text = (await page.locator('.downrange-sectors').textContent()) ?? '';
+  // Nothing tells this page of the other change in time: it can't read the site again.
+  await page.route(`**${address}`, (route) =>
+    route.request().method() === 'GET' ? route.abort() : route.continue(),
+  );
+  const other = await page.request.patch(address, {
+    headers: { ...fromApp(baseURL), 'if-match': `"${site.version}"` },
+    data: { permittedAzimuthsDeg: [[10, 20]] },
+  });
+  expect(other.status()).toBe(200);
+  await use.click();
+  const conflict = page.getByRole('alert').filter({ hasText: 'the permitted azimuths of Tern Head' });
+  await expect(conflict).toContainText('10-20');
+  await expect(conflict).toContainText(text);
+  await conflict.getByRole('button', { name: `Put ${text}` }).click();
+  await expect
+    .poll(async () =>
+      ((await (await page.request.get(address)).json()) as Site).permittedAzimuthsDeg
+        .map(([from, to]) => `${from}-${to}`)
+        .join('; '),
+    )
+    .toBe(text);
+});
+
 test('a reader sees the sectors and may not use them', async ({ open }) => {
   const reader = await open({ person: 'reader' });
   const study = await studyId(reader.request, MAIN_STUDY);

@@ -159,7 +159,7 @@ export function OpenSectors({ studyId, fan, site, parkingKm, address, locked }: 
       )}
       {permitted.conflict && (
         <Conflict
-          what={`${site.name}`}
+          what={`the permitted azimuths of ${site.name}`}
           yours={wordsOf(permitted.conflict.yours)}
           theirs={wordsOf(permitted.conflict.theirs.permittedAzimuthsDeg)}
           by={permitted.conflict.theirs.changedBy ?? undefined}
