@@ -1,7 +1,7 @@
 import { useState } from 'react';
 import { Button } from '#components/ui/Button.tsx';
 import type { RankingSite } from '#contract/ranking.ts';
-import { SiteField, siteMeant } from './SiteField.tsx';
+import { noSiteMeant, SiteField, siteMeant } from './SiteField.tsx';
 
 interface LeaveOutProps {
   /** Those still in. */
@@ -20,7 +20,7 @@ export function LeaveOut({ sites, onLeaveOut }: LeaveOutProps) {
       onSubmit={(event) => {
         event.preventDefault();
         const site = siteMeant(sites, typed);
-        setError(site ? undefined : 'No site of this ranking has that name or code.');
+        setError(site ? undefined : noSiteMeant(typed));
         if (!site) return;
         setTyped('');
         onLeaveOut(site);

@@ -62,3 +62,7 @@ export function siteMeant(sites: readonly RankingSite[], typed: string): Ranking
     sites.find(({ name }) => name.toLowerCase() === sought)
   );
 }
+
+/** Why no site is meant: none was chosen, or what was typed is none's. */
+export const noSiteMeant = (typed: string): string =>
+  typed.trim() === '' ? 'Choose a site.' : 'No site here has that name or code.';

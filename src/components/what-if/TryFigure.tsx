@@ -5,7 +5,7 @@ import type { Criterion } from '#contract/criterion.ts';
 import { readTypedNumber } from '#contract/format.ts';
 import type { RankingFigures, RankingSite } from '#contract/ranking.ts';
 import { figureInFull } from '#contract/what-if-words.ts';
-import { SiteField, siteMeant } from './SiteField.tsx';
+import { noSiteMeant, SiteField, siteMeant } from './SiteField.tsx';
 
 export interface TriedFigure {
   site: RankingSite;
@@ -31,7 +31,7 @@ export function TryFigure({
     return <p className="caption">Every figure of this study is computed; none can be tried by itself.</p>;
   const site = siteMeant(figures.sites, siteText);
   const attempt = (value: number | string | null | undefined): void => {
-    if (!site) setFault({ field: 'site', message: 'No site of this study has that name or code.' });
+    if (!site) setFault({ field: 'site', message: noSiteMeant(siteText) });
     else if (value !== null && typeof value !== 'number')
       setFault({ field: 'value', message: `${typed.trim() || 'Nothing'} is no figure.` });
     else {

@@ -13,7 +13,7 @@ import {
 } from '#components/what-if/draft.ts';
 import { layOut } from '#components/what-if/moves-layout.ts';
 import { RankMoves } from '#components/what-if/RankMoves.tsx';
-import { siteMeant } from '#components/what-if/SiteField.tsx';
+import { noSiteMeant, siteMeant } from '#components/what-if/SiteField.tsx';
 import type { LiveWhatIf } from '#components/what-if/use-what-if.ts';
 import { notAdopted, whatIfLockOf } from '#components/what-if/WhatIfDesk.tsx';
 import { pointsOf, WhatIfWeights } from '#components/what-if/WhatIfWeights.tsx';
@@ -231,7 +231,12 @@ describe('who may do what', () => {
     archived: false,
     ...over,
   });
-  test('readers look on, and nobody tries anything in an archived study', () => {
+  test('where no site is meant the words say whether one was chosen at all', () => {
+  expect(noSiteMeant('  ')).toBe('Choose a site.');
+  expect(noSiteMeant('QQ')).toMatch(/name or code/);
+});
+
+test('readers look on, and nobody tries anything in an archived study', () => {
     expect(whatIfLockOf(viewer({ role: 'reviewer', state: 'in-review' }))).toBeUndefined();
     expect(whatIfLockOf(viewer({ role: 'reader' }))).toMatch(/^A reader/);
     expect(whatIfLockOf(viewer({ archived: true }))).toMatch(/archived/);
