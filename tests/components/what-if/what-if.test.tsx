@@ -232,11 +232,11 @@ describe('who may do what', () => {
     ...over,
   });
   test('where no site is meant the words say whether one was chosen at all', () => {
-  expect(noSiteMeant('  ')).toBe('Choose a site.');
-  expect(noSiteMeant('QQ')).toMatch(/name or code/);
-});
+    expect(noSiteMeant('  ')).toBe('Choose a site.');
+    expect(noSiteMeant('QQ')).toMatch(/name or code/);
+  });
 
-test('readers look on, and nobody tries anything in an archived study', () => {
+  test('readers look on, and nobody tries anything in an archived study', () => {
     expect(whatIfLockOf(viewer({ role: 'reviewer', state: 'in-review' }))).toBeUndefined();
     expect(whatIfLockOf(viewer({ role: 'reader' }))).toMatch(/^A reader/);
     expect(whatIfLockOf(viewer({ archived: true }))).toMatch(/archived/);
