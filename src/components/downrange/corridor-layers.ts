@@ -141,7 +141,16 @@ function layers(): LayerSpecification[] {
       type: 'circle',
       source: 'corridor-dots',
       paint: {
-        'circle-radius': ['get', 'radius'],
+        // Far out the circles shrink, so that a crowded coast does not become one blot.
+        'circle-radius': [
+          'interpolate',
+          ['linear'],
+          ['zoom'],
+          1.5,
+          ['*', 0.3, ['get', 'radius']],
+          6,
+          ['get', 'radius'],
+        ],
         'circle-color': ['case', ['get', 'inside'], settlement, sea],
         'circle-opacity': ['case', ['get', 'inside'], 0.85, 0.4],
         'circle-stroke-color': settlement,
