@@ -1,6 +1,7 @@
 import { eq, sql } from 'drizzle-orm';
 import { afterAll, afterEach, expect, test, vi } from 'vitest';
 import type { AscentTask } from '#contract/ascent-job.ts';
+import type { EvaluateOutput } from '#contract/evaluate.ts';
 import { AscentsQuery } from '#contract/study-ascents.ts';
 import { MOST_ATTEMPTS } from '#db/queries/ascent.ts';
 import { ascent } from '#db/schema/ascent.ts';
@@ -19,6 +20,8 @@ const { readAscent, readAscents } = await import('#server/ascents/read-ascents.t
 const { workAscents } = await import('#server/ascents/work-ascents.ts');
 const { putVehicle, removeVehicle } = await import('#server/requirement/change-vehicle.ts');
 const { readVehicle } = await import('#server/requirement/read-requirement.ts');
+const { changeSettings } = await import('#server/requirement/change-settings.ts');
+const { respondForStudy } = await import('#server/evaluate/respond-for-study.ts');
 const { eventStream } = await import('#server/events/stream.ts');
 const { stopAll } = await import('#server/lifecycle.ts');
 afterAll(stopAll);
@@ -303,4 +306,25 @@ test('what cannot be flown says why and asks for nothing', async () => {
   await expect(ask(trial)).rejects.toMatchObject({ code: 'conflict' });
   await db.update(study).set({ archivedAt: new Date() }).where(eq(study.id, member.studyId));
   await expect(ask(trial)).rejects.toMatchObject({ code: 'study-archived' });
+});
+
+test('with flown losses the evaluation waits for what is not flown, then takes its payload and losses', async () => {
+  const trial = await flownStudy(db, { latitudesDeg: [61.25] });
+  const { member } = trial;
+  await changeSettings(db, { member, version: 1, patch: { losses: 'flown' } });
+  const evaluated = async () => {
+    const { sites } = (await (await respondForStudy(db, member)).json()) as EvaluateOutput;
+    return sites[0];
+  };
+  expect(await evaluated()).toMatchObject({
+    payloadPerYearKg: 0,
+    orbits: [{ payloadKg: null, shortfallMps: null }],
+  });
+  await ask(trial);
+  worker();
+  await until(trial, { current: 1 });
+  // The stand-in carries 1,000 − 4 × 61.25 − 5 kg; required 7,400 − 5 m/s of the ideal 9,000.
+  expect(await evaluated()).toMatchObject({
+    orbits: [{ payloadKg: 750, deltaVMps: { required: 7_395, losses: 1_605, dogleg: 0 } }],
+  });
 });
