@@ -11,7 +11,8 @@ import { endOfTie } from '#core/decision/ties.ts';
 import { closeness } from '#core/decision/topsis.ts';
 import { tornado } from '#core/decision/tornado.ts';
 import type { WeightModel } from '#core/decision/weight-model.ts';
-import type { RankingModel } from './ranking-model.ts';
+import { prepareFigures, rankFigures, type RankingModel } from './ranking-model.ts';
+import type { RankingFigures } from './ranking.ts';
 import type {
   AcceptabilityOf,
   Dominance,
@@ -24,7 +25,7 @@ import type {
 } from './sensitivity.ts';
 import { MOST_DRAWN_SITES } from './sensitivity.ts';
 import { subjectOf, type Subject } from './sensitivity-subject.ts';
-import type { WeightsOf } from './weights.ts';
+import type { WeightsOf, WeightStatement } from './weights.ts';
 
 /** The site ranked first, or the first of those that tie. */
 const LEADER = 0;
@@ -203,4 +204,23 @@ function rankedSites(subject: Subject | null): Sensitivity['sites'] {
     rank: ranks[site] ?? 0,
     value: totals[site] ?? 0,
   }));
+}
+
+/** A study's figures, the weights in question, and how to draw about them: what a thread is given. */
+export interface SensitivityTask {
+  figures: RankingFigures;
+  statement: WeightStatement;
+  weights: WeightsOf;
+  query: DrawQuery;
+}
+
+/** A sensitivity as JSON text in bytes. */
+export function sensitivityBytes({
+  figures,
+  statement,
+  weights,
+  query,
+}: SensitivityTask): Uint8Array<ArrayBuffer> {
+  const model = rankFigures(prepareFigures(figures), statement);
+  return new TextEncoder().encode(JSON.stringify(sensitivityOf(model, weights, query)));
 }

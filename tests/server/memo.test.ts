@@ -10,6 +10,8 @@ import { VehicleInput } from '#contract/vehicle.ts';
 import { addGroup } from '#server/criteria/groups/add-group.ts';
 import { addCriterion } from '#server/criteria/add-criterion.ts';
 import type { Member } from '#server/member.ts';
+import { sensitivityBytes } from '#contract/sensitivity-model.ts';
+import type { RunSensitivity } from '#server/ranking/read-sensitivity.ts';
 import { buildMemo } from '#server/memo/build-memo.ts';
 import { loadPreview } from '#server/memo/load-preview.ts';
 import { outstandingInWords } from '#server/memo/outstanding.ts';
@@ -75,8 +77,11 @@ async function smallStudy(): Promise<Member> {
   return member;
 }
 
+/** The draws, made here and not in a thread: a fresh clone has built none yet. */
+const inPlace: RunSensitivity = (task) => Promise.resolve(sensitivityBytes(task));
+
 const memo = (member: Member, paper: 'a4' | 'letter' = 'a4'): Promise<MemoModel> =>
-  buildMemo(db, { ...member, paper, now });
+  buildMemo(db, { ...member, paper, now }, inPlace);
 const tablesOf = ({ sections }: MemoModel): MemoTable[] =>
   sections.flatMap(({ blocks }) => blocks.flatMap((block) => (block.kind === 'table' ? [block] : [])));
 const rowsOf = (model: MemoModel, caption: RegExp): string[][] =>
@@ -101,21 +106,24 @@ describe('a study’s memo', () => {
     const member = await smallStudy();
     const model = await memo(member);
     expect(
-      await buildMemo(db, {
-        ...member,
-        userId: 'someone else',
-        paper: 'a4',
-        now: new Date('2026-12-01T00:00:00Z'),
-      }),
+      await buildMemo(
+        db,
+        { ...member, userId: 'someone else', paper: 'a4', now: new Date('2026-12-01T00:00:00Z') },
+        inPlace,
+      ),
     ).toEqual(model);
-    const next = await buildMemo(db, { ...member, paper: 'a4', now: new Date('2026-12-02T00:00:00Z') });
+    const next = await buildMemo(
+      db,
+      { ...member, paper: 'a4', now: new Date('2026-12-02T00:00:00Z') },
+      inPlace,
+    );
     expect(next.titleBlock.date).toBe('2026-12-02');
   });
 
   test.each(['no sites', 'nothing at all'])('says in words what is missing: %s', async (kind) => {
     const member = kind === 'no sites' ? await studyWith(db, 'lead') : await studyWith(db, 'engineer');
     if (kind === 'no sites') await putVehicle(db, { member, version: 0, input: { vehicle } });
-    const preview = await loadPreview(db, { ...member, paper: 'a4', now });
+    const preview = await loadPreview(db, { ...member, paper: 'a4', now }, inPlace);
     expect(preview.model.finding).toBe('No recommendation: the study has no candidate sites yet');
     expect(preview.outstanding.map(({ text }) => text)).toContain('there are no candidate sites');
     expect(outstandingInWords(preview.outstanding)?.lead).toMatch(/^(Four|Five) things to settle first:$/);

@@ -2,26 +2,21 @@ import { expect, test } from 'vitest';
 import { CriterionInput } from '#contract/criterion.ts';
 import { prepareFigures, rankFigures } from '#contract/ranking-model.ts';
 import { Sensitivity, SensitivityQuery } from '#contract/sensitivity.ts';
-import { sensitivityOf } from '#contract/sensitivity-model.ts';
+import { sensitivityBytes, sensitivityOf } from '#contract/sensitivity-model.ts';
 import { SiteInput } from '#contract/site.ts';
 import { pointsStatement } from '#contract/weights.ts';
 import { addCriterion } from '#server/criteria/add-criterion.ts';
 import { readFigures } from '#server/ranking/read-ranking.ts';
-import { respondWithSensitivity } from '#server/ranking/read-sensitivity.ts';
+import { respondWithSensitivity, type RunSensitivity } from '#server/ranking/read-sensitivity.ts';
 import { addSite } from '#server/sites/add-site.ts';
 import { saveWeights } from '#server/weights/save-weights.ts';
-import type { SensitivityTask } from '#worker/sensitivity-thread.ts';
 import { testDatabase } from '#tests/support/database.ts';
 import { studyWith } from '#tests/support/study.ts';
 
 const { db } = await testDatabase();
 
 /** What the thread does, without the thread. */
-const inPlace = (task: unknown): Promise<Uint8Array<ArrayBuffer>> => {
-  const { figures, statement, weights, query } = task as SensitivityTask;
-  const answer = sensitivityOf(rankFigures(prepareFigures(figures), statement), weights, query);
-  return Promise.resolve(new TextEncoder().encode(JSON.stringify(answer)));
-};
+const inPlace: RunSensitivity = (task) => Promise.resolve(sensitivityBytes(task));
 
 test('a study’s sensitivity is that of its figures and the weights asked for, to the last digit', async () => {
   const member = await studyWith(db, 'lead');

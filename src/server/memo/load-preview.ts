@@ -1,5 +1,6 @@
 import type { MemoModel, MemoPaper } from '#contract/memo.ts';
 import type { PooledDb } from '#db/client.ts';
+import type { RunSensitivity } from '#server/ranking/read-sensitivity.ts';
 import { loadMemoFacts } from './build-memo.ts';
 import { candidatesMap } from './candidates.ts';
 import { composeMemo } from './compose.ts';
@@ -21,8 +22,9 @@ const NARROW = 232;
 export async function loadPreview(
   db: PooledDb,
   asked: { studyId: string; userId: string; paper: MemoPaper; now: Date },
+  run?: RunSensitivity,
 ): Promise<MemoPreview> {
-  const facts = await loadMemoFacts(db, asked);
+  const facts = await loadMemoFacts(db, asked, run);
   const printed = printedSites(facts);
   const draw = (width: number) => candidatesMap(facts, printed, width);
   return {

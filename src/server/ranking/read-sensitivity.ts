@@ -1,5 +1,5 @@
 import type { SensitivityQuery } from '#contract/sensitivity.ts';
-import type { SensitivityTask } from '#worker/sensitivity-thread.ts';
+import type { SensitivityTask } from '#contract/sensitivity-model.ts';
 import type { PooledDb } from '#db/client.ts';
 import { runInThread } from '#server/threads.ts';
 import { rankingFigures } from './figures.ts';
