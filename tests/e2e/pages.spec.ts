@@ -3,7 +3,16 @@ import type { Page } from '@playwright/test';
 import { expect, test, type Person } from './support/test.ts';
 import { MAIN_STUDY, studyId } from './support/studies.ts';
 
-const SECTIONS = ['requirement', 'sites', 'flight', 'downrange', 'criteria', 'ranking', 'memo', 'members'] as const;
+const SECTIONS = [
+  'requirement',
+  'sites',
+  'flight',
+  'downrange',
+  'criteria',
+  'ranking',
+  'memo',
+  'members',
+] as const;
 
 /** Every page, with someone who may see it. `{study}` stands for the demo's main study. */
 const PAGES: readonly { name: string; address: string; person: Person | null; status?: number }[] = [
