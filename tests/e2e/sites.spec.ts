@@ -50,6 +50,8 @@ test('a cell is edited by the keyboard, in degrees, minutes and seconds', async 
   await expect
     .poll(async () => (await sitesOf(page, study)).find(({ name }) => name === 'Tern Head')?.version)
     .toBe(2);
+  // The database knows of the change a moment before the page does and hands the keyboard back to the grid.
+  await expect(cell(page, 'Tern Head', 3)).toBeFocused();
   await page.keyboard.press('ArrowDown');
   await expect(cell(page, 'Pointe Rovana', 3)).toBeFocused();
 });
