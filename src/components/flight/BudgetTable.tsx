@@ -1,11 +1,12 @@
 import { useId } from 'react';
 import { ChartPatterns } from '#components/ui/index.ts';
-import { formatFull, formatLatitude, formatNumber } from '#contract/format.ts';
+import { formatFull, formatNumber } from '#contract/format.ts';
 import type { VehicleInput } from '#contract/vehicle.ts';
 import { BAR_WIDTH, BudgetBar, barAt } from './BudgetBar.tsx';
 import { budgetScale, type BudgetScale } from './budget.ts';
 import type { FlightRow } from './rows.ts';
 import { turnCostMps, wayInWords } from './words.ts';
+import { SiteHead } from './SiteHead.tsx';
 
 interface BudgetTableProps {
   rows: readonly FlightRow[];
@@ -109,14 +110,7 @@ export function BudgetTable({ rows, losses, hasVehicle, chosenCode, onChoose }: 
               data-set-aside={result.way === 'out-of-reach' ? '' : undefined}
             >
               <th scope="row">
-                <button type="button" className="text-left" onClick={() => onChoose(site.code)}>
-                  <span className="name max-w-56 truncate" title={site.name}>
-                    {site.name}
-                  </span>
-                </button>
-                <span className="sub num">
-                  {site.code} {formatLatitude(site.latitudeDeg)}
-                </span>
+                <SiteHead site={site} onChoose={onChoose} />
                 <span className="sub tablet:hidden">{wayInWords(result)}</span>
               </th>
               <td className="whitespace-nowrap text-ink-2 max-tablet:hidden">{wayInWords(result)}</td>

@@ -1,10 +1,11 @@
 import { useState } from 'react';
 import { Button } from '#components/ui/index.ts';
 import type { OrbitResult } from '#contract/evaluate.ts';
-import { formatCount, formatFull, formatLatitude, formatNumber } from '#contract/format.ts';
+import { formatCount, formatFull, formatNumber } from '#contract/format.ts';
 import type { InputOrbit } from '#contract/study-inputs.ts';
 import type { ManifestRow } from './rows.ts';
 import { nameOf, wayInWords } from './words.ts';
+import { SiteHead } from './SiteHead.tsx';
 
 const ROWS_AT_FIRST = 50;
 
@@ -56,14 +57,7 @@ export function ManifestTable({ rows, orbits, hasVehicle, chosenCode, onChoose }
             {rows.slice(0, count).map(({ site, results, payloadPerYearKg }) => (
               <tr key={site.siteId} aria-selected={site.code === chosenCode}>
                 <th scope="row">
-                  <button type="button" className="text-left" onClick={() => onChoose(site.code)}>
-                    <span className="name max-w-56 truncate" title={site.name}>
-                      {site.name}
-                    </span>
-                  </button>
-                  <span className="sub num">
-                    {site.code} {formatLatitude(site.latitudeDeg)}
-                  </span>
+                  <SiteHead site={site} onChoose={onChoose} />
                 </th>
                 <td className="num font-medium">
                   {payloadPerYearKg === null ? '–' : formatNumber(payloadPerYearKg / 1000, 1)}

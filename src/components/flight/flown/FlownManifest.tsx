@@ -1,11 +1,12 @@
 import { useState } from 'react';
 import { Button, TableScroll } from '#components/ui/index.ts';
-import { formatCount, formatFull, formatLatitude, formatNumber } from '#contract/format.ts';
+import { formatCount, formatFull, formatNumber } from '#contract/format.ts';
 import type { StudyAscent } from '#contract/study-ascents.ts';
 import type { InputOrbit } from '#contract/study-inputs.ts';
 import { nameOf } from '../words.ts';
 import type { FlownYear } from './results.ts';
 import { stateInWords } from './words.ts';
+import { SiteHead } from '../SiteHead.tsx';
 
 const ROWS_AT_FIRST = 50;
 
@@ -59,14 +60,7 @@ export function FlownManifest({ years, orbits, chosenCode, onChoose }: FlownMani
             {years.slice(0, count).map(({ site, ascents, payloadPerYearKg }) => (
               <tr key={site.siteId} aria-selected={site.code === chosenCode}>
                 <th scope="row">
-                  <button type="button" className="text-left" onClick={() => onChoose(site.code)}>
-                    <span className="name max-w-56 truncate" title={site.name}>
-                      {site.name}
-                    </span>
-                  </button>
-                  <span className="sub num">
-                    {site.code} {formatLatitude(site.latitudeDeg)}
-                  </span>
+                  <SiteHead site={site} onChoose={onChoose} />
                 </th>
                 <td className="num font-medium">
                   {payloadPerYearKg === null ? '–' : formatNumber(payloadPerYearKg / 1000, 1)}

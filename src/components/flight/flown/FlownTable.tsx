@@ -1,9 +1,10 @@
 import { useState } from 'react';
 import { Button, TableScroll } from '#components/ui/index.ts';
-import { formatCount, formatFull, formatLatitude, formatNumber } from '#contract/format.ts';
+import { formatCount, formatFull, formatNumber } from '#contract/format.ts';
 import { closedSums } from '#core/printed/closing.ts';
 import { ACCOUNT_LINES, accountOf, type FlownRow } from './results.ts';
 import { stateInWords } from './words.ts';
+import { SiteHead } from '../SiteHead.tsx';
 
 const ROWS_AT_FIRST = 50;
 
@@ -71,14 +72,7 @@ export function FlownTable({ rows, label, enteredKg, chosenCode, onChoose }: Flo
                   data-stale={ascent?.figuresAreStale ? '' : undefined}
                 >
                   <th scope="row">
-                    <button type="button" className="text-left" onClick={() => onChoose(site.code)}>
-                      <span className="name max-w-56 truncate" title={site.name}>
-                        {site.name}
-                      </span>
-                    </button>
-                    <span className="sub num">
-                      {site.code} {formatLatitude(site.latitudeDeg)}
-                    </span>
+                    <SiteHead site={site} onChoose={onChoose} />
                     {words && <span className="sub max-w-72">{words}</span>}
                   </th>
                   <td className="num font-medium" title={payload === null ? undefined : formatFull(payload)}>
