@@ -171,4 +171,11 @@ describe('with flown losses', () => {
     expect(JSON.stringify(model)).toContain('2 ascents of the listed sites are not flown yet');
     expect(JSON.stringify(model)).not.toContain('no ascent is flown');
   });
+
+  test('the sources of the flown method are printed, and only where it is used', () => {
+    const atmosphere = 'U.S. Standard Atmosphere 1976 (NOAA-S/T 76-1562)';
+    expect(JSON.stringify(titled(model, /^Sources of the method/))).toContain(atmosphere);
+    const entered = composeMemo(inventedFacts({ sites: 2 }));
+    expect(JSON.stringify(entered)).not.toContain(atmosphere);
+  });
 });

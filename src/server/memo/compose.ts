@@ -47,7 +47,7 @@ function sectionsOf(facts: MemoFacts): MemoSection[] {
       blocks: [estimates(facts), ...flightBlocks(facts, printed)],
     },
     { id: 'entered', heading: 'Entered figures, sources and evidence', blocks: enteredBlocks(facts) },
-    { id: 'method', heading: 'Method and constants', blocks: methodBlocks() },
+    { id: 'method', heading: 'Method and constants', blocks: methodBlocks(facts) },
     { id: 'cautions', heading: 'Cautions', blocks: cautionBlocks(facts) },
     { id: 'recompute', heading: 'How to recompute it', blocks: recomputeBlocks(facts) },
     { id: 'attributions', heading: 'Data and type', blocks: attributionBlocks() },

@@ -1,8 +1,9 @@
 import { constants } from '#core/constants.ts';
-import { references, studyReferences, weighingReferences } from '#core/references.ts';
+import { ascentReferences, references, studyReferences, weighingReferences } from '#core/references.ts';
 import { formatNumber } from '#contract/format.ts';
 import type { MemoBlock, MemoFormulas, MemoTable } from '#contract/memo.ts';
 import { cell, figures, row, table, words } from './cells.ts';
+import type { MemoFacts } from './facts.ts';
 
 const FLIGHT: MemoFormulas['items'] = [
   {
@@ -127,24 +128,27 @@ function constantsTable(): MemoTable {
   );
 }
 
-function sources(): MemoTable {
+function sources({ flown }: Pick<MemoFacts, 'flown'>): MemoTable {
   return table(
     'Sources of the method',
     [words('Source', 100, true)],
-    Object.values({ ...references, ...weighingReferences, ...studyReferences }).map((source) =>
-      row([cell(source)]),
-    ),
+    Object.values({
+      ...references,
+      ...weighingReferences,
+      ...studyReferences,
+      ...(flown ? ascentReferences : {}),
+    }).map((source) => row([cell(source)])),
   );
 }
 
 /** How the figures come about: formulas, constants, sources. */
-export function methodBlocks(): MemoBlock[] {
+export function methodBlocks(facts: MemoFacts): MemoBlock[] {
   return [
     { kind: 'paragraph', text: [{ strong: 'Flight' }] },
     { kind: 'formulas', items: FLIGHT },
     { kind: 'paragraph', text: [{ strong: 'Weighing' }] },
     { kind: 'formulas', items: DECISION },
     constantsTable(),
-    sources(),
+    sources(facts),
   ];
 }
